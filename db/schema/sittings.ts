@@ -1,0 +1,230 @@
+import { sql } from 'drizzle-orm';
+import {
+  boolean,
+  check,
+  date,
+  foreignKey,
+  index,
+  integer,
+  jsonb,
+  pgTable,
+  primaryKey,
+  text,
+  unique,
+  uniqueIndex,
+  uuid,
+} from 'drizzle-orm/pg-core';
+import { createdAt, moment, rowId, schoolId, ticks } from './columns';
+import { practicals, rubricVersions } from './practicals';
+import { people } from './school';
+import { sections } from './sections';
+
+export const sittings = pgTable(
+  'sittings',
+  {
+    schoolId: schoolId(),
+    id: rowId(),
+    sectionId: uuid('section_id').notNull(),
+    practicalId: uuid('practical_id').notNull(),
+    rubricVersionId: uuid('rubric_version_id').notNull(),
+    state: text('state', { enum: ['open', 'published'] })
+      .notNull()
+      .default('open'),
+    dueOn: date('due_on', { mode: 'string' }),
+    openedBy: uuid('opened_by').notNull(),
+    openedAt: moment('opened_at').notNull().defaultNow(),
+  },
+  (t) => [
+    primaryKey({ columns: [t.schoolId, t.id] }),
+    foreignKey({ columns: [t.schoolId, t.sectionId], foreignColumns: [sections.schoolId, sections.id] }),
+    foreignKey({
+      columns: [t.schoolId, t.practicalId],
+      foreignColumns: [practicals.schoolId, practicals.id],
+    }),
+    foreignKey({
+      columns: [t.schoolId, t.rubricVersionId, t.practicalId],
+      foreignColumns: [rubricVersions.schoolId, rubricVersions.id, rubricVersions.practicalId],
+    }),
+    foreignKey({ columns: [t.schoolId, t.openedBy], foreignColumns: [people.schoolId, people.id] }),
+    uniqueIndex('sittings_practical_once').on(t.schoolId, t.sectionId, t.practicalId),
+    check('sittings_state', sql`${t.state} in ('open', 'published')`),
+  ],
+);
+
+/** `standing` tells why there is no number: only `zero` is one. It follows the events of its cell. */
+export const attempts = pgTable(
+  'attempts',
+  {
+    schoolId: schoolId(),
+    id: rowId(),
+    sittingId: uuid('sitting_id').notNull(),
+    studentId: uuid('student_id').notNull(),
+    number: integer('number').notNull(),
+    standing: text('standing', { enum: ['expected', 'absent', 'excused', 'zero'] })
+      .notNull()
+      .default('expected'),
+    daysLate: integer('days_late').notNull().default(0),
+    createdAt: createdAt(),
+  },
+  (t) => [
+    primaryKey({ columns: [t.schoolId, t.id] }),
+    foreignKey({ columns: [t.schoolId, t.sittingId], foreignColumns: [sittings.schoolId, sittings.id] }),
+    foreignKey({ columns: [t.schoolId, t.studentId], foreignColumns: [people.schoolId, people.id] }),
+    uniqueIndex('attempts_number').on(t.schoolId, t.sittingId, t.studentId, t.number),
+    unique('attempts_of_sitting').on(t.schoolId, t.id, t.sittingId),
+    index('attempts_student').on(t.schoolId, t.studentId),
+    check('attempts_number_positive', sql`${t.number} between 1 and 20`),
+    check('attempts_days_late', sql`${t.daysLate} >= 0`),
+    check('attempts_standing', sql`${t.standing} in ('expected', 'absent', 'excused', 'zero')`),
+  ],
+);
+
+/** Append-only. `side`: the bench's own record, or the student's own readings of the same cell. */
+export const readingEvents = pgTable(
+  'reading_events',
+  {
+    schoolId: schoolId(),
+    id: uuid('id').notNull(),
+    sittingId: uuid('sitting_id').notNull(),
+    attemptId: uuid('attempt_id').notNull(),
+    side: text('side', { enum: ['bench', 'own'] }).notNull(),
+    lineId: text('line_id').notNull(),
+    ordinal: integer('ordinal').notNull(),
+    what: text('what').notNull(),
+    value: jsonb('value').notNull(),
+    readingTicks: ticks('reading_ticks'),
+    typed: text('typed'),
+    unit: text('unit', { enum: ['in', 'mm'] }),
+    instrument: text('instrument'),
+    supersedes: uuid('supersedes').array().notNull().default(sql`'{}'`),
+    deviceId: uuid('device_id').notNull(),
+    sequence: integer('sequence').notNull(),
+    capturedAt: moment('captured_at').notNull(),
+    authorId: uuid('author_id').notNull(),
+    senderId: uuid('sender_id').notNull(),
+    flags: text('flags').array().notNull().default(sql`'{}'`),
+    receivedAt: moment('received_at').notNull().defaultNow(),
+  },
+  (t) => [
+    primaryKey({ columns: [t.schoolId, t.id] }),
+    foreignKey({
+      columns: [t.schoolId, t.attemptId, t.sittingId],
+      foreignColumns: [attempts.schoolId, attempts.id, attempts.sittingId],
+    }),
+    foreignKey({ columns: [t.schoolId, t.authorId], foreignColumns: [people.schoolId, people.id] }),
+    foreignKey({ columns: [t.schoolId, t.senderId], foreignColumns: [people.schoolId, people.id] }),
+    uniqueIndex('reading_events_sequence').on(t.schoolId, t.deviceId, t.sequence),
+    index('reading_events_attempt').on(t.schoolId, t.attemptId),
+    index('reading_events_sitting').on(t.schoolId, t.sittingId),
+    check('reading_events_side', sql`${t.side} in ('bench', 'own')`),
+    check('reading_events_ticks', sql`${t.readingTicks} is null or ${t.readingTicks} > 0`),
+    check('reading_events_ordinal', sql`${t.ordinal} between 0 and 200`),
+    check('reading_events_sequence_positive', sql`${t.sequence} >= 1`),
+  ],
+);
+
+/** Derived from the events by the version and engine named; can be rebuilt from them at any time. */
+export const scoreSheets = pgTable(
+  'score_sheets',
+  {
+    schoolId: schoolId(),
+    attemptId: uuid('attempt_id').notNull(),
+    side: text('side', { enum: ['bench', 'own'] }).notNull(),
+    rubricVersionId: uuid('rubric_version_id').notNull(),
+    engineVersion: integer('engine_version').notNull(),
+    recorded: jsonb('recorded').notNull(),
+    sheet: jsonb('sheet').notNull(),
+    scorePoints: integer('score_points'),
+    provisionalPoints: integer('provisional_points'),
+    totalPoints: integer('total_points').notNull(),
+    lostPoints: integer('lost_points').notNull(),
+    complete: boolean('complete').notNull(),
+    conflicts: integer('conflicts').notNull(),
+    finished: boolean('finished').notNull(),
+    lockedAt: moment('locked_at'),
+    measuredAt: moment('measured_at'),
+    updatedAt: moment('updated_at').notNull().defaultNow(),
+  },
+  (t) => [
+    primaryKey({ columns: [t.schoolId, t.attemptId, t.side] }),
+    foreignKey({ columns: [t.schoolId, t.attemptId], foreignColumns: [attempts.schoolId, attempts.id] }),
+    foreignKey({
+      columns: [t.schoolId, t.rubricVersionId],
+      foreignColumns: [rubricVersions.schoolId, rubricVersions.id],
+    }),
+    check('score_sheets_side', sql`${t.side} in ('bench', 'own')`),
+  ],
+);
+
+/** Whose pieces each device has on its bench now. */
+export const inHand = pgTable(
+  'in_hand',
+  {
+    schoolId: schoolId(),
+    sittingId: uuid('sitting_id').notNull(),
+    deviceId: uuid('device_id').notNull(),
+    personId: uuid('person_id').notNull(),
+    attemptId: uuid('attempt_id').notNull(),
+    since: moment('since').notNull().defaultNow(),
+    seenAt: moment('seen_at').notNull().defaultNow(),
+  },
+  (t) => [
+    primaryKey({ columns: [t.schoolId, t.sittingId, t.deviceId] }),
+    foreignKey({ columns: [t.schoolId, t.sittingId], foreignColumns: [sittings.schoolId, sittings.id] }),
+    foreignKey({ columns: [t.schoolId, t.personId], foreignColumns: [people.schoolId, people.id] }),
+    foreignKey({ columns: [t.schoolId, t.attemptId], foreignColumns: [attempts.schoolId, attempts.id] }),
+  ],
+);
+
+export const publications = pgTable(
+  'publications',
+  {
+    schoolId: schoolId(),
+    id: rowId(),
+    sittingId: uuid('sitting_id').notNull(),
+    number: integer('number').notNull(),
+    rubricVersionId: uuid('rubric_version_id').notNull(),
+    publishedBy: uuid('published_by').notNull(),
+    publishedAt: moment('published_at').notNull().defaultNow(),
+  },
+  (t) => [
+    primaryKey({ columns: [t.schoolId, t.id] }),
+    foreignKey({ columns: [t.schoolId, t.sittingId], foreignColumns: [sittings.schoolId, sittings.id] }),
+    foreignKey({
+      columns: [t.schoolId, t.rubricVersionId],
+      foreignColumns: [rubricVersions.schoolId, rubricVersions.id],
+    }),
+    foreignKey({ columns: [t.schoolId, t.publishedBy], foreignColumns: [people.schoolId, people.id] }),
+    uniqueIndex('publications_number').on(t.schoolId, t.sittingId, t.number),
+  ],
+);
+
+/** What a publication told each student; a later correction is another publication. */
+export const results = pgTable(
+  'results',
+  {
+    schoolId: schoolId(),
+    publicationId: uuid('publication_id').notNull(),
+    attemptId: uuid('attempt_id').notNull(),
+    status: text('status', { enum: ['scored', 'absent', 'excused', 'zero', 'not read'] }).notNull(),
+    scorePoints: integer('score_points'),
+    totalPoints: integer('total_points').notNull(),
+    bonusPoints: integer('bonus_points').notNull(),
+    predictedPoints: integer('predicted_points'),
+    measuredAt: moment('measured_at'),
+    sheet: jsonb('sheet'),
+    ownSheet: jsonb('own_sheet'),
+    judgement: jsonb('judgement'),
+  },
+  (t) => [
+    primaryKey({ columns: [t.schoolId, t.publicationId, t.attemptId] }),
+    foreignKey({
+      columns: [t.schoolId, t.publicationId],
+      foreignColumns: [publications.schoolId, publications.id],
+    }),
+    foreignKey({ columns: [t.schoolId, t.attemptId], foreignColumns: [attempts.schoolId, attempts.id] }),
+    index('results_attempt').on(t.schoolId, t.attemptId),
+    check('results_status', sql`${t.status} in ('scored', 'absent', 'excused', 'zero', 'not read')`),
+    check('results_number', sql`(${t.status} in ('scored', 'zero')) = (${t.scorePoints} is not null)`),
+  ],
+);
