@@ -11,8 +11,9 @@ import {
   text,
   uuid,
 } from 'drizzle-orm/pg-core';
+import { ROLES } from '@/lib/auth/roles';
 import { moment, rowId, schoolId } from './columns';
-import { people, ROLES, schools } from './school';
+import { people, schools } from './school';
 import { sections } from './sections';
 
 /** Append-only: every change, and every view of another person's record by staff. */

@@ -10,6 +10,7 @@ import {
   uniqueIndex,
   uuid,
 } from 'drizzle-orm/pg-core';
+import { ROLES } from '@/lib/auth/roles';
 import { createdAt, moment, rowId, schoolId } from './columns';
 
 export const schools = pgTable(
@@ -69,8 +70,6 @@ export const people = pgTable(
     ),
   ],
 );
-
-export const ROLES = ['teacher', 'student', 'head', 'aide', 'admin'] as const;
 
 export const personRoles = pgTable(
   'person_roles',
