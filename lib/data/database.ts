@@ -4,7 +4,7 @@ import { type Database, type DatabaseRole, openDatabase, type Transaction } from
 import { env } from '@/lib/env';
 
 // One pool a role and process; kept on globalThis so that reloading modules in development opens no more.
-const held: { trymarkPools?: Map<DatabaseRole, Database> } = globalThis;
+const held = globalThis as typeof globalThis & { trymarkPools?: Map<DatabaseRole, Database> };
 
 function pool(role: DatabaseRole): Database {
   const pools = held.trymarkPools ?? new Map<DatabaseRole, Database>();

@@ -1,0 +1,56 @@
+import { z } from 'zod';
+import { MAX_LENGTH } from '@/lib/length';
+
+/**
+ * A cell is one thing that can be recorded of an attempt. `what` names it:
+ * an axis or a check id of a piece, `piece` for the piece's state; with line '' and ordinal 0 a work check,
+ * or one of the attempt's own cells, whose names begin with `@` so that no check can be called the same.
+ */
+export interface Cell {
+  lineId: string;
+  ordinal: number;
+  what: string;
+}
+
+export const ATTEMPT_CELLS = ['@standing', '@finish', '@lock', '@receipt', '@days-late'] as const;
+
+export type Side = 'bench' | 'own';
+
+const id = z.string().regex(/^[a-z0-9][a-z0-9_-]{0,63}$/, 'An id has small letters, digits, - and _.');
+
+export const cellSchema = z.strictObject({
+  lineId: z.union([id, z.literal('')]),
+  ordinal: z.int().min(0).max(200),
+  what: z.union([id, z.enum(ATTEMPT_CELLS)]),
+});
+
+/** What a cell can hold. `cleared` takes a value back: the cell is unread again. */
+export const cellValueSchema = z.discriminatedUnion('kind', [
+  z.strictObject({ kind: z.literal('value'), ticks: z.int().positive().max(MAX_LENGTH) }),
+  z.strictObject({ kind: z.literal('gauged') }),
+  z.strictObject({ kind: z.literal('spoiled') }),
+  z.strictObject({ kind: z.literal('excused') }),
+  z.strictObject({ kind: z.literal('unreadable') }),
+  z.strictObject({ kind: z.literal('cleared') }),
+  z.strictObject({
+    kind: z.literal('state'),
+    state: z.enum(['present', 'missing', 'held', 'excused']),
+    note: z.string().max(120).optional(),
+  }),
+  z.strictObject({ kind: z.literal('level'), level: z.int().min(0).max(9) }),
+  z.strictObject({
+    kind: z.literal('standing'),
+    standing: z.enum(['expected', 'absent', 'excused', 'zero']),
+  }),
+  z.strictObject({ kind: z.literal('finish'), done: z.boolean() }),
+  z.strictObject({ kind: z.literal('lock'), locked: z.boolean(), receipt: z.string().max(40) }),
+  z.strictObject({ kind: z.literal('receipt'), receipt: z.string().max(40) }),
+  z.strictObject({ kind: z.literal('days-late'), days: z.int().min(0).max(365) }),
+]);
+
+export type CellValue = z.infer<typeof cellValueSchema>;
+
+/** One text for one cell, to use as a key. */
+export function cellKey(cell: Cell): string {
+  return `${cell.lineId}/${cell.ordinal}/${cell.what}`;
+}
