@@ -1,1 +1,3 @@
+export * from './schemas';
+export { ScoringError, type ScoringErrorCode } from './scoring-error';
 export * from './types';
