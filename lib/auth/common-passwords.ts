@@ -1,0 +1,51 @@
+/** Long passwords that people reach for first; compared without case, spaces and signs. Written for this product. */
+export const COMMON_PASSWORDS: ReadonlySet<string> = new Set(
+  `
+  123456789012345 1234567890123456 12345678901234567890 012345678901234 0123456789012345 098765432109876
+  123123123123123 121212121212121 112233445566778 1122334455667788 111222333444555 987654321987654
+  1q2w3e4r5t6y7u8 1q2w3e4r5t6y7u8i 1q2w3e4r5t6y7u8i9o 1q2w3e4r5t6y7u8i9o0p 1qaz2wsx3edc4rf 1qaz2wsx3edc4rfv
+  1qaz2wsx3edc4rfv5tgb qazwsxedcrfvtgb qazwsxedcrfvtgbyhn zaq12wsxcde34rfv zxcvbnmasdfghjkl qwertyuiopasdfgh
+  qwertyuiopasdfghjkl qwertyuiopasdfghjklzxcvbnm qwerty123456789 qwertyqwerty123 qwertz123456789 azertyuiopqsdfg
+  azertyuiopqsdfghjklm asdfghjklqwertyuiop asdfghjklzxcvbnm abcdefghijklmno abcdefghijklmnop
+  abcdefghijklmnopqrstuvwxyz abcdefg12345678 abc123abc123abc abcd1234abcd1234 a1b2c3d4e5f6g7h8
+  passwordpassword password12345678 password123456789 password1234567890 passwordpassword1 mypasswordispassword
+  mypassword12345 thisismypassword thisisapassword thisisthepassword passwordforschool newpassword1234
+  changemechangeme changeme1234567 changethispassword pleasechangeme1 temporarypassword defaultpassword
+  defaultpassword1 letmeinletmein1 letmeinpleasenow letmein123456789 pleaseletmein123 openthedoorplease
+  opensesameopensesame iforgotmypassword idontknowmypassword idontremember12 whatismypassword nopasswordneeded
+  donotforgetthis secretsecretsecret topsecret123456 thisisasecret123 trustno1trustno1 trustnobody12345
+  administrator123 administrator1234 administratoradministrator adminadminadmin adminadmin12345 rootrootrootroot
+  useruseruseruser testtesttesttest testing123456789 thisisatest12345 guestguestguest welcomewelcome1
+  welcome123456789 welcometotheschool welcometoschool welcomebacktoschool hellohellohello helloworld12345
+  helloworldhelloworld goodmorning1234 goodmorningworld goodnightmoon12 haveaniceday1234 happybirthdaytoyou
+  happybirthday12 happynewyear2024 happynewyear2025 happynewyear2026 happynewyear2027 merrychristmas1
+  merrychristmas123 iloveyouiloveyou iloveyouforever iloveyouverymuch iloveyousomuch1 iloveyou12345678
+  ilovemyfamily12 ilovemywife1234 ilovemyhusband1 ilovemychildren ilovemykids1234 ilovemydog12345 ilovemycat12345
+  ilovemyself1234 ilovejesus12345 jesuslovesme123 godisgood123456 godblessamerica inthenameofgod1 thankyoujesus12
+  iloveschool1234 ihateschool1234 ihatepasswords1 ihatethisplace1 ihatemondays123 ilovewoodworking ilovewoodshop12
+  iliketoworkwithwood measuretwicecutonce measuretwicecutonce1 cutoncemeasuretwice woodshopwoodshop woodworkingrules
+  woodworkingisfun woodworking12345 woodworkteacher highschool12345 highschoolteacher schoolschoolschool
+  teacherteacher1 teacherteacher123 teacher123456789 studentstudent1 studentstudent123 student123456789
+  springsummer2025 springsummer2026 summervacation1 summervacation2026 autumnwinter2026 mondaytuesdaywednesday
+  mondaytofriday1 januaryfebruary januaryfebruarymarch onetwothreefour onetwothreefourfive redorangeyellow
+  redgreenblueyellow threeblindmice1 twinkletwinklelittlestar maryhadalittlelamb thequickbrownfox
+  thequickbrownfoxjumps thequickbrownfoxjumpsoverthelazydog tobeornottobe12 tobeornottobethatisthequestion
+  correcthorsebattery correcthorsebatterystaple onceuponatime123 abracadabra12345 supercalifragilistic
+  supercalifragilisticexpialidocious footballfootball footballislife1 basketball12345 basketballislife
+  baseballbaseball soccersoccersoccer liverpoolliverpool chelseachelsea1 manchesterunited manchestercity1
+  realmadrid123456 barcelonabarcelona dallascowboys12 newyorkyankees1 chocolatechocolate chocolatecake123
+  sunshinesunshine sunshine12345678 princessprincess princess12345678 superman12345678 supermansuperman
+  batmanbatmanbatman spidermanspiderman starwarsstarwars maytheforcebewithyou harryharryharry
+  computercomputer computer12345678 internetinternet googlegooglegoogle microsoft1234567 samsungsamsung1
+  unitedstatesofamerica newyorknewyork1 losangeles12345 california123456 trymarktrymarktrymark
+  `
+    .trim()
+    .split(/\s+/),
+);
+
+/** Words that add nothing to a password, wherever they stand in it. */
+export const WORN_WORDS: readonly string[] =
+  `password passwort passphrase welcome letmein changeme secret qwerty asdf zxcv admin administrator teacher student
+  school highschool academy department login signin trymark woodshop woodwork`
+    .trim()
+    .split(/\s+/);
