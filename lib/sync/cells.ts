@@ -12,9 +12,19 @@ export interface Cell {
   what: string;
 }
 
-export const ATTEMPT_CELLS = ['@standing', '@finish', '@lock', '@receipt', '@days-late'] as const;
+export const ATTEMPT_CELLS = [
+  '@standing',
+  '@finish',
+  '@lock',
+  '@receipt',
+  '@days-late',
+  /** What closed jaws showed while this attempt was in hand: every check stands beside the others. */
+  '@zero',
+] as const;
 
-export type Side = 'bench' | 'own';
+export const SIDES = ['bench', 'own'] as const;
+
+export type Side = (typeof SIDES)[number];
 
 const id = z.string().regex(/^[a-z0-9][a-z0-9_-]{0,63}$/, 'An id has small letters, digits, - and _.');
 
@@ -46,6 +56,7 @@ export const cellValueSchema = z.discriminatedUnion('kind', [
   z.strictObject({ kind: z.literal('lock'), locked: z.boolean(), receipt: z.string().max(40) }),
   z.strictObject({ kind: z.literal('receipt'), receipt: z.string().max(40) }),
   z.strictObject({ kind: z.literal('days-late'), days: z.int().min(0).max(365) }),
+  z.strictObject({ kind: z.literal('zero'), ticks: z.int().min(-MAX_LENGTH).max(MAX_LENGTH) }),
 ]);
 
 export type CellValue = z.infer<typeof cellValueSchema>;
@@ -53,4 +64,9 @@ export type CellValue = z.infer<typeof cellValueSchema>;
 /** One text for one cell, to use as a key. */
 export function cellKey(cell: Cell): string {
   return `${cell.lineId}/${cell.ordinal}/${cell.what}`;
+}
+
+/** Equal for equal values, whatever the order of their keys. */
+export function valueKey(value: CellValue): string {
+  return JSON.stringify(Object.entries(value).sort(([a], [b]) => (a < b ? -1 : 1)));
 }

@@ -1,5 +1,5 @@
 import { type Attempt, AXES, type Piece, type Reading } from '@/lib/scoring';
-import { type Cell, type CellValue, cellKey, type Side } from './cells';
+import { type Cell, type CellValue, cellKey, type Side, valueKey } from './cells';
 
 /** As much of an event as the state of its cell depends on. */
 export interface CellEvent {
@@ -64,12 +64,10 @@ function cellState<Event extends CellEvent>(events: Event[]): CellState<Event> {
   return { cell: first.cell, heads: [first, ...others], value: agreed ? first.value : null };
 }
 
-/** Equal for equal values, whatever the order of their keys. */
-function valueKey(value: CellValue): string {
-  return JSON.stringify(Object.entries(value).sort(([a], [b]) => (a < b ? -1 : 1)));
-}
-
-/** One side's record of an attempt as the engine takes it. A cell in conflict counts as not read. */
+/**
+ * One side's record of an attempt as the engine takes it. A cell in conflict counts as not read. At the bench a piece
+ * that one person called missing while another measured it is in conflict too: marking it missing clears its sizes.
+ */
 export function deriveAttempt(events: readonly CellEvent[], side: Side): DerivedAttempt {
   const cells = deriveCells(events, side);
   const derived: DerivedAttempt = {
@@ -84,12 +82,15 @@ export function deriveAttempt(events: readonly CellEvent[], side: Side): Derived
   };
   const pieces = new Map<string, Piece>();
   for (const state of cells.values()) {
+    if (state.cell.what === '@zero') continue;
     if (state.value === null) derived.conflicts.push(state.cell);
     else if (state.cell.lineId === '') applyToAttempt(derived, state, state.value);
     else applyToPiece(derived, pieces, state.cell, state.value);
     if (!state.cell.what.startsWith('@')) noteTime(derived, state);
   }
   derived.attempt.pieces = [...pieces.values()].filter(isRecorded);
+  if (side === 'bench')
+    derived.conflicts.push(...derived.attempt.pieces.filter(isContradicted).map(pieceCell));
   return derived;
 }
 
@@ -153,4 +154,12 @@ function isRecorded(piece: Piece): boolean {
   return (
     piece.state !== 'present' || Object.keys(piece.sizes).length > 0 || Object.keys(piece.checks).length > 0
   );
+}
+
+function isContradicted(piece: Piece): boolean {
+  return piece.state === 'missing' && Object.keys(piece.sizes).length > 0;
+}
+
+function pieceCell({ lineId, ordinal }: Piece): Cell {
+  return { lineId, ordinal, what: 'piece' };
 }
