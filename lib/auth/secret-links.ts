@@ -7,9 +7,6 @@ export const LINK_LIFE_MS = {
   setup: 7 * 24 * 3_600_000,
 } as const;
 
-/** Shape of a link's secret; anything else cannot be one. */
-export const SECRET_PATTERN = /^[\w-]{43}$/;
-
 /** A new secret of 256 random bits, as it stands in the link. */
 export function makeSecret(): string {
   return randomBytes(32).toString('base64url');

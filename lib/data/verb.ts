@@ -45,7 +45,8 @@ interface Verb<Schema extends z.ZodType, View> {
   run(context: Context<z.output<Schema>>): Promise<View>;
 }
 
-class Refusal extends Error {
+/** Ends a verb; thrown inside its transaction, so that what was written is rolled back. */
+export class Refusal extends Error {
   constructor(readonly problem: Problem) {
     super(problem.message);
   }
