@@ -1,0 +1,24 @@
+import { MARK_PATH } from './mark-path';
+
+/** The product's mark. Its tail is made to stand on a true edge: set it so that its foot meets a line. */
+export function Mark({ className }: { className?: string }) {
+  return (
+    <svg aria-hidden="true" viewBox="6 4 92 96" className={className} fill="currentColor">
+      <path d={MARK_PATH} />
+    </svg>
+  );
+}
+
+/** Mark and wordmark on one true edge. Sized by the font size of its place. */
+export function Logo({ edge = false, className }: { edge?: boolean; className?: string }) {
+  return (
+    <span className={className}>
+      <span
+        className={`inline-flex items-end leading-none ${edge ? 'border-b-[0.06em] border-current pr-[0.06em] pl-[0.12em]' : ''}`}
+      >
+        <Mark className="mr-[0.34em] h-[0.84em] w-auto shrink-0" />
+        <span className="-mb-[0.135em] font-title font-[640]">Trymark</span>
+      </span>
+    </span>
+  );
+}
