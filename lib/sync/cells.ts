@@ -34,6 +34,13 @@ export const cellSchema = z.strictObject({
   what: z.union([id, z.enum(ATTEMPT_CELLS)]),
 });
 
+/** Text that PostgreSQL can keep: no control characters and no half of a surrogate pair. */
+export const shortText = (most: number) =>
+  z
+    .string()
+    .max(most)
+    .regex(/^[^\p{Cc}\p{Cs}]*$/u, 'This text has characters that cannot be kept.');
+
 /** What a cell can hold. `cleared` takes a value back: the cell is unread again. */
 export const cellValueSchema = z.discriminatedUnion('kind', [
   z.strictObject({ kind: z.literal('value'), ticks: z.int().positive().max(MAX_LENGTH) }),
@@ -45,7 +52,7 @@ export const cellValueSchema = z.discriminatedUnion('kind', [
   z.strictObject({
     kind: z.literal('state'),
     state: z.enum(['present', 'missing', 'held', 'excused']),
-    note: z.string().max(120).optional(),
+    note: shortText(120).optional(),
   }),
   z.strictObject({ kind: z.literal('level'), level: z.int().min(0).max(9) }),
   z.strictObject({
@@ -53,8 +60,8 @@ export const cellValueSchema = z.discriminatedUnion('kind', [
     standing: z.enum(['expected', 'absent', 'excused', 'zero']),
   }),
   z.strictObject({ kind: z.literal('finish'), done: z.boolean() }),
-  z.strictObject({ kind: z.literal('lock'), locked: z.boolean(), receipt: z.string().max(40) }),
-  z.strictObject({ kind: z.literal('receipt'), receipt: z.string().max(40) }),
+  z.strictObject({ kind: z.literal('lock'), locked: z.boolean(), receipt: shortText(40) }),
+  z.strictObject({ kind: z.literal('receipt'), receipt: shortText(40) }),
   z.strictObject({ kind: z.literal('days-late'), days: z.int().min(0).max(365) }),
   z.strictObject({ kind: z.literal('zero'), ticks: z.int().min(-MAX_LENGTH).max(MAX_LENGTH) }),
 ]);
