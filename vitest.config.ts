@@ -1,11 +1,13 @@
 import { fileURLToPath } from 'node:url';
 import { defineConfig } from 'vitest/config';
 
-const root = fileURLToPath(new URL('.', import.meta.url));
+const root = fileURLToPath(new URL('.', import.meta.url)).replace(/\/$/, '');
 const resolve = {
   alias: {
     '@': root,
-    'server-only': fileURLToPath(new URL('./node_modules/next/dist/compiled/server-only/empty.js', import.meta.url)),
+    'server-only': fileURLToPath(
+      new URL('./node_modules/next/dist/compiled/server-only/empty.js', import.meta.url),
+    ),
   },
 };
 
@@ -20,6 +22,7 @@ export default defineConfig({
           include: ['tests/integration/**/*.test.ts'],
           environment: 'node',
           globalSetup: ['tests/support/global-setup.ts'],
+          setupFiles: ['tests/support/integration-file.ts'],
           maxWorkers: 2,
           testTimeout: 20_000,
           hookTimeout: 60_000,
