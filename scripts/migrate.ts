@@ -1,5 +1,5 @@
 import { readFileSync } from 'node:fs';
-import { fileURLToPath, pathToFileURL } from 'node:url';
+import { fileURLToPath } from 'node:url';
 import { drizzle } from 'drizzle-orm/postgres-js';
 import { migrate } from 'drizzle-orm/postgres-js/migrator';
 import { Logger, runMigrations } from 'graphile-worker';
@@ -22,12 +22,3 @@ export async function migrateDatabase(url: string): Promise<void> {
     await owner.end();
   }
 }
-
-async function main(): Promise<void> {
-  const url = process.env.DATABASE_URL;
-  if (!url) throw new Error('DATABASE_URL is missing: it names the database to migrate.');
-  await migrateDatabase(url);
-  console.log('The database is up to date.');
-}
-
-if (import.meta.url === pathToFileURL(process.argv[1] ?? '').href) await main();
