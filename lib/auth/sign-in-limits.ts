@@ -97,22 +97,35 @@ export async function forgetFailures(account: string): Promise<void> {
   await Promise.all([limits().failures.delete(account), limits().waits.delete(account)]);
 }
 
+/** The counter of one's own account page, where the present password is asked for again. */
+export function ownKey(personId: string): string {
+  return createHash('sha256').update(`own\n${personId}`, 'utf8').digest('base64url');
+}
+
 /** Keys of the counters that `forgetFailures` clears, for clearing them inside another transaction. */
 export function counterKeys(account: string): string[] {
   return [limits().failures.getKey(account), limits().waits.getKey(account)];
 }
 
-/** Whether another reset mail may go to this account within the hour. */
-export async function mayMailReset(account: string): Promise<boolean> {
-  try {
-    await limits().resets.consume(account);
-    return true;
-  } catch (full) {
-    if (full instanceof RateLimiterRes) return false;
-    throw full;
-  }
+/**
+ * Counts a request for a reset. `account`: whether a mail may still go there this hour; `address`: seconds to wait
+ * when too many came from one address, null otherwise.
+ */
+export async function mayAskReset(
+  account: string,
+  address: string,
+): Promise<{ account: boolean; address: number | null }> {
+  const { addresses, resets } = limits();
+  const crowd = await addresses.penalty(address);
+  if (crowd.consumedPoints > ADDRESS_FAILURES) return { account: false, address: waitSeconds(crowd) };
+  const { consumedPoints } = await resets.penalty(account);
+  return { account: consumedPoints <= RESET_MAILS_AN_HOUR, address: null };
 }
 
 function refused(counter: RateLimiterRes): TryAnswer {
-  return { allowed: false, waitSeconds: Math.max(1, Math.ceil(counter.msBeforeNext / 1000)) };
+  return { allowed: false, waitSeconds: waitSeconds(counter) };
+}
+
+function waitSeconds(counter: RateLimiterRes): number {
+  return Math.max(1, Math.ceil(counter.msBeforeNext / 1000));
 }

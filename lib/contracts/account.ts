@@ -58,6 +58,8 @@ export const changePasswordInput = z.object({
   password: typedPassword('a new one'),
 });
 
+export const choosePassphraseInput = z.object({ password: typedPassword('a passphrase') });
+
 export const switchRoleInput = z.object({ role: z.enum(ROLES, 'Choose a role.') });
 
 export const resetPassphraseInput = z.object({ studentId: z.uuid() });

@@ -1,0 +1,79 @@
+import { aliasedTable, and, asc, count, desc, eq, sql } from 'drizzle-orm';
+import type { Transaction } from '@/db/client';
+import { accessLog, people } from '@/db/schema';
+
+export interface LogFilter {
+  /** First and last day, in the school's own time zone. */
+  from?: string | undefined;
+  to?: string | undefined;
+  action?: string | undefined;
+  actorId?: string | undefined;
+  aboutPersonId?: string | undefined;
+}
+
+const actors = aliasedTable(people, 'log_actors');
+const subjects = aliasedTable(people, 'log_subjects');
+
+function filtered(schoolId: string, timeZone: string, filter: LogFilter) {
+  const { from, to, action, actorId, aboutPersonId } = filter;
+  return and(
+    eq(accessLog.schoolId, schoolId),
+    from ? sql`${accessLog.at} >= ${from}::date::timestamp at time zone ${timeZone}` : undefined,
+    to ? sql`${accessLog.at} < (${to}::date + 1)::timestamp at time zone ${timeZone}` : undefined,
+    action ? eq(accessLog.action, action) : undefined,
+    actorId ? eq(accessLog.actorId, actorId) : undefined,
+    aboutPersonId ? eq(accessLog.aboutPersonId, aboutPersonId) : undefined,
+  );
+}
+
+/** Entries of the access log, the newest first, with the names of who acted and whom it was about. */
+export async function selectLog(
+  tx: Transaction,
+  { id: schoolId, timeZone }: { id: string; timeZone: string },
+  filter: LogFilter,
+  { page, pageSize }: { page: number; pageSize: number },
+) {
+  const where = filtered(schoolId, timeZone, filter);
+  const rows = await tx
+    .select({
+      id: accessLog.id,
+      at: accessLog.at,
+      action: accessLog.action,
+      actorId: accessLog.actorId,
+      actorRole: accessLog.actorRole,
+      actorName: sql<string | null>`btrim(${actors.givenName} || ' ' || ${actors.familyName})`,
+      aboutPersonId: accessLog.aboutPersonId,
+      aboutName: sql<string | null>`btrim(${subjects.givenName} || ' ' || ${subjects.familyName})`,
+      subjectKind: accessLog.subjectKind,
+      details: accessLog.details,
+    })
+    .from(accessLog)
+    .leftJoin(actors, and(eq(actors.schoolId, accessLog.schoolId), eq(actors.id, accessLog.actorId)))
+    .leftJoin(
+      subjects,
+      and(eq(subjects.schoolId, accessLog.schoolId), eq(subjects.id, accessLog.aboutPersonId)),
+    )
+    .where(where)
+    .orderBy(desc(accessLog.at), desc(accessLog.id))
+    .limit(pageSize)
+    .offset((page - 1) * pageSize);
+  const [total] = await tx.select({ found: count() }).from(accessLog).where(where);
+  return { rows, total: total?.found ?? 0 };
+}
+
+/** The actions and the people that occur in the log, to choose from. */
+export async function selectLogChoices(tx: Transaction, schoolId: string) {
+  const ofSchool = eq(accessLog.schoolId, schoolId);
+  const actions = await tx
+    .selectDistinct({ action: accessLog.action })
+    .from(accessLog)
+    .where(ofSchool)
+    .orderBy(asc(accessLog.action));
+  const who = await tx
+    .selectDistinct({ personId: people.id, givenName: people.givenName, familyName: people.familyName })
+    .from(accessLog)
+    .innerJoin(people, and(eq(people.schoolId, accessLog.schoolId), eq(people.id, accessLog.actorId)))
+    .where(ofSchool)
+    .orderBy(asc(people.familyName), asc(people.givenName));
+  return { actions: actions.map(({ action }) => action), who };
+}
