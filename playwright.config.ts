@@ -1,4 +1,5 @@
 import { defineConfig } from 'playwright/test';
+import { chromiumLaunch } from './scripts/setup/chromium.mjs';
 
 const baseURL = process.env.E2E_BASE_URL;
 if (!baseURL)
@@ -17,16 +18,6 @@ export default defineConfig({
     actionTimeout: 10_000,
     navigationTimeout: 20_000,
     trace: 'retain-on-failure',
-    launchOptions: {
-      executablePath: '/usr/bin/chromium',
-      args: [
-        '--no-sandbox',
-        '--disable-gpu',
-        '--disable-background-networking',
-        '--disable-component-update',
-        '--disable-sync',
-        '--no-first-run',
-      ],
-    },
+    launchOptions: chromiumLaunch,
   },
 });

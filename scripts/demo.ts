@@ -63,6 +63,18 @@ async function recreateDatabase(url: string): Promise<void> {
   await migrateDatabase(url);
 }
 
+/** The accounts of a demo that has been loaded. */
+export async function demoAccountsOf(url: string): Promise<DemoAccount[]> {
+  const owner = postgres(url, { max: 1, onnotice: () => {} });
+  try {
+    const state = await demoState(owner);
+    if (typeof state === 'string') throw new Error('There is no demo in this database.');
+    return state.accounts;
+  } finally {
+    await owner.end();
+  }
+}
+
 /** The demo's accounts as lines for the terminal. */
 export function accountLines(accounts: DemoAccount[]): string[] {
   const width = Math.max(...accounts.map(({ name }) => name.length));

@@ -1,111 +1,13 @@
 import { isDeepStrictEqual } from 'node:util';
-import { TICKS_PER_INCH } from '@/lib/length';
-import {
-  type Attempt,
-  attemptSchema,
-  type Piece,
-  type Rescored,
-  type Rubric,
-  rescore,
-  rubricSchema,
-  type SizeRule,
-} from '@/lib/scoring';
+import { type Attempt, type Rescored, type Rubric, rescore } from '@/lib/scoring';
 import { scoreByOracle } from '@/tests/support/scoring-oracle';
-import { layOutBare, scoreBare } from './bare-loop';
+import { layOutBare, loseBare } from './rescore/bare-loop';
+import { makeAttempts, makeRubric } from './rescore/practical';
 
-const SEED = 20_261_201;
-const LINES = 8;
-const QUANTITY = 2;
-const ATTEMPTS = 1000;
 const ROUNDS = 5;
 const LEAST_OVER_ORACLE = 25;
 const AIM_OVER_ORACLE = 50;
 const AIM_OF_BARE = 4;
-
-/** mulberry32: a small seeded generator, so that every run marks the same work. */
-function makeRandom(seed: number): () => number {
-  let state = seed;
-  return () => {
-    state = (state + 0x6d2b79f5) | 0;
-    let mixed = Math.imul(state ^ (state >>> 15), 1 | state);
-    mixed = (mixed + Math.imul(mixed ^ (mixed >>> 7), 61 | mixed)) ^ mixed;
-    return ((mixed ^ (mixed >>> 14)) >>> 0) / 2 ** 32;
-  };
-}
-
-const sixtyFourths = (count: number) => (count * TICKS_PER_INCH) / 64;
-
-function makeRubric(): Rubric {
-  const bands = [2, 4, 6].map((within, at) => ({ within: sixtyFourths(within), lose: at * 100 }));
-  const rule: SizeRule = { over: bands, under: bands, beyondOver: 300, beyondUnder: 300, cap: null };
-  const check = (id: string) => ({
-    id,
-    label: id,
-    levels: [
-      { label: 'pass', lose: 0 },
-      { label: 'fail', lose: 100 },
-    ],
-    assume: 0,
-  });
-  return rubricSchema.parse({
-    unit: 'in',
-    basis: 'worth',
-    start: null,
-    outOf: 10_000,
-    floor: 0,
-    roundTo: 100,
-    readTo: null,
-    margin: (2 * TICKS_PER_INCH) / 1000,
-    grossLimit: sixtyFourths(16),
-    lines: Array.from({ length: LINES }, (_, at) => ({
-      id: `line-${at + 1}`,
-      label: `Line ${at + 1}`,
-      quantity: QUANTITY,
-      target: { thickness: sixtyFourths(48), width: sixtyFourths(52 + 8 * at), length: sixtyFourths(192 + 32 * at) },
-      worth: 900,
-      missing: 900,
-      sizes: { thickness: rule, width: rule, length: rule },
-      checks: [check('square'), check('surface')],
-      swap: true,
-      set: 'each',
-    })),
-    workChecks: [],
-    late: null,
-    ceiling: 102,
-  });
-}
-
-function makeAttempts(rubric: Rubric, random: () => number): Attempt[] {
-  const read = (target: number) => ({
-    kind: 'value',
-    ticks: target + Math.round((random() + random() + random() - 1.5) * sixtyFourths(10)),
-  });
-  const makePieces = (line: Rubric['lines'][number]) =>
-    Array.from({ length: line.quantity }, (_, at) => {
-      const thickness = read(line.target.thickness);
-      const width = read(line.target.width);
-      const turned = random() < 0.2;
-      return {
-        lineId: line.id,
-        ordinal: at + 1,
-        state: 'present',
-        sizes: {
-          thickness: turned ? width : thickness,
-          width: turned ? thickness : width,
-          length: read(line.target.length),
-        },
-        checks: { square: random() < 0.1 ? 1 : 0, surface: random() < 0.1 ? 1 : 0 },
-      };
-    });
-  const recorded = Array.from({ length: ATTEMPTS }, () => ({
-    pieces: rubric.lines.flatMap(makePieces),
-    work: {},
-    bonus: 0,
-    daysLate: 0,
-  }));
-  // Through JSON and the schema, as attempts come from storage.
-  return attemptSchema.array().parse(JSON.parse(JSON.stringify(recorded)));
-}
 
 function rescoreByOracle(rubric: Rubric, attempts: readonly Attempt[]): Rescored[] {
   return attempts.map((attempt) => {
@@ -124,3 +26,33 @@ function time<Result>(run: () => Result): { result: Result; milliseconds: number
   }).toSorted((a, b) => a - b);
   return { result, milliseconds: times[Math.floor(ROUNDS / 2)] ?? Number.NaN };
 }
+
+function show(label: string, milliseconds: number): void {
+  console.log(`${label.padEnd(34)} ${milliseconds.toFixed(2).padStart(9)} ms`);
+}
+
+const rubric = makeRubric();
+const attempts = makeAttempts(rubric);
+const flat = layOutBare(rubric, attempts);
+
+const product = time(() => rescore(rubric, attempts));
+const bare = time(() => loseBare(flat));
+const oracle = time(() => rescoreByOracle(rubric, attempts));
+
+const sameAsOracle = isDeepStrictEqual(product.result, oracle.result);
+const sameAsBare = product.result.every(({ lost }, at) => lost === bare.result[at]);
+const overOracle = oracle.milliseconds / product.milliseconds;
+const ofBare = product.milliseconds / bare.milliseconds;
+
+console.log(`${attempts.length} attempts, 8 lines of 2, 3 bands, swap, 2 checks; median of ${ROUNDS}`);
+show('rescore', product.milliseconds);
+show('oracle in fractions', oracle.milliseconds);
+show('bare loop over typed arrays', bare.milliseconds);
+console.log(
+  `faster than the oracle: ${overOracle.toFixed(1)} times (at least ${LEAST_OVER_ORACLE}, aim ${AIM_OVER_ORACLE})`,
+);
+console.log(`time of the bare loop: ${ofBare.toFixed(2)} times (aim at most ${AIM_OF_BARE})`);
+console.log(
+  `same results as the oracle: ${sameAsOracle ? 'yes' : 'NO'}; same losses as the bare loop: ${sameAsBare ? 'yes' : 'NO'}`,
+);
+if (!sameAsOracle || !sameAsBare || overOracle < LEAST_OVER_ORACLE) process.exitCode = 1;

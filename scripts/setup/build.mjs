@@ -97,7 +97,9 @@ async function build(id, folder) {
   if (before) writeFileSync(generated, before);
   else rmSync(generated, { force: true });
   rmSync(join(root, settings), { force: true });
-  if (code !== 0) throw new SetupError(`The build failed:\n${output}`);
+  if (code === 0) return;
+  rmSync(join(root, folder), { recursive: true, force: true });
+  throw new SetupError(`The build failed:\n${output}`);
 }
 
 /** A build reads no settings, so that the same sources give the same build whoever makes it. */

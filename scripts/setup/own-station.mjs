@@ -1,6 +1,7 @@
+import { join } from 'node:path';
 import { openCluster, openFleetingCluster } from './cluster.mjs';
 import { ensureNodeModules, ensurePostgres } from './packages.mjs';
-import { portIsFree } from './places.mjs';
+import { ensureDataFolder, portIsFree } from './places.mjs';
 import { forgetRunning, noteRunning, runningNow } from './running.mjs';
 import { SetupError, say } from './say.mjs';
 import { localSecrets } from './secrets.mjs';
@@ -26,7 +27,8 @@ export async function openOwnStation(crew, { name, port, fleeting = false }) {
       `PostgreSQL ${cluster.wasRunning ? 'runs already' : 'started'} on 127.0.0.1:${cluster.port}, its data in ${cluster.folder}`,
     );
   }
-  const { settings, ready } = await startServices(crew, { folder: ['services', cluster.name], fleeting });
+  const folder = fleeting ? join(cluster.folder, 'services') : ensureDataFolder('services', name);
+  const { settings, ready } = await startServices(crew, { folder, fleeting });
   const [databaseUrl] = await Promise.all([ensureDatabase(cluster), ready]);
   return {
     cluster,

@@ -1,6 +1,6 @@
 import { setTimeout as wait } from 'node:timers/promises';
 import { markInUse } from './build.mjs';
-import { ensureDataFolder, freePort, freePortForRun } from './places.mjs';
+import { freePort, freePortForRun } from './places.mjs';
 import { tryRun, typescriptCommand, typescriptEnv } from './run.mjs';
 import { SetupError, say } from './say.mjs';
 import { localSecrets } from './secrets.mjs';
@@ -40,7 +40,7 @@ export async function startServices(crew, { folder, fleeting = false }) {
     env: typescriptEnv({
       ...process.env,
       ...settings,
-      SERVICES_FOLDER: ensureDataFolder(...folder),
+      SERVICES_FOLDER: folder,
       SERVICES_SMTP_PORT: String(smtp),
       SERVICES_MAILBOX_PORT: String(mailbox),
       SERVICES_S3_PORT: String(s3),

@@ -1,0 +1,34 @@
+import type { Page } from 'playwright/test';
+import type { DemoAccount } from '../demo';
+
+export type ScreenRole = 'public' | DemoAccount['role'];
+
+/**
+ * A screen of the product, for a picture of it in each size.
+ *
+ * To add one, add a line to the list below: who sees it, a name for its file, and its path. Where the path is not
+ * known beforehand (a sitting, a student), give `go` instead: it starts on the role's home and walks there as a
+ * person would, by links and buttons. The demo is the same every time, so titles and names can be relied on.
+ */
+export type Screen = { role: ScreenRole; name: string } & (
+  | { path: string }
+  | { go: (page: Page) => Promise<void> }
+);
+
+export const SCREENS: Screen[] = [
+  { role: 'public', name: 'sign-in', path: '/sign-in' },
+  {
+    role: 'public',
+    name: 'sign-in-student',
+    go: async (page) => {
+      await page.goto('/sign-in');
+      await page.getByText('student', { exact: true }).click();
+    },
+  },
+  { role: 'public', name: 'not-found', path: '/no-such-page' },
+  { role: 'teacher', name: 'home', path: '/' },
+  { role: 'student', name: 'home', path: '/' },
+  { role: 'head', name: 'home', path: '/' },
+  { role: 'aide', name: 'home', path: '/' },
+  { role: 'admin', name: 'home', path: '/' },
+];
