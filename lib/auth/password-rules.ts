@@ -54,7 +54,7 @@ function repeats(plain: string): boolean {
 }
 
 function isRunOfKeys(plain: string): boolean {
-  return plain.length - withoutRuns(plain).length >= plain.length - 3;
+  return plain.length > RUN_MIN && withoutRuns(plain).length < RUN_MIN;
 }
 
 function withoutRuns(plain: string): string {
