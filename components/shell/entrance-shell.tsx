@@ -14,7 +14,7 @@ interface EntranceShellProps {
 export function EntranceShell({ title, titleBlock, children }: EntranceShellProps) {
   return (
     <SheetBorder className="overflow-hidden">
-      <div className="grid flex-1 grid-cols-[minmax(0,1fr)] gap-x-12 lg:grid-cols-[minmax(0,1fr)_21rem]">
+      <div className="grid flex-1 grid-cols-[minmax(0,1fr)] gap-x-12 max-lg:grid-rows-[auto_1fr] lg:grid-cols-[minmax(0,1fr)_21rem]">
         <div className="relative pt-6 max-lg:pb-6 lg:pt-8">
           <p className="text-[2.75rem] lg:text-[5.4rem]">
             <Logo edge />

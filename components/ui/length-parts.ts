@@ -45,6 +45,12 @@ export function lengthAsText(ticks: Length, unit: Unit, style: LengthStyle = {},
     : formatLength(ticks, { unit, ...chosen }).replace('-', '−');
 }
 
+/** A deviation in short plain words: "1/32 over", "1/16 under", "on target". */
+export function deviationAsText(ticks: Length, unit: Unit, style: LengthStyle = {}): string {
+  if (ticks === 0) return 'on target';
+  return `${lengthAsText(Math.abs(ticks), unit, style)} ${ticks > 0 ? 'over' : 'under'}`;
+}
+
 /** Takes a length apart for setting: sign, whole or decimal figure, fraction. */
 export function lengthParts(ticks: Length, unit: Unit, style: LengthStyle = {}, signed = false): LengthParts {
   const text = lengthAsText(ticks, unit, style, signed);
