@@ -1,29 +1,44 @@
 import { ScoringError } from './scoring-error';
-import type { CheckList } from './worksheet';
+import type { Piece, Points } from './types';
+import type { PricedCheck, PricedChecks } from './worksheet';
 
-const UNKNOWN = -1;
-
-/** Prices what was recorded of a list of checks. `where` names the list in a refusal. */
-export function markChecks(list: CheckList, recorded: Record<string, number>, where: () => string): void {
-  list.levels.fill(UNKNOWN);
-  for (const id of Object.keys(recorded)) recordLevel(list, id, recorded[id], where);
-  list.lose = 0;
-  list.unread = 0;
-  list.checks.forEach((check, place) => {
-    if (list.levels[place] === UNKNOWN) list.levels[place] = check.assume;
-    const lose = check.loses[list.levels[place] ?? UNKNOWN];
-    if (lose === undefined) list.unread += 1;
-    else list.lose += lose;
-  });
+/** What a list of checks came to; overwritten by every call. */
+export interface CheckTally {
+  uncapped: Points;
+  unread: number;
 }
 
-function recordLevel(list: CheckList, id: string, level: number | undefined, where: () => string): void {
-  const place = list.places.get(id);
-  if (place === undefined) {
-    throw new ScoringError('unknown-check', `${where()}: the rubric has no check “${id}” here.`);
+/** `piece` is null where the work checks are meant. */
+function refuse(code: ScoringError['code'], piece: Piece | null, text: string): never {
+  const where = piece === null ? 'Work' : `Piece ${piece.ordinal} of “${piece.lineId}”`;
+  throw new ScoringError(code, `${where}: ${text}`);
+}
+
+/** Checks are mostly recorded in the rubric's order, so the one after the last is tried first. */
+function findCheck(checks: PricedChecks, id: string, guess: number): PricedCheck | undefined {
+  const next = checks.list[guess];
+  return next?.id === id ? next : checks.byId.get(id);
+}
+
+/** Adds up a list of checks: recorded levels take the place of assumed ones, unknown ones are refused. */
+export function markChecks(
+  checks: PricedChecks,
+  recorded: Record<string, number>,
+  piece: Piece | null,
+  tally: CheckTally,
+): void {
+  let { lose, unread } = checks;
+  let guess = 0;
+  for (const id of Object.keys(recorded)) {
+    const check = findCheck(checks, id, guess);
+    if (check === undefined) refuse('unknown-check', piece, `the rubric has no check “${id}” here.`);
+    const level = recorded[id];
+    const price = level === undefined ? undefined : check.loses[level];
+    if (price === undefined) refuse('level-out-of-range', piece, `check “${id}” has no level ${level}.`);
+    lose += price - (check.assumed ?? 0);
+    if (check.assumed === null) unread -= 1;
+    guess += 1;
   }
-  if (level === undefined || list.checks[place]?.loses[level] === undefined) {
-    throw new ScoringError('level-out-of-range', `${where()}: check “${id}” has no level ${level}.`);
-  }
-  list.levels[place] = level;
+  tally.uncapped = lose;
+  tally.unread = unread;
 }

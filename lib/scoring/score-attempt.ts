@@ -19,10 +19,10 @@ import { listUnread, writeChecks, writePiece } from './write-sheet';
 export function scoreAttempt(rubric: Rubric, attempt: Attempt): ScoreSheet {
   const sheet = layOutWorksheet(rubric);
   const { complete, possible, lost, raw, total, provisional } = markAttempt(sheet, attempt);
-  const pieces = sheet.lines.flatMap((marks) =>
-    marks.pieces.map((mark, place) => writePiece(sheet, marks, mark, place)),
+  const pieces = sheet.lines.flatMap((priced) =>
+    priced.marks.map((mark, at) => writePiece(sheet, priced, mark, at + 1, attempt.adjust)),
   );
-  const work = writeChecks(sheet.work);
+  const work = writeChecks(sheet.workChecks, attempt.work);
   return {
     complete,
     unread: listUnread(pieces, work),

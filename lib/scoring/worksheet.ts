@@ -15,31 +15,25 @@ export interface Steps {
   loses: Float64Array;
 }
 
-/** What one dimension of one piece came to. `step` counts only for a value. */
-export interface SizeMark {
-  kind: 'value' | 'gauged' | 'spoiled' | 'excused' | 'unread';
-  reading: Length;
-  deviation: Length;
-  step: number;
-  gross: boolean;
-  lose: Points;
+/** A check with the price of each level; `assumed` is the price of the level `assume`. */
+export interface PricedCheck {
+  id: string;
+  loses: readonly Points[];
+  assume: number | null;
+  assumed: Points | null;
 }
 
-/** Checks with their prices; `levels` is written for each attempt, -1 where nobody knows. */
-export interface CheckList {
-  checks: readonly { id: string; loses: readonly Points[]; assume: number }[];
-  places: ReadonlyMap<string, number>;
-  levels: Int8Array;
+/** A list of checks, with what it comes to where nothing is recorded. */
+export interface PricedChecks {
+  list: readonly PricedCheck[];
+  byId: ReadonlyMap<string, PricedCheck>;
   lose: Points;
   unread: number;
 }
 
+/** What one place of a line came to; `piece` is null where none is listed. */
 export interface PieceMark {
   piece: Piece | null;
-  sizes: Record<Axis, SizeMark>;
-  /** Where thickness and width are tried the other way round. */
-  spare: { thickness: SizeMark; width: SizeMark };
-  checks: CheckList;
   unread: number;
   gross: boolean;
   swapped: boolean;
@@ -47,54 +41,39 @@ export interface PieceMark {
   lose: Points;
 }
 
-export interface LineMarks {
+export interface PricedLine {
   line: Line;
   prices: Record<Axis, SizePrice>;
-  pieces: PieceMark[];
+  checks: PricedChecks;
+  marks: PieceMark[];
 }
 
 /** A rubric laid out for marking one attempt after another. It belongs to one call and is overwritten. */
 export interface Worksheet {
   rubric: Rubric;
   steps: Steps;
+  /** Further off than this is gross; infinite where the rubric sets no limit. */
   grossEdge: number;
-  lines: LineMarks[];
-  lineOf: ReadonlyMap<string, LineMarks>;
-  work: CheckList;
+  lines: PricedLine[];
+  lineOf: ReadonlyMap<string, PricedLine>;
+  workChecks: PricedChecks;
 }
 
-const UNASSUMED = -1;
-
-function startChecks(checks: readonly Check[]): CheckList {
+function priceChecks(checks: readonly Check[]): PricedChecks {
+  const list = checks.map(({ id, levels, assume }): PricedCheck => {
+    const loses = levels.map(({ lose }) => lose);
+    return { id, loses, assume, assumed: assume === null ? null : (loses[assume] ?? null) };
+  });
   return {
-    checks: checks.map(({ id, levels, assume }) => ({
-      id,
-      loses: levels.map(({ lose }) => lose),
-      assume: assume ?? UNASSUMED,
-    })),
-    places: new Map(checks.map(({ id }, place) => [id, place])),
-    levels: new Int8Array(checks.length),
-    lose: 0,
-    unread: 0,
+    list,
+    byId: new Map(list.map((check) => [check.id, check])),
+    lose: list.reduce((sum, { assumed }) => sum + (assumed ?? 0), 0),
+    unread: list.filter(({ assumed }) => assumed === null).length,
   };
 }
 
-function startSize(): SizeMark {
-  return { kind: 'unread', reading: 0, deviation: 0, step: 0, gross: false, lose: 0 };
-}
-
-function startPiece(line: Line): PieceMark {
-  return {
-    piece: null,
-    sizes: { thickness: startSize(), width: startSize(), length: startSize() },
-    spare: { thickness: startSize(), width: startSize() },
-    checks: startChecks(line.checks),
-    unread: 0,
-    gross: false,
-    swapped: false,
-    uncapped: 0,
-    lose: 0,
-  };
+function startMark(): PieceMark {
+  return { piece: null, unread: 0, gross: false, swapped: false, uncapped: 0, lose: 0 };
 }
 
 /** Gathers the steps of one rubric. The last step of a side has no edge: it is everything beyond. */
@@ -126,26 +105,29 @@ class StepList {
   }
 }
 
+function layOutLine(line: Line, steps: StepList): PricedLine {
+  const { target, sizes } = line;
+  return {
+    line,
+    prices: {
+      thickness: steps.addSize(target.thickness, sizes.thickness),
+      width: steps.addSize(target.width, sizes.width),
+      length: steps.addSize(target.length, sizes.length),
+    },
+    checks: priceChecks(line.checks),
+    marks: Array.from({ length: line.quantity }, startMark),
+  };
+}
+
 export function layOutWorksheet(rubric: Rubric): Worksheet {
   const steps = new StepList(rubric.margin);
-  const lines = rubric.lines.map((line): LineMarks => {
-    const { target, sizes } = line;
-    return {
-      line,
-      prices: {
-        thickness: steps.addSize(target.thickness, sizes.thickness),
-        width: steps.addSize(target.width, sizes.width),
-        length: steps.addSize(target.length, sizes.length),
-      },
-      pieces: Array.from({ length: line.quantity }, () => startPiece(line)),
-    };
-  });
+  const lines = rubric.lines.map((line) => layOutLine(line, steps));
   return {
     rubric,
     steps: steps.finish(),
     grossEdge: rubric.grossLimit === null ? Number.POSITIVE_INFINITY : rubric.grossLimit + rubric.margin,
     lines,
-    lineOf: new Map(lines.map((marks) => [marks.line.id, marks])),
-    work: startChecks(rubric.workChecks),
+    lineOf: new Map(lines.map((priced) => [priced.line.id, priced])),
+    workChecks: priceChecks(rubric.workChecks),
   };
 }

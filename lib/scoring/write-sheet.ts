@@ -1,45 +1,81 @@
-import { AXES, type CheckSheet, type PieceSheet, type SizeSheet, type Unread } from './types';
-import type { CheckList, LineMarks, PieceMark, SizeMark, SizePrice, Worksheet } from './worksheet';
+import type { Length } from '@/lib/length';
+import { findShift, type Shift } from './mark-piece';
+import { findDeviation, findStep, loseSize } from './price-size';
+import {
+  type Attempt,
+  AXES,
+  type CheckSheet,
+  type Piece,
+  type PieceSheet,
+  type Reading,
+  type SizeSheet,
+  type Unread,
+} from './types';
+import type { PieceMark, PricedChecks, PricedLine, SizePrice, Worksheet } from './worksheet';
 
-export function writeChecks(list: CheckList): CheckSheet[] {
-  return list.checks.map(({ id, loses }, place) => {
-    const level = list.levels[place] ?? -1;
-    const lose = loses[level];
-    return lose === undefined ? { id, level: null, lose: 0 } : { id, level, lose };
+/** Each check with its recorded level, else the assumed one, else none. */
+export function writeChecks({ list }: PricedChecks, recorded: Record<string, number>): CheckSheet[] {
+  return list.map(({ id, loses, assume }) => {
+    const level = Object.hasOwn(recorded, id) ? recorded[id] : assume;
+    return { id, level: level ?? null, lose: loses[level ?? -1] ?? 0 };
   });
 }
 
-function writeSize({ edges }: Worksheet['steps'], price: SizePrice, mark: SizeMark): SizeSheet {
-  const { kind, lose } = mark;
-  if (kind !== 'value') return { reading: null, used: null, deviation: null, band: kind, lose };
-  const { reading, deviation, step } = mark;
-  const first = deviation < 0 ? price.under : price.over;
-  const band = edges[step] === Number.POSITIVE_INFINITY ? 'beyond' : step - first;
-  return { reading, used: price.target + deviation, deviation, band, lose };
+function writeSize(
+  sheet: Worksheet,
+  price: SizePrice,
+  recorded: Reading | undefined,
+  shift: Length | undefined = 0,
+): SizeSheet {
+  const lose = loseSize(sheet, price, recorded, shift);
+  if (recorded?.kind !== 'value') {
+    return { reading: null, used: null, deviation: null, band: recorded?.kind ?? 'unread', lose };
+  }
+  const deviation = findDeviation(sheet, price, recorded.ticks, shift);
+  const step = findStep(sheet, price, deviation);
+  const beyond = sheet.steps.edges[step] === Number.POSITIVE_INFINITY;
+  return {
+    reading: recorded.ticks,
+    used: price.target + deviation,
+    deviation,
+    band: beyond ? 'beyond' : step - (deviation < 0 ? price.under : price.over),
+    lose,
+  };
+}
+
+function writeSizes(
+  sheet: Worksheet,
+  { prices }: PricedLine,
+  { sizes }: Piece,
+  shift: Shift,
+  swapped: boolean,
+): PieceSheet['sizes'] {
+  const { thickness, width, length } = sizes;
+  return {
+    thickness: writeSize(sheet, prices.thickness, swapped ? width : thickness, shift.thickness),
+    width: writeSize(sheet, prices.width, swapped ? thickness : width, shift.width),
+    length: writeSize(sheet, prices.length, length, shift.length),
+  };
 }
 
 export function writePiece(
   sheet: Worksheet,
-  { line, prices }: LineMarks,
+  priced: PricedLine,
   mark: PieceMark,
-  place: number,
+  ordinal: number,
+  adjust: Attempt['adjust'],
 ): PieceSheet {
-  const { sizes, gross, swapped, uncapped, lose } = mark;
-  const present = mark.piece?.state === 'present';
+  const { line, checks } = priced;
+  const { piece, gross, swapped, uncapped, lose } = mark;
+  const present = piece?.state === 'present' ? piece : null;
   return {
     lineId: line.id,
-    ordinal: place + 1,
-    state: mark.piece?.state ?? 'unread',
+    ordinal,
+    state: piece?.state ?? 'unread',
     gross,
     swapped,
-    sizes: present
-      ? {
-          thickness: writeSize(sheet.steps, prices.thickness, sizes.thickness),
-          width: writeSize(sheet.steps, prices.width, sizes.width),
-          length: writeSize(sheet.steps, prices.length, sizes.length),
-        }
-      : null,
-    checks: present ? writeChecks(mark.checks) : [],
+    sizes: present && writeSizes(sheet, priced, present, findShift(adjust, line.id), swapped),
+    checks: present ? writeChecks(checks, present.checks) : [],
     uncapped,
     lose,
   };
