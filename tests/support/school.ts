@@ -177,3 +177,17 @@ export function secretOf(mail: { data: Record<string, unknown> } | undefined): s
   if (!secret) throw new Error(`There is no secret in ${link}.`);
   return secret;
 }
+
+/** Runs the work while the access log takes nothing, as if the process died at a transaction's last write. */
+export async function whileLogFails<T>(work: () => Promise<T>): Promise<unknown> {
+  const sql = ownerSql();
+  await sql.unsafe(`
+    create or replace function test_refuse_log() returns trigger language plpgsql
+    as $$ begin raise exception 'the log takes nothing' using errcode = 'P0001'; end $$;
+    create trigger test_refuse_log before insert on access_log for each row execute function test_refuse_log()`);
+  try {
+    return await work().catch((error: unknown) => error);
+  } finally {
+    await sql`drop trigger test_refuse_log on access_log`;
+  }
+}
