@@ -64,7 +64,9 @@ const termFields = {
   endsOn: day('the last day'),
 };
 
-const inOrder = (term: { startsOn: string; endsOn: string }) => term.startsOn < term.endsOn;
+// Days that are none have a message of their own already.
+const inOrder = ({ startsOn, endsOn }: { startsOn: string; endsOn: string }) =>
+  ![startsOn, endsOn].every((text) => z.iso.date().safeParse(text).success) || startsOn < endsOn;
 const OUT_OF_ORDER = { path: ['endsOn'], message: 'The last day must come after the first.' };
 
 export const setUpSchoolInput = z
