@@ -13,13 +13,23 @@ interface RuleStairProps {
   /** Tone goes this deep under a tread; below it a high step is only hatched, so that it does not weigh. */
   toneDepth?: number;
   hatchGap?: number;
+  /** Where a line stands that no price may be written on. */
+  avoid?: number;
 }
 
 const TONE = ['', 'fill-loss-1', 'fill-loss-2', 'fill-loss-3', 'fill-loss-4'] as const;
 const ON_TONE = ['', 'rule-hatch-1', 'rule-hatch-2', 'rule-hatch-3', 'rule-hatch-4'] as const;
 
 /** The price of error as a stair: tone, hatch, side and number all say the same. */
-export function RuleStair({ treads, foot, rise, priceSize, toneDepth = 16, hatchGap = 8 }: RuleStairProps) {
+export function RuleStair({
+  treads,
+  foot,
+  rise,
+  priceSize,
+  toneDepth = 16,
+  hatchGap = 8,
+  avoid,
+}: RuleStairProps) {
   return (
     <g>
       {treads.map((tread) => (
@@ -33,7 +43,7 @@ export function RuleStair({ treads, foot, rise, priceSize, toneDepth = 16, hatch
         ? treads.map((tread) => (
             <text
               key={tread.left}
-              x={(tread.left + tread.right) / 2}
+              x={clearOf(avoid, (tread.left + tread.right) / 2, priceSize)}
               y={foot - (tread.lose / 100) * rise - priceSize * 0.28}
               fontSize={priceSize}
               className={`tnum [text-anchor:middle] ${tread.lose > 0 ? 'fill-ink font-[640]' : 'fill-ink-2 font-[480]'}`}
@@ -44,6 +54,10 @@ export function RuleStair({ treads, foot, rise, priceSize, toneDepth = 16, hatch
         : null}
     </g>
   );
+}
+
+function clearOf(line: number | undefined, x: number, size: number): number {
+  return line !== undefined && Math.abs(x - line) < size * 0.5 ? line + size * 0.75 : x;
 }
 
 interface TreadFillProps {

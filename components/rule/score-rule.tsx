@@ -40,7 +40,7 @@ export function ScoreRule({
   const [from, to] = scoreStretch(total, figures);
   const place = (value: number) => PAD + ((value - from) / (to - from)) * (WIDTH - 2 * PAD);
   const marks = Array.from({ length: to - from + 1 }, (_, index) => from + index);
-  const thin = to - from > 60;
+  const thin = to - from > 40;
   const benchFirst = bench !== null && (own === null || bench <= own);
   const words = [
     bench === null ? null : `${benchLabel} ${pointsAsText(bench)}`,

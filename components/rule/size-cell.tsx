@@ -135,12 +135,15 @@ function Deviation({ unit, deviation, lose }: { unit: Unit; deviation: Length; l
       <path d={`M${MIDDLE} 50V70`} className="stroke-ink [stroke-width:var(--pen-outline)]" />
       {lose ? (
         <text
-          x={side === 'under' ? MIDDLE + 16 : MIDDLE - 16}
+          x={side === 'under' ? MIDDLE + 9 : MIDDLE - 9}
           y={66}
           fontSize={17}
           paintOrder="stroke"
           strokeWidth={5}
-          className="tnum fill-ink stroke-plate font-[640] [text-anchor:middle]"
+          className={classNames(
+            'tnum fill-ink stroke-plate font-[640]',
+            side === 'under' ? '[text-anchor:start]' : '[text-anchor:end]',
+          )}
         >
           {pointsAsText(lose)}
         </text>

@@ -49,6 +49,9 @@ const CUTS = {
   },
 };
 
+/** Narrower stretches come of unequal reading margins, which are told in words. */
+const NARROWEST_WASH = 8;
+
 /** Several price lists under one scale; where they do not agree the ground is washed. */
 export function StackedRules({ rules, variant = 'wide', className, ...scale }: StackedRulesProps) {
   const cut = CUTS[variant];
@@ -79,6 +82,7 @@ export function StackedRules({ rules, variant = 'wide', className, ...scale }: S
       {washes.map((wash) => {
         const from = Math.max(left, placeOf(wash.from, scale, centre, pitch));
         const to = Math.min(right, placeOf(wash.to, scale, centre, pitch));
+        if (to - from < NARROWEST_WASH) return null;
         return (
           <rect
             key={wash.from}
@@ -128,6 +132,11 @@ function RuleRow({ rule, top, cut, rise, scale, frame, phone }: RuleRowProps) {
         rise={rise}
         priceSize={cut.price}
         toneDepth={cut.perPoint}
+        avoid={frame.centre}
+      />
+      <path
+        d={`M${frame.left} ${foot}H${frame.right}`}
+        className="stroke-ink [stroke-width:var(--pen-inside)]"
       />
       <text
         x={phone ? 6 : 0}
