@@ -17,7 +17,8 @@ await runCommand(async (crew) => {
   }
   await ensureNodeModules();
   const env = { ...baseEnv(wantedPort()), DATABASE_URL: given || (await ownDatabase(crew)) };
-  await prepareDatabase(env, { demo: task === 'seed' });
+  const ready = await prepareDatabase(env, { demo: task === 'seed' });
+  if (ready) say(ready);
   say('The database is up to date.');
 });
 

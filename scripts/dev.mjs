@@ -8,9 +8,9 @@ await runCommand(async (crew) => {
   const port = wantedPort();
   if (!(await claimStation(crew, { name: 'dev', port, what: 'The development server' }))) return 0;
   const { env } = await openOwnStation(crew, { name: 'dev', port });
-  await prepareDatabase(env, { demo: true });
+  const accounts = await prepareDatabase(env, { demo: true });
   await serve(crew, { env, port });
-  say('');
+  say(`\n${accounts}\n`);
   say(`Trymark is ready for work on it:  ${env.APP_URL}`);
   say(`Mail that it sends:               ${env.MAILBOX_URL}`);
   return 'goes on';

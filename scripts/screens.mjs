@@ -14,7 +14,7 @@ await runCommand(async (crew) => {
   const build = await ensureBuild();
   const port = await freePortForRun();
   const { env } = await openOwnStation(crew, { name: 'screens', port, fleeting: true });
-  await prepareDatabase(env, { demo: true, show: false });
+  await prepareDatabase(env, { demo: true });
   await serve(crew, { env, port, build, show: false });
   const { code } = await tryRun(
     process.execPath,

@@ -12,10 +12,11 @@ await runCommand(async (crew) => {
   const name = own ? 'start' : `start-${port}`;
   if (!(await claimStation(crew, { name, port, what: 'Trymark' }))) return 0;
   const env = own ? (await openOwnStation(crew, { name, port })).env : await givenStation(port);
+  const ready = await prepareDatabase(env, { demo: own });
   const build = await ensureBuild();
-  await prepareDatabase(env, { demo: own });
   await serve(crew, { env, port, build });
   say('');
+  if (ready) say(`${ready}\n`);
   say(
     `Trymark is ready:         ${env.APP_URL}${env.APP_URL.endsWith(`:${port}`) ? '' : ` (here: http://127.0.0.1:${port})`}`,
   );

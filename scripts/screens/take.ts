@@ -62,6 +62,7 @@ async function signedIn(browser: Browser, role: Exclude<ScreenRole, 'public'>) {
 async function takeScreen(context: BrowserContext, size: Size, screen: Screen): Promise<void> {
   const label = `${size} ${screen.role}-${screen.name}`;
   const page = await context.newPage();
+  page.setDefaultTimeout(10_000);
   const problems = watchPage(page);
   try {
     await arrive(page, screen);

@@ -1,4 +1,4 @@
-import { existsSync, mkdirSync, readdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
+import { existsSync, readdirSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { root } from './places.mjs';
 import { tryRun } from './run.mjs';
@@ -28,12 +28,15 @@ async function asRoot(command, args) {
   return tryRun('sudo', ['DEBIAN_FRONTEND=noninteractive', command, ...args], options);
 }
 
+function refuseUnlessInstallable(name) {
+  if (existsSync('/usr/bin/apt-get') && (isRoot || existsSync('/usr/bin/sudo'))) return;
+  throw new SetupError(
+    `Debian's package "${name}" is missing and cannot be installed from here. Install it as root: apt-get install ${name}`,
+  );
+}
+
 async function installDebian(name) {
-  if (!existsSync('/usr/bin/apt-get') || (!isRoot && !existsSync('/usr/bin/sudo'))) {
-    throw new SetupError(
-      `Debian's package "${name}" is missing and cannot be installed from here. Install it as root: apt-get install ${name}`,
-    );
-  }
+  refuseUnlessInstallable(name);
   say(`Installing Debian's package "${name}" (once) ...`);
   const update = await asRoot('apt-get', ['update', '-q']);
   const install = await asRoot('apt-get', ['install', '-y', '-q', '--no-install-recommends', name]);
@@ -42,19 +45,17 @@ async function installDebian(name) {
   }
 }
 
-const noMainCluster = '/etc/postgresql-common/createcluster.d/trymark.conf';
-
 /** PostgreSQL's programs; Debian's own cluster on port 5432 is not made, for nothing here uses it. */
 export async function ensurePostgres() {
   if (postgresPrograms()) return;
-  if (isRoot) {
-    mkdirSync('/etc/postgresql-common/createcluster.d', { recursive: true });
-    writeFileSync(noMainCluster, 'create_main_cluster = false\n');
-  }
+  refuseUnlessInstallable('postgresql');
+  const folder = '/etc/postgresql-common/createcluster.d';
+  const file = `${folder}/trymark.conf`;
+  await asRoot('sh', ['-c', `mkdir -p ${folder} && echo create_main_cluster = false > ${file}`]);
   try {
     await installDebian('postgresql');
   } finally {
-    if (isRoot) rmSync(noMainCluster, { force: true });
+    await asRoot('rm', ['-f', file]);
   }
 }
 

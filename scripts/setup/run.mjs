@@ -7,24 +7,28 @@ process.once('exit', () => {
 });
 
 /**
- * Runs a program to its end. `show` lets it write to the terminal; otherwise its output is kept and given back.
+ * Runs a program to its end and gives back what it wrote; `show` lets it write to the terminal instead,
+ * `showErrors` only what it writes as errors.
+ * @param {string} command
+ * @param {string[]} args
+ * @param {{ cwd?: string, env?: NodeJS.ProcessEnv, show?: boolean, showErrors?: boolean }} [options]
  * @returns {Promise<{ code: number, output: string }>}
  */
-export function tryRun(command, args, { cwd = root, env = process.env, show = false } = {}) {
+export function tryRun(
+  command,
+  args,
+  { cwd = root, env = process.env, show = false, showErrors = show } = {},
+) {
   return new Promise((resolve, reject) => {
-    const child = spawn(command, args, {
-      cwd,
-      env,
-      stdio: ['ignore', show ? 'inherit' : 'pipe', show ? 'inherit' : 'pipe'],
-    });
+    const stdio = ['ignore', show ? 'inherit' : 'pipe', showErrors ? 'inherit' : 'pipe'];
+    const child = spawn(command, args, { cwd, env, stdio });
     active.add(child);
     let output = '';
-    child.stdout?.on('data', (chunk) => {
+    const keep = (chunk) => {
       output += chunk;
-    });
-    child.stderr?.on('data', (chunk) => {
-      output += chunk;
-    });
+    };
+    child.stdout?.on('data', keep);
+    child.stderr?.on('data', keep);
     child.once('error', reject);
     child.once('close', (code, signal) => {
       active.delete(child);

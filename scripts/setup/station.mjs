@@ -49,13 +49,14 @@ export async function startServices(crew, { folder, fleeting = false }) {
   return { settings, ready: crew.ready(member) };
 }
 
-/** Brings the database up to date; then loads the demo, or prints the link that makes the first school. */
-export async function prepareDatabase(env, { demo, show = true }) {
+/** Brings the database up to date; gives back the demo's accounts, or the link that makes the first school, as text. */
+export async function prepareDatabase(env, { demo }) {
   const { code, output } = await tryRun(process.execPath, typescriptCommand('scripts/prepare.ts'), {
     env: typescriptEnv({ ...env, TRYMARK_DEMO: demo ? 'yes' : 'no' }),
+    showErrors: true,
   });
-  if (code !== 0) throw new SetupError(`The database could not be prepared:\n${output}`);
-  if (show) say(output.trimEnd());
+  if (code !== 0) throw new SetupError('The database could not be made ready; the reason stands above.');
+  return output.trimEnd();
 }
 
 /** Starts the server and the worker, and waits until the product answers. */

@@ -39,7 +39,7 @@ export async function runJourneys(crew, args = []) {
   const build = await ensureBuild();
   const port = await freePortForRun();
   const { env, cluster } = await openOwnStation(crew, { name: 'e2e', port, fleeting: true });
-  await prepareDatabase(env, { demo: false, show: false });
+  await prepareDatabase(env, { demo: false });
   await serve(crew, { env, port, build, show: false });
   const file = reportFile('e2e');
   const { code, output } = await tryRun(
