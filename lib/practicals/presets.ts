@@ -1,0 +1,67 @@
+import { AXES, type Band, type SizeRule } from '@/lib/scoring';
+import type { PresetId, RubricForm } from '@/lib/scoring/rubric-form';
+import { pointsAsTyped } from './as-typed';
+import type { DraftSide, DraftSizeRule } from './draft';
+import { readPoints } from './field-reader';
+
+/** The same bands on both sides, the dear side at twice the price; null while a price cannot be read. */
+export function doubleSide(rule: DraftSizeRule, dear: 'over' | 'under'): DraftSizeRule | null {
+  const cheap = rule[dear === 'over' ? 'under' : 'over'];
+  const doubled = timesTwo(cheap);
+  return doubled && { ...rule, mirrored: false, [dear]: doubled };
+}
+
+function timesTwo(side: DraftSide): DraftSide | null {
+  const twice = (text: string) => {
+    const points = readPoints(text);
+    return points === null ? null : pointsAsTyped(points * 2);
+  };
+  const bands = side.bands.map(({ within, lose }, index) => ({
+    within,
+    lose: index === 0 ? lose : twice(lose),
+  }));
+  const beyond = twice(side.beyond);
+  if (beyond === null || bands.some(({ lose }) => lose === null)) return null;
+  return { bands: bands.map(({ within, lose }) => ({ within, lose: lose ?? '' })), beyond };
+}
+
+/** Whether one side has the other's bands at twice the price, and any price at all. */
+export function isDoubled(rule: SizeRule, dear: 'over' | 'under'): boolean {
+  const [of, by] = dear === 'over' ? [rule.over, rule.under] : [rule.under, rule.over];
+  const [beyondOf, beyondBy] =
+    dear === 'over' ? [rule.beyondOver, rule.beyondUnder] : [rule.beyondUnder, rule.beyondOver];
+  const alike =
+    of.length === by.length &&
+    of.every((band, index) => band.within === by[index]?.within && band.lose === 2 * by[index].lose);
+  return alike && beyondOf === 2 * beyondBy && beyondOf > 0;
+}
+
+/** Whether each band is one more step wide and one more price dear than the one before it, on both sides. */
+export function isRatePerStep(rule: SizeRule): boolean {
+  return [rule.over, rule.under].every((bands) => bands.length > 1 && isEven(bands));
+}
+
+function isEven(bands: readonly Band[]): boolean {
+  const [first, second] = bands;
+  if (!first || !second) return false;
+  const step = second.within - first.within;
+  return bands.every(
+    (band, index) => band.within === first.within + index * step && band.lose === index * second.lose,
+  );
+}
+
+/** Whether the form still is what the preset made of it, in any of its prices. */
+export function presetHolds(preset: PresetId, form: RubricForm): boolean {
+  const rules = [form.defaults.sizes, ...Object.values(form.exceptions).map(({ sizes }) => sizes ?? {})];
+  const every = rules.flatMap((sizes) => AXES.flatMap((axis) => sizes[axis] ?? []));
+  switch (preset) {
+    case 'undersize-doubles':
+      return every.some((rule) => isDoubled(rule, 'under'));
+    case 'oversize-doubles':
+      return every.some((rule) => isDoubled(rule, 'over'));
+    case 'rate-per-step':
+      return every.some(isRatePerStep);
+    case 'start-from-100':
+      return form.basis === 'start' && form.start === 10_000;
+  }
+}
