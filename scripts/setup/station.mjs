@@ -2,7 +2,7 @@ import { setTimeout as wait } from 'node:timers/promises';
 import { markInUse } from './build.mjs';
 import { freePort, freePortForRun } from './places.mjs';
 import { tryRun, typescriptCommand, typescriptEnv } from './run.mjs';
-import { SetupError, say } from './say.mjs';
+import { SetupError } from './say.mjs';
 import { localSecrets } from './secrets.mjs';
 
 const NEXT = 'node_modules/next/dist/bin/next';
