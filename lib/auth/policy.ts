@@ -21,6 +21,8 @@ const ofSection: Rule = (actor, subject) => subject.teacherIds?.includes(actor.p
 const aideToday: Rule = (actor, subject) => subject.aideIds?.includes(actor.personId) ?? false;
 const ofDepartment: Rule = (actor, subject) =>
   actor.departmentId !== null && actor.departmentId === subject.departmentId;
+const ofSectionOrDepartment: Rule = (actor, subject) =>
+  ofSection(actor, subject) || ofDepartment(actor, subject);
 const self: Rule = (actor, subject) => subject.studentId === actor.personId;
 
 /**
@@ -47,6 +49,7 @@ const RULES = {
   'practical.list': { teacher: anyone, head: anyone },
   'practical.read': { teacher: ofSection, head: ofDepartment },
   'practical.change': { teacher: ofSection },
+  'practical.copy': { teacher: ofSectionOrDepartment },
   'sitting.open': { teacher: ofSection },
   'sitting.list': { teacher: anyone, aide: anyone },
   'sitting.read': { teacher: ofSection, head: ofDepartment },

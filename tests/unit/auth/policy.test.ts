@@ -75,6 +75,7 @@ const ALLOWED: Record<Action, Partial<Record<Role, RowKind[]>>> = {
   'practical.list': { teacher: EVERY, head: EVERY },
   'practical.read': { teacher: SECTION, head: LED },
   'practical.change': { teacher: SECTION },
+  'practical.copy': { teacher: SECTION },
   'sitting.open': { teacher: SECTION },
   'sitting.list': { teacher: EVERY, aide: EVERY },
   'sitting.read': { teacher: SECTION, head: LED },
@@ -142,4 +143,12 @@ it('gives a head without a department nothing of a row without one', () => {
 it('asks for the role that is acted in, not for the others that are held', () => {
   const teacherAsAide = actorAs('aide', { roles: ['teacher', 'aide'] });
   expect(may(teacherAsAide, 'sitting.publish', ROWS['my section’s'])).toBe(false);
+});
+
+it('lets a teacher copy, but neither read nor change, what is the department’s', () => {
+  const teacher = actorAs('teacher', { departmentId: DEPARTMENT });
+  expect(may(teacher, 'practical.copy', ROWS['my department’s'])).toBe(true);
+  expect(may(teacher, 'practical.read', ROWS['my department’s'])).toBe(false);
+  expect(may(teacher, 'practical.change', ROWS['my department’s'])).toBe(false);
+  expect(may(teacher, 'practical.copy', ROWS['another’s'])).toBe(false);
 });

@@ -1,0 +1,241 @@
+import { and, asc, count, desc, eq, isNotNull, isNull, ne, sql } from 'drizzle-orm';
+import type { Transaction } from '@/db/client';
+import { people, practicalDrafts, practicals, rubricVersions, sittings } from '@/db/schema';
+
+export type PracticalRow = typeof practicals.$inferSelect;
+
+export async function selectPractical(
+  tx: Transaction,
+  schoolId: string,
+  practicalId: string,
+): Promise<PracticalRow | undefined> {
+  const [row] = await tx
+    .select()
+    .from(practicals)
+    .where(and(eq(practicals.schoolId, schoolId), eq(practicals.id, practicalId)));
+  return row;
+}
+
+/** The same, and nobody else changes the practical, its draft or its versions until the transaction ends. */
+export async function lockPractical(
+  tx: Transaction,
+  schoolId: string,
+  practicalId: string,
+): Promise<PracticalRow | undefined> {
+  const [row] = await tx
+    .select()
+    .from(practicals)
+    .where(and(eq(practicals.schoolId, schoolId), eq(practicals.id, practicalId)))
+    .for('update');
+  return row;
+}
+
+export async function insertPractical(
+  tx: Transaction,
+  row: typeof practicals.$inferInsert,
+  draft: { content: unknown; savedBy: string },
+): Promise<string> {
+  const [made] = await tx.insert(practicals).values(row).returning({ id: practicals.id });
+  if (!made) throw new Error('An inserted practical gave no row back.');
+  await tx
+    .insert(practicalDrafts)
+    .values({ schoolId: row.schoolId, practicalId: made.id, revision: 1, ...draft });
+  return made.id;
+}
+
+export async function updatePractical(
+  tx: Transaction,
+  schoolId: string,
+  practicalId: string,
+  values: { title?: string; archivedAt?: Date | null },
+): Promise<void> {
+  await tx
+    .update(practicals)
+    .set(values)
+    .where(and(eq(practicals.schoolId, schoolId), eq(practicals.id, practicalId)));
+}
+
+export async function selectDraft(tx: Transaction, schoolId: string, practicalId: string) {
+  const [row] = await tx
+    .select({
+      content: practicalDrafts.content,
+      revision: practicalDrafts.revision,
+      savedAt: practicalDrafts.savedAt,
+    })
+    .from(practicalDrafts)
+    .where(and(eq(practicalDrafts.schoolId, schoolId), eq(practicalDrafts.practicalId, practicalId)));
+  return row;
+}
+
+/** Keeps the draft under the next revision and gives it back; nothing when `revision` is no longer the kept one. */
+export async function updateDraft(
+  tx: Transaction,
+  schoolId: string,
+  practicalId: string,
+  revision: number,
+  kept: { content: unknown; savedBy: string },
+) {
+  const [row] = await tx
+    .update(practicalDrafts)
+    .set({ ...kept, revision: revision + 1, savedAt: sql`now()` })
+    .where(
+      and(
+        eq(practicalDrafts.schoolId, schoolId),
+        eq(practicalDrafts.practicalId, practicalId),
+        eq(practicalDrafts.revision, revision),
+      ),
+    )
+    .returning({ revision: practicalDrafts.revision, savedAt: practicalDrafts.savedAt });
+  return row;
+}
+
+export async function selectLatestVersion(tx: Transaction, schoolId: string, practicalId: string) {
+  const [row] = await tx
+    .select()
+    .from(rubricVersions)
+    .where(and(eq(rubricVersions.schoolId, schoolId), eq(rubricVersions.practicalId, practicalId)))
+    .orderBy(desc(rubricVersions.number))
+    .limit(1);
+  return row;
+}
+
+export async function insertVersion(
+  tx: Transaction,
+  row: typeof rubricVersions.$inferInsert,
+): Promise<string> {
+  const [made] = await tx.insert(rubricVersions).values(row).returning({ id: rubricVersions.id });
+  if (!made) throw new Error('An inserted version gave no row back.');
+  return made.id;
+}
+
+/** A version with what permission to read it depends on. */
+export async function selectVersion(tx: Transaction, schoolId: string, versionId: string) {
+  const [row] = await tx
+    .select({
+      schoolId: rubricVersions.schoolId,
+      versionId: rubricVersions.id,
+      practicalId: rubricVersions.practicalId,
+      departmentId: practicals.departmentId,
+      ownerId: practicals.ownerId,
+      number: rubricVersions.number,
+      task: rubricVersions.task,
+      form: rubricVersions.form,
+      rubric: rubricVersions.rubric,
+      publishedAt: rubricVersions.publishedAt,
+      ownerName: ownerName,
+    })
+    .from(rubricVersions)
+    .innerJoin(
+      practicals,
+      and(eq(practicals.schoolId, rubricVersions.schoolId), eq(practicals.id, rubricVersions.practicalId)),
+    )
+    .innerJoin(people, and(eq(people.schoolId, practicals.schoolId), eq(people.id, practicals.ownerId)))
+    .where(and(eq(rubricVersions.schoolId, schoolId), eq(rubricVersions.id, versionId)));
+  return row;
+}
+
+const ownerName = sql<string>`${people.givenName} || ' ' || ${people.familyName}`;
+
+/** The versions of a practical, newest first, with the number of sittings on each. */
+export function selectVersions(tx: Transaction, schoolId: string, practicalId: string) {
+  return tx
+    .select({
+      versionId: rubricVersions.id,
+      number: rubricVersions.number,
+      publishedAt: rubricVersions.publishedAt,
+      sittings: count(sittings.id),
+    })
+    .from(rubricVersions)
+    .leftJoin(
+      sittings,
+      and(eq(sittings.schoolId, rubricVersions.schoolId), eq(sittings.rubricVersionId, rubricVersions.id)),
+    )
+    .where(and(eq(rubricVersions.schoolId, schoolId), eq(rubricVersions.practicalId, practicalId)))
+    .groupBy(rubricVersions.id, rubricVersions.number, rubricVersions.publishedAt)
+    .orderBy(desc(rubricVersions.number));
+}
+
+/** The latest published version of each practical. */
+function latestVersions(tx: Transaction, schoolId: string) {
+  return tx
+    .selectDistinctOn([rubricVersions.practicalId], {
+      practicalId: rubricVersions.practicalId,
+      versionId: rubricVersions.id,
+      number: rubricVersions.number,
+      task: rubricVersions.task,
+      publishedAt: rubricVersions.publishedAt,
+    })
+    .from(rubricVersions)
+    .where(eq(rubricVersions.schoolId, schoolId))
+    .orderBy(asc(rubricVersions.practicalId), desc(rubricVersions.number))
+    .as('latest');
+}
+
+/** One's own practicals, the one kept last first. */
+export function selectOwnPracticals(
+  tx: Transaction,
+  schoolId: string,
+  ownerId: string,
+  { archived }: { archived: boolean },
+) {
+  const latest = latestVersions(tx, schoolId);
+  return tx
+    .select({
+      practicalId: practicals.id,
+      title: practicals.title,
+      unit: practicals.unit,
+      content: practicalDrafts.content,
+      savedAt: practicalDrafts.savedAt,
+      versionId: latest.versionId,
+      number: latest.number,
+      publishedAt: latest.publishedAt,
+      sittings: sql<number>`(select count(*)::int from ${sittings} s
+        where s.school_id = ${practicals.schoolId} and s.practical_id = ${practicals.id})`,
+    })
+    .from(practicals)
+    .innerJoin(
+      practicalDrafts,
+      and(eq(practicalDrafts.schoolId, practicals.schoolId), eq(practicalDrafts.practicalId, practicals.id)),
+    )
+    .leftJoin(latest, eq(latest.practicalId, practicals.id))
+    .where(
+      and(
+        eq(practicals.schoolId, schoolId),
+        eq(practicals.ownerId, ownerId),
+        archived ? isNotNull(practicals.archivedAt) : isNull(practicals.archivedAt),
+      ),
+    )
+    .orderBy(desc(practicalDrafts.savedAt));
+}
+
+/** What others of the department have published last, by title. */
+export function selectOthersPublished(
+  tx: Transaction,
+  schoolId: string,
+  departmentId: string,
+  personId: string,
+) {
+  const latest = latestVersions(tx, schoolId);
+  return tx
+    .select({
+      practicalId: practicals.id,
+      unit: practicals.unit,
+      ownerName,
+      versionId: latest.versionId,
+      number: latest.number,
+      task: latest.task,
+      publishedAt: latest.publishedAt,
+    })
+    .from(practicals)
+    .innerJoin(latest, eq(latest.practicalId, practicals.id))
+    .innerJoin(people, and(eq(people.schoolId, practicals.schoolId), eq(people.id, practicals.ownerId)))
+    .where(
+      and(
+        eq(practicals.schoolId, schoolId),
+        eq(practicals.departmentId, departmentId),
+        ne(practicals.ownerId, personId),
+        isNull(practicals.archivedAt),
+      ),
+    )
+    .orderBy(asc(practicals.title));
+}
