@@ -32,7 +32,7 @@ test('a script that is put into a page without the nonce does not run', async ({
   });
   expect(ran).toBe(false);
 });
-test.use({ expectedErrors: [/inline event handler/] });
+test.use({ expectedErrors: /inline event handler/ });
 
 test('pages are kept by no cache, framed by nobody, and name no server', async ({ request }) => {
   const headers = (await request.get('/sign-in')).headers();
