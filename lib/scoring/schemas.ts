@@ -89,14 +89,17 @@ export const sizeRuleSchema = z
 
 export const checkSchema = z
   .strictObject({
-    id: idSchema.refine((id) => !NOT_A_CHECK.includes(id), `a check is not called ${NOT_A_CHECK.join(', ')}`),
+    id: idSchema.refine(
+      (id) => !NOT_A_CHECK.includes(id),
+      'a check is not called thickness, width, length, piece or held',
+    ),
     label: z.string(),
     levels: z
       .array(z.strictObject({ label: z.string(), lose: points }))
       .min(1, 'a check has at least one level')
       .max(10, 'a check has at most 10 levels')
       .refine((levels) => levels[0] === undefined || levels[0].lose === 0, 'the first level loses 0'),
-    assume: z.int('the assumed level is the place of a level').nullable(),
+    assume: whole('the assumed level', 0, 9).nullable(),
   })
   .refine(({ assume, levels }) => assume === null || levels[assume] !== undefined, {
     path: ['assume'],
