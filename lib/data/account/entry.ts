@@ -52,7 +52,7 @@ export function defineOwnEntry<Schema extends z.ZodType, View>(entry: OwnEntry<S
 }
 
 /** Runs the work and turns what ended it early into an answer. */
-async function answering<View>(work: () => Promise<View>): Promise<Result<View>> {
+export async function answering<View>(work: () => Promise<View>): Promise<Result<View>> {
   try {
     return { ok: true, value: await work() };
   } catch (error) {
