@@ -1,5 +1,9 @@
+export { compileRubric } from './compile-rubric';
+export { defaultRubricForm } from './default-rubric-form';
 export { type Dropped, type ProjectedAttempt, projectAttempt } from './project-attempt';
 export { type Rescored, rescore } from './rescore';
+export * from './rubric-form';
+export * from './rubric-form-schema';
 export * from './schemas';
 export { scoreAttempt } from './score-attempt';
 export { ScoringError, type ScoringErrorCode } from './scoring-error';
