@@ -1,5 +1,4 @@
 import 'server-only';
-import { DrizzleQueryError } from 'drizzle-orm/errors';
 import type { z } from 'zod';
 import type { Transaction } from '@/db/client';
 import * as schema from '@/db/schema';
@@ -134,8 +133,7 @@ const CONNECTION_CODES = /^(08|57P|53|ECONN|CONNECT|CONNECTION|EPIPE|ETIMEDOUT)/
 
 /** A database that is away, or a constraint that a simultaneous change ran into; anything else is a bug. */
 export function databaseProblem(error: unknown): { ok: false; problem: Problem } {
-  const cause = error instanceof DrizzleQueryError ? error.cause : error;
-  const code = codeOf(cause);
+  const code = codeOf(error);
   if (CONNECTION_CODES.test(code)) {
     return problem(
       'unavailable',
@@ -154,6 +152,9 @@ export function databaseProblem(error: unknown): { ok: false; problem: Problem }
   throw error;
 }
 
+/** The code of an error or of what caused it; by shape, for a bundle can hold one error class several times. */
 function codeOf(error: unknown): string {
-  return typeof error === 'object' && error !== null && 'code' in error ? String(error.code) : '';
+  if (typeof error !== 'object' || error === null) return '';
+  if ('code' in error) return String(error.code);
+  return 'cause' in error ? codeOf(error.cause) : '';
 }
