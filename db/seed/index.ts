@@ -1,12 +1,15 @@
 import { drizzle } from 'drizzle-orm/postgres-js';
 import postgres from 'postgres';
+import type { Transaction } from '@/db/client';
 import * as schema from '@/db/schema';
 import { hashPassword } from '@/lib/auth/password';
 import { demoAccounts, STAFF_PASSWORD, STUDENT_PASSPHRASE } from './accounts';
 import { makeNames } from './names';
-import { seedSchool } from './people';
-import { ARDMORE, CEDAR_FORK } from './plan';
-import { makeRandom } from './random';
+import { type SeededSchool, seedSchool } from './people';
+import { ARDMORE, CEDAR_FORK, SITTINGS } from './plan';
+import { seedPracticals } from './practicals';
+import { makeRandom, type Random } from './random';
+import { seedSitting } from './sittings';
 
 const SEED = 20_261_201;
 
@@ -27,11 +30,21 @@ export async function seedDemo(databaseUrl: string) {
     return await db.transaction(async (tx) => {
       const schools = [];
       for (const plan of [CEDAR_FORK, ARDMORE]) {
-        schools.push(await seedSchool(tx, random, plan, nextName, hashes));
+        const school = await seedSchool(tx, random, plan, nextName, hashes);
+        await seedWork(tx, random, school);
+        schools.push(school);
       }
       return demoAccounts(schools);
     });
   } finally {
     await client.end();
+  }
+}
+
+/** Everything the people of a school have made and recorded so far. */
+async function seedWork(tx: Transaction, random: Random, school: SeededSchool): Promise<void> {
+  const versions = await seedPracticals(tx, random, school);
+  for (const plan of SITTINGS.filter(({ section }) => school.sections.has(section))) {
+    await seedSitting(tx, random, school, versions, plan);
   }
 }

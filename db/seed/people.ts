@@ -71,6 +71,7 @@ export async function seedSchool(
     });
     await seedSection(tx, random, school, termId, section, students, hashes.student);
   }
+  await seedAide(tx, school);
   return school;
 }
 
@@ -131,15 +132,26 @@ async function seedSection(
   await tx
     .insert(credentials)
     .values(students.map((student) => ({ schoolId, personId: student.id, passwordHash, mustChange: false })));
-  await tx
-    .insert(enrollments)
-    .values(
-      students.map((student) => ({
-        schoolId,
-        sectionId: id,
-        studentId: student.id,
-        joinedOn: TERM.startsOn,
-      })),
-    );
+  await tx.insert(enrollments).values(
+    students.map((student) => ({
+      schoolId,
+      sectionId: id,
+      studentId: student.id,
+      joinedOn: TERM.startsOn,
+    })),
+  );
   school.sections.set(plan.key, { id, key: plan.key, period: plan.period, teacherId, students });
+}
+
+/** The aide records in two periods of the first teacher until the term ends. */
+async function seedAide(tx: Transaction, school: SeededSchool): Promise<void> {
+  const aide = school.plan.staff.find(({ roles }) => roles.includes('aide'));
+  const personId = aide && school.staff.get(aide.key);
+  if (!personId) return;
+  await tx.insert(sectionStaff).values(
+    [...school.sections.values()].slice(0, 2).map((section) => ({
+      ...{ schoolId: school.id, sectionId: section.id, personId },
+      ...{ duty: 'aide' as const, fromDay: '2026-11-30', toDay: TERM.endsOn },
+    })),
+  );
 }
