@@ -77,6 +77,6 @@ function workCheckOf({
       { label: pass, lose: '0' },
       { label: fail, lose },
     ],
-    assume: null,
+    assume: 0,
   };
 }
