@@ -33,8 +33,8 @@ export function ChooseWords({ offered }: { offered: string }) {
             aria-live="polite"
             className="grid gap-1 border-y-outline border-ink bg-plate px-4 py-3 text-key"
           >
-            {words.split(' ').map((word, index) => (
-              <li key={`${index}-${word}`}>{word}</li>
+            {words.split(' ').map((word) => (
+              <li key={word}>{word}</li>
             ))}
           </ol>
           {fields.password.errors ? <FormRefusal errors={fields.password.errors} /> : null}

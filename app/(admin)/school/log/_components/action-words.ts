@@ -1,0 +1,64 @@
+/** What the log's entries are called on screen; an action without words of its own is shown by its name. */
+const WORDS: Record<string, string> = {
+  'account.sign-in': 'signed in',
+  'account.invitation': 'accepted the invitation',
+  'account.ask-reset': 'asked for a new password',
+  'account.reset': 'set a forgotten password anew',
+  'account.change-password': 'changed their own password',
+  'passphrase.reset': 'gave out a passphrase',
+  'school.set-up': 'made the school',
+  'school.change': 'changed the school or a department',
+  'person.list': 'looked at people',
+  'person.invite': 'invited',
+  'person.change': 'changed roles or access',
+  'term.change': 'changed a term',
+  'log.read': 'read the access log',
+  'section.create': 'made a section',
+  'section.change': 'changed a section',
+  'section.read': 'looked at a section',
+  'roster.read': 'looked at a roster',
+  'roster.change': 'changed a roster',
+  'practical.create': 'made a practical',
+  'practical.change': 'changed a practical',
+  'practical.read': 'looked at a practical',
+  'sitting.open': 'opened a sitting',
+  'sitting.change': 'changed a sitting',
+  'sitting.publish': 'published',
+  'sitting.read': 'looked at a sitting',
+  'round.read': 'opened a round',
+  'round.record': 'recorded at the bench',
+  'round.finish': 'finished at the bench',
+  'round.settle': 'settled two readings',
+  'gradebook.read': 'looked at a gradebook',
+  'grades.export': 'exported grades',
+  'own.record': 'recorded own readings',
+  'own.read': 'looked at own readings',
+  'task.read': 'looked at own tasks',
+  'result.read': 'looked at own result',
+  'rubric.compare': 'compared rubrics',
+};
+
+export function sayAction(action: string): string {
+  return WORDS[action] ?? action.replaceAll(/[.-]/g, ' ');
+}
+
+/** The details of an entry as one line: `roles: teacher, head; again: yes`. */
+export function sayDetails(details: unknown): string {
+  if (typeof details !== 'object' || details === null) return '';
+  return Object.entries(details)
+    .map(([name, value]) => `${name.replaceAll(/([A-Z])/g, ' $1').toLowerCase()}: ${sayValue(value)}`)
+    .join('; ');
+}
+
+function sayValue(value: unknown): string {
+  if (value === true) return 'yes';
+  if (value === false) return 'no';
+  if (value === null || value === '') return 'none';
+  if (Array.isArray(value)) return value.map(sayValue).join(', ');
+  if (typeof value === 'object') {
+    return Object.entries(value)
+      .map(([name, inner]) => `${name} ${sayValue(inner)}`)
+      .join(', ');
+  }
+  return String(value);
+}
