@@ -1,6 +1,6 @@
 import { parseLength } from '@/lib/length';
 import { AXES } from '@/lib/scoring';
-import { answerUnit, takeInstrument } from './caliper';
+import { answerUnit, stepBack, takeInstrument } from './caliper';
 import { nextSpot } from './cursor';
 import { gaugeLine, gaugeRest, passChecks, setCheck } from './gauge';
 import { otherUnit, pressKey } from './keypad';
@@ -24,11 +24,15 @@ export function act(state: RoundState, action: Action, mint: Mint): Outcome {
     case 'key':
       return typeKey(state, action.key);
     case 'keep':
-      return keepTyped(state, mint);
+      return keepTyped(state, mint, action.text ?? state.keypad.text);
     case 'instrument':
       return takeInstrument(state, mint, action.text, action.at);
     case 'answer-unit':
       return answerUnit(state, mint, action.yes);
+    case 'caliper-unit':
+      return moved(state, { caliper: { ...state.caliper, unit: action.unit, denied: [] } });
+    case 'step-back':
+      return stepBack(state);
     case 'line-ok':
       return gaugeLine(state, mint);
     case 'rest-ok':
@@ -107,8 +111,8 @@ function typeKey(state: RoundState, key: string): Outcome {
     : moved(state, { keypad: { ...keypad, text }, said: null, doubt: null });
 }
 
-function keepTyped(state: RoundState, mint: Mint): Outcome {
-  const { text, unit } = state.keypad;
+function keepTyped(state: RoundState, mint: Mint, text: string): Outcome {
+  const { unit } = state.keypad;
   const parsed = parseLength(text, unit);
   if (!parsed.ok) return refused(state, parsed.reason);
   if (parsed.ticks <= 0) return refused(state, 'A piece has a size above zero.');

@@ -46,16 +46,18 @@ function withCaliper(state: RoundState, change: Partial<Caliper>): RoundState {
   return { ...state, caliper: { ...state.caliper, ...change } };
 }
 
+export function stepBack(state: RoundState): Outcome {
+  return moved(state, {
+    spot: spotBefore(state, state.spot),
+    asked: null,
+    doubt: null,
+    said: { kind: 'did', text: 'One back.' },
+  });
+}
+
 /** Once: the zero is logged. Again: the cursor steps back to the dimension before. */
 function closeJaws(state: RoundState, mint: Mint, typed: string, ticks: Length): Outcome {
-  if (state.caliper.closed) {
-    return moved(state, {
-      spot: spotBefore(state, state.spot),
-      asked: null,
-      doubt: null,
-      said: { kind: 'did', text: 'One back.' },
-    });
-  }
+  if (state.caliper.closed) return stepBack(state);
   const { unit } = state.caliper;
   const event = makeEvent(
     state,

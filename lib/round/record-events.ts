@@ -44,7 +44,10 @@ export function withEvents(state: RoundState, events: readonly BenchEvent[]): Ro
 /** Takes events out again that could not be kept after all. */
 export function withoutEvents(state: RoundState, ids: ReadonlySet<string>): RoundState {
   const all = new Map(
-    [...state.events].map(([attemptId, events]) => [attemptId, events.filter(({ id }) => !ids.has(id))]),
+    [...state.events].map(([attemptId, events]) => {
+      const stay = events.filter(({ id }) => !ids.has(id));
+      return [attemptId, stay.length < events.length ? stay : events];
+    }),
   );
   const presses = state.presses.filter(({ eventIds }) => !eventIds.some((id) => ids.has(id)));
   return { ...state, events: all, presses };

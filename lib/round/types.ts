@@ -105,9 +105,11 @@ export type Action =
   | { do: 'point'; lineId: string; ordinal: number; what: string }
   | { do: 'read'; reading: Reading }
   | { do: 'key'; key: string }
-  | { do: 'keep' }
+  | { do: 'keep'; text?: string }
   | { do: 'instrument'; text: string; at: number }
   | { do: 'answer-unit'; yes: boolean }
+  | { do: 'caliper-unit'; unit: Unit }
+  | { do: 'step-back' }
   | { do: 'line-ok' }
   | { do: 'rest-ok' }
   | { do: 'all-good' }

@@ -11,7 +11,7 @@ import { keepOnDevice } from './keep-on-device';
 import { Outbox, type OutboxState } from './outbox';
 import type { Counts, LoadResult, Parked, RoundStore } from './round-store';
 import { benchEvent, readStoredBundle, readStoredEvents, storeBundle } from './stored-round';
-import { writeUnsentFile } from './unsent-file';
+import { type TakenIn, takeUnsentFile, writeUnsentFile } from './unsent-file';
 
 const IN_HAND_EVERY_MS = 3_000;
 const STILL_IN_HAND_MS = 20_000;
@@ -147,6 +147,16 @@ export class DeviceRound implements RoundStore {
 
   unsentFile(): Promise<string> {
     return writeUnsentFile(this.store, new Date().toISOString());
+  }
+
+  async takeUnsentFile(text: string): Promise<TakenIn> {
+    const taken = await takeUnsentFile(this.store, text, this.personId);
+    if (taken.ok && taken.taken > 0) {
+      const { events } = await readStoredEvents(this.store, this.personId, this.sittingId);
+      this.tellEvents(events);
+      void this.outbox.nudge();
+    }
+    return taken;
   }
 
   async readLock(): Promise<unknown> {

@@ -1,6 +1,7 @@
 import type { RoundBundle } from '@/lib/contracts/rounds';
 import type { BenchEvent } from '@/lib/round/types';
 import type { Counts, LoadResult, RoundStore } from './round-store';
+import type { TakenIn } from './unsent-file';
 
 /** A round in this page's memory alone: nothing is stored, nothing sent, and all of it gone when the page is left. */
 export class PracticeRound implements RoundStore {
@@ -46,6 +47,9 @@ export class PracticeRound implements RoundStore {
   async dropParked(): Promise<void> {}
   async unsentFile(): Promise<null> {
     return null;
+  }
+  async takeUnsentFile(): Promise<TakenIn> {
+    return { ok: false, reason: 'A practice round takes nothing in.' };
   }
   close(): void {}
 }

@@ -2,6 +2,7 @@ import type { InHandView, RoundBundle } from '@/lib/contracts/rounds';
 import type { Place } from '@/lib/round/start-round';
 import type { BenchEvent } from '@/lib/round/types';
 import type { OutboxState } from './outbox';
+import type { TakenIn } from './unsent-file';
 
 /** How many events of this round this person made here, and how far they have come. */
 export interface Counts {
@@ -54,6 +55,7 @@ export interface RoundStore {
   retryParked(): Promise<void>;
   dropParked(ids: readonly string[]): Promise<void>;
   unsentFile(): Promise<string | null>;
+  takeUnsentFile(text: string): Promise<TakenIn>;
   readLock(): Promise<unknown>;
   writeLock(value: unknown): Promise<void>;
   close(): void;
