@@ -95,7 +95,7 @@ function marks(at: Place, from: number, to: number, out: number, inward: number)
   return lines.join('');
 }
 
-const BEAM = { low: 9, high: 22 };
+const BEAM = { low: 8, high: 19 };
 
 function drawCaliper({ at, size, depth, firstHidden }: Plane): InstrumentDrawing {
   const { low, high } = BEAM;
@@ -114,21 +114,21 @@ function drawCaliper({ at, size, depth, firstHidden }: Plane): InstrumentDrawing
   ]);
   const beam = shape(at, [
     [-19, low],
-    [size + 74, low],
-    [size + 74, high],
+    [size + 46, low],
+    [size + 46, high],
     [-19, high],
   ]);
   const slider = shape(at, [
-    [size, low - 5],
-    [size + 38, low - 5],
-    [size + 38, high + 5],
-    [size, high + 5],
+    [size, low - 4],
+    [size + 32, low - 4],
+    [size + 32, high + 4],
+    [size, high + 4],
   ]);
   return {
     behind: [firstHidden ? fixedJaw : slidingJaw],
     before: firstHidden ? [beam, slider, slidingJaw] : [beam, slider, fixedJaw],
-    fine: marks(at, 6, size - 5, low, 1) + marks(at, size + 44, size + 72, low, 1),
-    grip: firstHidden ? at(size + 66, (low + high) / 2) : at(size + 19, (low + high) / 2),
+    fine: marks(at, 6, size - 5, low, 1) + marks(at, size + 36, size + 44, low, 1),
+    grip: at(size + 16, (low + high) / 2),
   };
 }
 

@@ -20,13 +20,26 @@ interface PartDrawingProps {
   label?: string;
   width?: number;
   height?: number;
+  /** The upper right corner that stays free. */
+  corner?: { width: number; height: number };
   className?: string;
 }
 
 /** The piece in isometric: its three dimensions, the one being measured picked out, and where to hold the instrument. */
 export function PartDrawing(props: PartDrawingProps) {
-  const { size, unit, axis = null, reach, note = false, label, width = 500, height = 390, className } = props;
-  const layout = layOutPart(size, { width, height });
+  const {
+    size,
+    unit,
+    axis = null,
+    reach,
+    note = false,
+    label,
+    width = 500,
+    height = 390,
+    corner,
+    className,
+  } = props;
+  const layout = layOutPart(size, { width, height, corner });
   const instrument = axis ? instrumentFor(size[axis], unit, reach) : null;
   const drawing = axis && instrument ? drawInstrument(axis, instrument, layout) : null;
   const sizes = AXES.map((each) => `${each} ${lengthInWords(size[each], unit)}`).join(', ');

@@ -2,10 +2,11 @@ import type { Axis } from '@/lib/scoring';
 import { type Box, grainLines, logFor, type SpacePoint } from './grain';
 import { type PaperPoint, pathThrough, toPaper } from './isometric';
 
-/** The paper a part is drawn on. */
+/** The paper a part is drawn on; its upper right corner may be kept free, for the target at the bench. */
 export interface PartFrame {
   width: number;
   height: number;
+  corner?: { width: number; height: number };
 }
 
 export interface DimensionLine {
@@ -31,7 +32,7 @@ export interface PartLayout {
 
 /** Nothing is drawn thinner than this part of the longest side, so that every face can be seen. */
 const THINNEST = 0.1;
-const INSET = { left: 84, right: 92, top: 96, foot: 76 };
+const INSET = { left: 62, right: 84, top: 92, foot: 44 };
 const OFFSET = 24;
 const SLASH = 8;
 
@@ -51,19 +52,55 @@ function cornersOf(box: Box): SpacePoint[] {
   );
 }
 
-/** Places the piece in the middle of its frame, as large as the room for dimensions allows. */
-function placeInFrame(box: Box, frame: PartFrame) {
-  const points = cornersOf(box).map((corner) => toPaper(corner));
+/** How far the instrument and the figures reach past the piece's own corners, in px of paper. */
+const TAIL = 46;
+const FIGURE_OUT = 84;
+const SHRINK = 0.96;
+
+/** What comes nearest to the upper right: the piece's edge, its thickness figure, an instrument in any plane. */
+function upperRight({ length: l, width: w, thickness: t }: Box, scale: number): PaperPoint[] {
+  const edge = [0, 0.2, 0.4, 0.6, 0.8, 1].map((share) => toPaper([l, w * share, t], scale));
+  const [tipX, tipY] = toPaper([l, w / 2, t], scale);
+  const beam = [0, 0.5, 1].map(
+    (share): PaperPoint => [tipX + TAIL * 0.866 * share, tipY - TAIL * 0.5 * share - 18],
+  );
+  const [uprightX, uprightY] = toPaper([l * 0.8, 0, t], scale);
+  const [figureX, figureY] = toPaper([l, 0, t], scale);
+  return [...edge, ...beam, [uprightX + 20, uprightY - TAIL + 12], [figureX + FIGURE_OUT, figureY - 40]];
+}
+
+function origin(box: Box, frame: PartFrame, scale: number): PaperPoint {
+  const points = cornersOf(box).map((corner) => toPaper(corner, scale));
   const [xs, ys] = [points.map(([x]) => x), points.map(([, y]) => y)];
   const [left, right, top, foot] = [Math.min(...xs), Math.max(...xs), Math.min(...ys), Math.max(...ys)];
+  const spareX = frame.width - INSET.left - INSET.right - (right - left);
+  const spareY = frame.height - INSET.top - INSET.foot - (foot - top);
+  if (frame.corner) return [INSET.left - left, INSET.top - top + spareY];
+  return [INSET.left - left + spareX / 2, INSET.top - top + spareY / 2];
+}
+
+function clearOfCorner(box: Box, frame: PartFrame, scale: number): boolean {
+  const { corner } = frame;
+  if (!corner) return true;
+  const [x0, y0] = origin(box, frame, scale);
+  return upperRight(box, scale).every(
+    ([x, y]) => x0 + x <= frame.width - corner.width || y0 + y >= corner.height,
+  );
+}
+
+/** As large as the room for dimensions and the free corner allow. */
+function placeInFrame(box: Box, frame: PartFrame) {
+  const { length: l, width: w, thickness: t } = box;
+  const [wide, high] = [(l + w) * (Math.sqrt(3) / 2), (l + w) / 2 + t];
   const roomX = frame.width - INSET.left - INSET.right;
   const roomY = frame.height - INSET.top - INSET.foot;
-  const scale = Math.min(roomX / (right - left), roomY / (foot - top));
-  const originX = INSET.left + (roomX - (right - left) * scale) / 2 - left * scale;
-  const originY = INSET.top + (roomY - (foot - top) * scale) / 2 - top * scale;
+  const largest = Math.min(roomX / wide, roomY / high);
+  let scale = largest;
+  while (!clearOfCorner(box, frame, scale) && scale > largest / 4) scale *= SHRINK;
+  const [x0, y0] = origin(box, frame, scale);
   const place = (point: SpacePoint): PaperPoint => {
     const [x, y] = toPaper(point, scale);
-    return [originX + x, originY + y];
+    return [x0 + x, y0 + y];
   };
   return { scale, place };
 }

@@ -36,7 +36,7 @@ export async function DeskShell({ home, nav, person, places, menu, children }: D
           aria-label="Trymark, first screen"
           className="-mb-[3px] text-[1.75rem] md:text-[2rem]"
         >
-          <Logo />
+          <Logo edge="phone" />
         </Link>
         <NavLinks
           kind="header"

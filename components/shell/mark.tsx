@@ -1,3 +1,4 @@
+import { classNames } from '@/components/ui/class-names';
 import { MARK_PATH } from './mark-path';
 
 /** The product's mark. Its tail is made to stand on a true edge: set it so that its foot meets a line. */
@@ -9,16 +10,25 @@ export function Mark({ className }: { className?: string }) {
   );
 }
 
+const EDGE = 'border-b-[0.06em] border-current pr-[0.06em] pl-[0.12em]';
+
+interface LogoProps {
+  /** Draw the edge it stands on: always, on a phone alone, or not where a line of the sheet is that edge. */
+  edge?: 'always' | 'phone' | 'never';
+}
+
 /** Mark and wordmark on one true edge. Sized by the font size of its place. */
-export function Logo({ edge = false, className }: { edge?: boolean; className?: string }) {
+export function Logo({ edge = 'never' }: LogoProps) {
   return (
-    <span className={className}>
-      <span
-        className={`inline-flex items-end leading-none ${edge ? 'border-b-[0.06em] border-current pr-[0.06em] pl-[0.12em]' : ''}`}
-      >
-        <Mark className="mr-[0.34em] h-[0.84em] w-auto shrink-0" />
-        <span className="-mb-[0.135em] font-title font-[640]">Trymark</span>
-      </span>
+    <span
+      className={classNames(
+        'inline-flex items-end leading-none',
+        edge !== 'never' && EDGE,
+        edge === 'phone' && 'md:border-b-0 md:p-0',
+      )}
+    >
+      <Mark className="mr-[0.34em] h-[0.84em] w-auto shrink-0" />
+      <span className="-mb-[0.135em] font-title font-[640]">Trymark</span>
     </span>
   );
 }

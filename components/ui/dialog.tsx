@@ -5,7 +5,7 @@ import type { ReactNode } from 'react';
 import { Button } from './button';
 import { classNames } from './class-names';
 
-export const VEIL = 'fixed inset-0 z-40 bg-[color-mix(in_srgb,var(--ink)_35%,transparent)]';
+export const VEIL = 'fixed inset-0 z-40 bg-[rgb(0_0_0/0.45)]';
 export const SHEET =
   'fixed top-1/2 left-1/2 z-50 max-h-[90dvh] w-[calc(100vw-2rem)] max-w-[36rem] -translate-x-1/2 -translate-y-1/2 overflow-y-auto border-outline border-ink bg-sheet p-4 sm:p-6';
 

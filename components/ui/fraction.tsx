@@ -5,11 +5,13 @@ import { type LengthParts, type LengthStyle, lengthParts } from './length-parts'
 
 interface FractionProps {
   parts: LengthParts;
+  /** Set large by itself, as the bench's target is: no text beside it to hold its own against. */
+  display?: boolean;
   className?: string;
 }
 
 /** A length set in type: `frac` on the fraction alone; alone or signed, a quarter larger. Says nothing aloud. */
-export function Fraction({ parts: { sign, whole, num, den }, className }: FractionProps) {
+export function Fraction({ parts: { sign, whole, num, den }, display = false, className }: FractionProps) {
   const alone = whole === '';
   return (
     <span aria-hidden="true" className={classNames('whitespace-nowrap', className)}>
@@ -17,8 +19,8 @@ export function Fraction({ parts: { sign, whole, num, den }, className }: Fracti
       {whole}
       {num === null ? null : (
         <>
-          {alone ? null : <span className="text-[0.3em]"> </span>}
-          <span className={classNames('frac', alone && 'text-[1.25em] leading-none')}>
+          {alone ? null : <span className={display ? 'text-[0.1em]' : 'text-[0.3em]'}> </span>}
+          <span className={classNames('frac', alone && !display && 'text-[1.25em] leading-none')}>
             {num}/{den}
           </span>
         </>
@@ -32,6 +34,8 @@ interface LengthTextProps extends LengthStyle {
   unit: Unit;
   /** Shown and said as a deviation: with its sign, and "over" or "under". */
   signed?: boolean;
+  /** Set large by itself. */
+  display?: boolean;
   /** Write the unit after it. */
   withUnit?: boolean;
   className?: string;
@@ -39,12 +43,12 @@ interface LengthTextProps extends LengthStyle {
 
 /** A length on screen, and in words for a screen reader: "one and three eighths inches". */
 export function LengthText(props: LengthTextProps) {
-  const { ticks, unit, denominator, decimals, signed = false, withUnit = false, className } = props;
+  const { ticks, unit, denominator, decimals, signed = false, withUnit = false, display, className } = props;
   const style = { denominator, decimals };
   const words = signed ? deviationInWords(ticks, unit, style) : lengthInWords(ticks, unit, style);
   return (
     <span className={classNames('whitespace-nowrap', className)}>
-      <Fraction parts={lengthParts(ticks, unit, style, signed)} />
+      <Fraction parts={lengthParts(ticks, unit, style, signed)} display={display} />
       {withUnit ? <span aria-hidden="true"> {unit}</span> : null}
       <span className="sr-only select-none">{words}</span>
     </span>

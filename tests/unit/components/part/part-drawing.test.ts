@@ -44,6 +44,17 @@ describe('the isometric', () => {
     }
   });
 
+  it('keeps the upper right corner free for the target, however tall the piece', () => {
+    const corner = { width: 230, height: 170 };
+    for (const size of [end, slat, { thickness: IN, width: 1.25 * IN, length: 1.5 * IN }]) {
+      const layout = layOutPart(size, { width: 520, height: 390, corner });
+      const figure = layout.dimensions.find((each) => each.axis === 'thickness')?.text ?? [0, 0];
+      const all = [...[layout.top, layout.side].flatMap(pointsOf), figure];
+      for (const [x, y] of all) expect(x <= 520 - corner.width || y >= corner.height).toBe(true);
+      expect(layout.scale).toBeGreaterThan(0);
+    }
+  });
+
   it('is true in its proportions, except that very thin sides are thickened', () => {
     expect(drawnBox(end)).toEqual(end);
     expect(drawnBox(slat).length).toBe(slat.length);
