@@ -24,14 +24,14 @@ function isCheaper(lose: Points, gross: boolean, uncapped: Points, mark: PieceMa
   return uncapped < mark.uncapped;
 }
 
-type Pair = [thickness: Reading | undefined, width: Reading | undefined];
+type Recorded = Reading | undefined;
 
 function losePair(
   sheet: Worksheet,
   { prices }: PricedLine,
   shift: Shift,
-  thickness: Pair[0],
-  width: Pair[1],
+  thickness: Recorded,
+  width: Recorded,
 ): Points {
   return (
     loseSize(sheet, prices.thickness, thickness, shift.thickness ?? 0) +
@@ -43,8 +43,8 @@ function isPairGross(
   sheet: Worksheet,
   { prices }: PricedLine,
   shift: Shift,
-  thickness: Pair[0],
-  width: Pair[1],
+  thickness: Recorded,
+  width: Recorded,
 ): boolean {
   return (
     isSizeGross(sheet, prices.thickness, thickness, shift.thickness ?? 0) ||
@@ -52,6 +52,7 @@ function isPairGross(
   );
 }
 
+/** Goes on from what the checks came to, which `mark` already holds. */
 function markPresent(
   sheet: Worksheet,
   priced: PricedLine,

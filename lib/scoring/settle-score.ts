@@ -26,16 +26,14 @@ export function settleScore(policy: Policy, sums: Sums, given: { bonus: Points; 
 
   const late = policy.late === null ? 0 : Math.min(policy.late.max, policy.late.perDay * given.daysLate);
   const kept = 100 - late;
-  // Score and limit as fractions. Without `outOf` total / possible is 1: cancelled, the products stay below 2^53.
-  const below = policy.outOf === null ? 100 : possible * 100;
-  const above =
-    policy.outOf === null ? (raw + given.bonus) * kept : (raw * total + given.bonus * possible) * kept;
-  const limit = { above: total * policy.ceiling, below: 100 };
-  const overLimit = above > limit.above * (below / 100);
-  const score = overLimit ? limit : { above, below };
+  // The score as a fraction. Without `outOf` total / possible is 1: cancelled, the products stay below 2^53.
+  const own = policy.outOf === null;
+  const above = (own ? raw + given.bonus : raw * total + given.bonus * possible) * kept;
+  const below = own ? 100 : possible * 100;
+  // Past the limit, by itself or by rounding, the greatest multiple not above the limit counts.
   const steps = Math.min(
-    divideHalfUp(score.above, score.below * policy.roundTo),
-    divideDown(limit.above, limit.below * policy.roundTo),
+    divideHalfUp(above, below * policy.roundTo),
+    divideDown(total * policy.ceiling, 100 * policy.roundTo),
   );
   return { raw, total, provisional: steps * policy.roundTo };
 }
