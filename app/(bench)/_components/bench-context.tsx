@@ -22,6 +22,7 @@ export interface Bench {
   /** What an instrument has typed of the line that is under way. */
   typing: string;
   practice: boolean;
+  leaveTo: string;
 }
 
 const Context = createContext<Bench | null>(null);

@@ -22,10 +22,12 @@ interface BenchScreenProps {
   session: BenchSession;
   lock: Lock;
   practice: boolean;
+  /** Where the way out leads. */
+  leaveTo: string;
 }
 
 /** The bench: strip, pieces and target, entry, actions. */
-export function BenchScreen({ session, lock: storedLock, practice }: BenchScreenProps) {
+export function BenchScreen({ session, lock: storedLock, practice, leaveTo }: BenchScreenProps) {
   const view = useSyncExternalStore(session.subscribe, session.getView, session.getView);
   const [settings, setSettings] = useState(readSettings);
   const [panel, setPanel] = useState<Panel>(null);
@@ -73,6 +75,7 @@ export function BenchScreen({ session, lock: storedLock, practice }: BenchScreen
     lock: () => (lock.hash === null ? setChoosing(true) : keepLock({ ...lock, locked: true })),
     typing,
     practice,
+    leaveTo,
   };
   return (
     <BenchProvider value={bench}>

@@ -14,7 +14,7 @@ import { BenchScreen } from './bench-screen';
 interface BenchProps {
   personId: string;
   /** The sitting to record, or a round that is made up for practice. */
-  round: { sittingId: string } | { practice: RoundBundle };
+  round: { sittingId: string } | { practice: RoundBundle; leaveTo: string };
 }
 
 type Opened =
@@ -56,7 +56,14 @@ export function Bench({ personId, round }: BenchProps) {
 
   if (opened.state === 'opening') return <Opening />;
   if (opened.state === 'shut') return <Shut why={opened.why} />;
-  return <BenchScreen session={opened.session} lock={opened.lock} practice={practice !== null} />;
+  return (
+    <BenchScreen
+      session={opened.session}
+      lock={opened.lock}
+      practice={practice !== null}
+      leaveTo={'leaveTo' in round ? round.leaveTo : '/round'}
+    />
+  );
 }
 
 async function openRound(store: RoundStore, personId: string): Promise<Opened> {

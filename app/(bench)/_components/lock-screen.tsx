@@ -67,10 +67,7 @@ export function LockScreen({ lock, choosing, onLock, onCancel }: LockScreenProps
         </>
       ) : (
         <>
-          <p
-            aria-label={`${pin.length} digits`}
-            className="tnum h-12 min-w-56 border-b-outline border-ink text-[40px] leading-none tracking-[0.3em]"
-          >
+          <p className="tnum h-12 min-w-56 border-b-outline border-ink text-[40px] leading-none tracking-[0.3em]">
             {'•'.repeat(pin.length)}
           </p>
           <p role="status" className="min-h-12 max-w-md text-lead">

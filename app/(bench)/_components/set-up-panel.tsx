@@ -10,7 +10,7 @@ const LIGHT_NAMES = { auto: 'as the device', light: 'light', dark: 'dark', glare
 
 /** How this tablet's bench is lit, heard, walked and locked. */
 export function SetUpPanel() {
-  const { view, press, settings, change, open, practice, bundle } = useBench();
+  const { view, press, settings, change, open, practice, leaveTo } = useBench();
   return (
     <section aria-label="set up" className="flex min-h-0 flex-1 flex-col gap-5 overflow-y-auto py-3">
       <div className="flex items-start gap-3">
@@ -58,7 +58,7 @@ export function SetUpPanel() {
         onChange={(value) => change({ idleMinutes: Number(value) })}
       />
       <p>
-        <Link href={practice ? `/practicals/${bundle.sittingId}` : '/round'} className="link text-lead">
+        <Link href={leaveTo} className="link text-lead">
           {practice ? 'leave the practice round' : 'leave the round'}
         </Link>
       </p>
