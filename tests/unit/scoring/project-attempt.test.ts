@@ -1,8 +1,11 @@
 import fc from 'fast-check';
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import { type Attempt, projectAttempt, scoreAttempt } from '@/lib/scoring';
 import { attemptArb, caseArb, rubricArb } from '../../support/scoring-arbitraries';
 import { makeAttempt, makeCheck, makeLine, makePiece, makeRubric } from '../../support/scoring-examples';
+
+// Many generated cases: give them time on a busy machine.
+vi.setConfig({ testTimeout: 60_000 });
 
 describe('an attempt fitted to another rubric', () => {
   const rubric = makeRubric({

@@ -1,5 +1,5 @@
 import fc from 'fast-check';
-import { describe, expect, expectTypeOf, it } from 'vitest';
+import { describe, expect, expectTypeOf, it, vi } from 'vitest';
 import type { z } from 'zod';
 import { MAX_LENGTH } from '@/lib/length';
 import {
@@ -30,6 +30,9 @@ import {
   makeRule,
   value,
 } from '../../support/scoring-examples';
+
+// Many generated cases: give them time on a busy machine.
+vi.setConfig({ testTimeout: 60_000 });
 
 /** The messages of a refusal, each with where it applies; none where the value is accepted. */
 function complaints(schema: z.ZodType, given: unknown): string[] {

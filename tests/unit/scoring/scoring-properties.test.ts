@@ -1,10 +1,13 @@
 import fc from 'fast-check';
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import type { Length } from '@/lib/length';
 import { type Attempt, attemptSchema, type Rubric, rescore, rubricSchema, scoreAttempt } from '@/lib/scoring';
 import { boundsCaseArb, caseArb, casesArb, sizeRuleArb } from '../../support/scoring-arbitraries';
 import { makeAttempt, makeLine, makePiece, makeRubric } from '../../support/scoring-examples';
 import { scoreByOracle } from '../../support/scoring-oracle';
+
+// Many generated cases: give them time on a busy machine.
+vi.setConfig({ testTimeout: 60_000 });
 
 const runs = (numRuns: number) => ({ numRuns });
 
