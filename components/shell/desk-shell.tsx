@@ -30,19 +30,19 @@ export async function DeskShell({ home, nav, person, places, menu, children }: D
       >
         to the content
       </a>
-      <header className="grid grid-cols-[auto_1fr] items-end gap-x-4 border-b-edge border-ink pt-2 md:grid-cols-[auto_1fr_auto] md:gap-x-12 md:pt-2 print:hidden">
+      <header className="grid grid-cols-[auto_1fr] items-end gap-x-4 border-b-edge border-ink pt-2 lg:grid-cols-[auto_1fr_auto] lg:gap-x-12 md:pt-2 print:hidden">
         <Link
           href={home}
           aria-label="Trymark, first screen"
           className="-mb-[3px] text-[1.75rem] md:text-[2rem]"
         >
-          <Logo edge="phone" />
+          <Logo edge="narrow" />
         </Link>
         <NavLinks
           kind="header"
           label="main"
           items={nav}
-          className="max-md:order-3 max-md:col-span-2 max-md:mt-2"
+          className="max-lg:order-3 max-lg:col-span-2 max-lg:mt-2"
         />
         <div className="flex min-w-0 justify-end self-center">
           <PersonMenu person={person} places={places} theme={theme}>

@@ -13,8 +13,8 @@ export function Mark({ className }: { className?: string }) {
 const EDGE = 'border-b-[0.06em] border-current pr-[0.06em] pl-[0.12em]';
 
 interface LogoProps {
-  /** Draw the edge it stands on: always, on a phone alone, or not where a line of the sheet is that edge. */
-  edge?: 'always' | 'phone' | 'never';
+  /** Draw the edge it stands on: always, where the header has two rows, or not where a line of the sheet is that edge. */
+  edge?: 'always' | 'narrow' | 'never';
 }
 
 /** Mark and wordmark on one true edge. Sized by the font size of its place. */
@@ -24,7 +24,7 @@ export function Logo({ edge = 'never' }: LogoProps) {
       className={classNames(
         'inline-flex items-end leading-none',
         edge !== 'never' && EDGE,
-        edge === 'phone' && 'md:border-b-0 md:p-0',
+        edge === 'narrow' && 'lg:border-b-0 lg:p-0',
       )}
     >
       <Mark className="mr-[0.34em] h-[0.84em] w-auto shrink-0" />
