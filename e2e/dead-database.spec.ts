@@ -11,7 +11,7 @@ test.beforeAll(async () => {
 test.afterAll(() => server?.end());
 
 // The browser notes every answer that says the server cannot help now.
-test.use({ expectedErrors: /status of 50[03]|An error occurred in the Server Components render/ });
+test.use({ expectedErrors: /status of 50[03]|React error #441/ });
 
 test('while the database is away pages say so and nothing typed is lost; when it is back all goes on by itself', async ({
   page,

@@ -4,6 +4,7 @@ import { getFormProps, useForm } from '@conform-to/react';
 import { useActionState } from 'react';
 import { FormRefusal } from '@/components/account/form-refusal';
 import { PasswordField } from '@/components/account/password-field';
+import { keepTyped } from '@/components/ui/keep-typed';
 import { SubmitButton } from '@/components/ui/submit-button';
 import type { FormReply } from '@/lib/transport/form';
 
@@ -19,7 +20,7 @@ export function ChoosePassword({ secret, email, submit, action }: ChoosePassword
   const [lastResult, send] = useActionState(action, undefined);
   const [form, fields] = useForm<{ password: string }>({ id: 'choose-password', lastResult });
   return (
-    <form {...getFormProps(form)} action={send} className="grid gap-4">
+    <form {...getFormProps(form)} action={send} onReset={keepTyped} className="grid gap-4">
       <FormRefusal errors={form.errors} />
       <input type="hidden" name="secret" value={secret} />
       <input type="hidden" name="username" autoComplete="username" defaultValue={email ?? ''} />

@@ -5,6 +5,7 @@ import { parseWithZod } from '@conform-to/zod/v4';
 import { useActionState } from 'react';
 import { FormRefusal } from '@/components/account/form-refusal';
 import { PasswordField } from '@/components/account/password-field';
+import { keepTyped } from '@/components/ui/keep-typed';
 import { SubmitButton } from '@/components/ui/submit-button';
 import { changePasswordInput } from '@/lib/contracts/account';
 import { changePasswordAction } from '../actions';
@@ -18,7 +19,7 @@ export function ChangePassword({ word, signsInAs }: { word: 'password' | 'passph
     onValidate: ({ formData }) => parseWithZod(formData, { schema: changePasswordInput }),
   });
   return (
-    <form {...getFormProps(form)} action={action} className="grid max-w-[26rem] gap-4">
+    <form {...getFormProps(form)} action={action} onReset={keepTyped} className="grid max-w-[26rem] gap-4">
       <FormRefusal errors={form.errors} />
       <input type="hidden" name="username" autoComplete="username" defaultValue={signsInAs} />
       <PasswordField

@@ -4,6 +4,7 @@ import { getFormProps, getInputProps, getSelectProps, useForm } from '@conform-t
 import { parseWithZod } from '@conform-to/zod/v4';
 import { useActionState, useState } from 'react';
 import { FormRefusal } from '@/components/account/form-refusal';
+import { keepTyped } from '@/components/ui/keep-typed';
 import { LinkButton } from '@/components/ui/link-button';
 import { Segmented } from '@/components/ui/segmented';
 import { SelectField } from '@/components/ui/select-field';
@@ -27,7 +28,7 @@ export function SchoolForm({ school, zones }: SchoolFormProps) {
     onValidate: ({ formData }) => parseWithZod(formData, { schema: changeSchoolInput }),
   });
   return (
-    <form {...getFormProps(form)} action={action} className="grid max-w-[30rem] gap-4">
+    <form {...getFormProps(form)} action={action} onReset={keepTyped} className="grid max-w-[30rem] gap-4">
       <FormRefusal errors={form.errors} />
       <TextField
         label="name"

@@ -4,6 +4,7 @@ import { getFormProps, getInputProps, useForm } from '@conform-to/react';
 import { parseWithZod } from '@conform-to/zod/v4';
 import { useActionState } from 'react';
 import { FormRefusal } from '@/components/account/form-refusal';
+import { keepTyped } from '@/components/ui/keep-typed';
 import { SubmitButton } from '@/components/ui/submit-button';
 import { TextField } from '@/components/ui/text-field';
 import { addTermInput, changeTermInput } from '@/lib/contracts/school';
@@ -26,7 +27,7 @@ export function TermForm({ term }: TermFormProps) {
         : parseWithZod(formData, { schema: addTermInput }),
   });
   return (
-    <form {...getFormProps(form)} action={action} className="grid max-w-[30rem] gap-4">
+    <form {...getFormProps(form)} action={action} onReset={keepTyped} className="grid max-w-[30rem] gap-4">
       <FormRefusal errors={form.errors} />
       {term ? <input type="hidden" name="termId" value={term.termId} /> : null}
       <TextField

@@ -4,6 +4,7 @@ import { getFormProps, getInputProps, useForm } from '@conform-to/react';
 import { parseWithZod } from '@conform-to/zod/v4';
 import { useActionState } from 'react';
 import { FormRefusal } from '@/components/account/form-refusal';
+import { keepTyped } from '@/components/ui/keep-typed';
 import { SubmitButton } from '@/components/ui/submit-button';
 import { TextField } from '@/components/ui/text-field';
 import { askResetInput } from '@/lib/contracts/account';
@@ -17,7 +18,7 @@ export function AskReset() {
     onValidate: ({ formData }) => parseWithZod(formData, { schema: askResetInput }),
   });
   return (
-    <form {...getFormProps(form)} action={action} className="grid gap-4">
+    <form {...getFormProps(form)} action={action} onReset={keepTyped} className="grid gap-4">
       <FormRefusal errors={form.errors} />
       <TextField
         label="email"

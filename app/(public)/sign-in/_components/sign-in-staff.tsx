@@ -6,6 +6,7 @@ import Link from 'next/link';
 import { useActionState } from 'react';
 import { FormRefusal } from '@/components/account/form-refusal';
 import { PasswordField } from '@/components/account/password-field';
+import { keepTyped } from '@/components/ui/keep-typed';
 import { SubmitButton } from '@/components/ui/submit-button';
 import { TextField } from '@/components/ui/text-field';
 import { signInStaffInput } from '@/lib/contracts/account';
@@ -19,7 +20,7 @@ export function SignInStaff() {
     onValidate: ({ formData }) => parseWithZod(formData, { schema: signInStaffInput }),
   });
   return (
-    <form {...getFormProps(form)} action={action} className="grid gap-4">
+    <form {...getFormProps(form)} action={action} onReset={keepTyped} className="grid gap-4">
       <FormRefusal errors={form.errors} />
       <TextField
         label="email"

@@ -5,6 +5,7 @@ import { parseWithZod } from '@conform-to/zod/v4';
 import { useActionState } from 'react';
 import { FormRefusal } from '@/components/account/form-refusal';
 import { PasswordField } from '@/components/account/password-field';
+import { keepTyped } from '@/components/ui/keep-typed';
 import { SubmitButton } from '@/components/ui/submit-button';
 import { TextField } from '@/components/ui/text-field';
 import { signInStudentInput } from '@/lib/contracts/account';
@@ -21,7 +22,7 @@ export function SignInStudent({ schoolCode }: { schoolCode: string }) {
     onValidate: ({ formData }) => parseWithZod(formData, { schema: signInStudentInput }),
   });
   return (
-    <form {...getFormProps(form)} action={action} className="grid gap-4">
+    <form {...getFormProps(form)} action={action} onReset={keepTyped} className="grid gap-4">
       <FormRefusal errors={form.errors} />
       <TextField
         label="school code"

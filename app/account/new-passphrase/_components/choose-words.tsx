@@ -5,6 +5,7 @@ import { useActionState, useState, useTransition } from 'react';
 import { FormRefusal } from '@/components/account/form-refusal';
 import { PasswordField } from '@/components/account/password-field';
 import { Button } from '@/components/ui/button';
+import { keepTyped } from '@/components/ui/keep-typed';
 import { Segmented } from '@/components/ui/segmented';
 import { SubmitButton } from '@/components/ui/submit-button';
 import { choosePassphraseAction, offerWordsAction } from '../../actions';
@@ -22,7 +23,7 @@ export function ChooseWords({ offered }: { offered: string }) {
   const [own, setOwn] = useState('');
   const [pending, startTransition] = useTransition();
   return (
-    <form {...getFormProps(form)} action={action} className="grid gap-4">
+    <form {...getFormProps(form)} action={action} onReset={keepTyped} className="grid gap-4">
       <FormRefusal errors={form.errors} />
       <Segmented label="which words" options={WAYS} value={way} onChange={setWay} />
       {way === 'made' ? (

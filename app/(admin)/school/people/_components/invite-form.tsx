@@ -4,6 +4,7 @@ import { getFormProps, getInputProps, useForm } from '@conform-to/react';
 import { parseWithZod } from '@conform-to/zod/v4';
 import { useActionState } from 'react';
 import { FormRefusal } from '@/components/account/form-refusal';
+import { keepTyped } from '@/components/ui/keep-typed';
 import { LinkButton } from '@/components/ui/link-button';
 import { SubmitButton } from '@/components/ui/submit-button';
 import { TextField } from '@/components/ui/text-field';
@@ -20,7 +21,7 @@ export function InviteForm({ departments }: { departments: { departmentId: strin
   });
   const [only, ...others] = departments;
   return (
-    <form {...getFormProps(form)} action={action} className="grid max-w-[34rem] gap-4">
+    <form {...getFormProps(form)} action={action} onReset={keepTyped} className="grid max-w-[34rem] gap-4">
       <FormRefusal errors={form.errors} />
       <div className="grid gap-4 sm:grid-cols-2">
         <TextField

@@ -4,6 +4,7 @@ import { getFormProps, useForm } from '@conform-to/react';
 import { parseWithZod } from '@conform-to/zod/v4';
 import { useActionState } from 'react';
 import { FormRefusal } from '@/components/account/form-refusal';
+import { keepTyped } from '@/components/ui/keep-typed';
 import { SubmitButton } from '@/components/ui/submit-button';
 import { changeRolesInput } from '@/lib/contracts/school';
 import { changeRolesAction } from '../actions';
@@ -24,7 +25,7 @@ export function RolesForm({ personId, roles, departmentId, departments }: RolesF
     onValidate: ({ formData }) => parseWithZod(formData, { schema: changeRolesInput }),
   });
   return (
-    <form {...getFormProps(form)} action={action} className="grid max-w-[34rem] gap-4">
+    <form {...getFormProps(form)} action={action} onReset={keepTyped} className="grid max-w-[34rem] gap-4">
       <FormRefusal errors={form.errors} />
       <input type="hidden" name="personId" value={personId} />
       <RoleFields

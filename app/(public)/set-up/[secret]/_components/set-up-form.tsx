@@ -4,6 +4,7 @@ import { getFormProps, useForm } from '@conform-to/react';
 import { parseWithZod } from '@conform-to/zod/v4';
 import { useActionState } from 'react';
 import { FormRefusal } from '@/components/account/form-refusal';
+import { keepTyped } from '@/components/ui/keep-typed';
 import { SubmitButton } from '@/components/ui/submit-button';
 import { setUpSchoolInput } from '@/lib/contracts/school';
 import { setUpSchoolAction } from '../actions';
@@ -34,7 +35,7 @@ export function SetUpForm({ secret, term, zones }: SetUpFormProps) {
     onValidate: ({ formData }) => parseWithZod(formData, { schema: setUpSchoolInput }),
   });
   return (
-    <form {...getFormProps(form)} action={action} className="flex flex-1 flex-col">
+    <form {...getFormProps(form)} action={action} onReset={keepTyped} className="flex flex-1 flex-col">
       <FormRefusal errors={form.errors} />
       <FormRefusal errors={fields.secret.errors} />
       <input type="hidden" name="secret" value={secret} />
