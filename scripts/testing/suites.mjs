@@ -38,7 +38,7 @@ export async function runVitest(project, args = []) {
 export async function runJourneys(crew, args = []) {
   const build = await ensureBuild();
   const port = await freePortForRun();
-  const { env, cluster } = await openOwnStation(crew, { name: 'e2e', port, fleeting: true });
+  const { env } = await openOwnStation(crew, { name: 'e2e', port, fleeting: true });
   await prepareDatabase(env, { demo: false });
   await serve(crew, { env, port, build, show: false });
   const file = reportFile('e2e');
@@ -49,8 +49,6 @@ export async function runJourneys(crew, args = []) {
       env: {
         ...process.env,
         E2E_BASE_URL: env.APP_URL,
-        E2E_BUILD: build,
-        E2E_CLUSTER: cluster.name,
         E2E_MAILBOX_URL: env.MAILBOX_URL,
         DATABASE_URL: env.DATABASE_URL,
         APP_URL: env.APP_URL,
