@@ -14,7 +14,7 @@ export function ScrollRegion({ children }: { children: ReactNode }) {
     return () => observer.disconnect();
   }, []);
   return (
-    <div ref={ref} className="max-w-full overflow-x-auto" {...(scrolls ? { tabIndex: 0 } : {})}>
+    <div ref={ref} className="relative max-w-full overflow-x-auto" {...(scrolls ? { tabIndex: 0 } : {})}>
       {children}
     </div>
   );
