@@ -1,5 +1,9 @@
+export { bandsFromRate, type Rate } from './bands-from-rate';
+export { type AttemptScore, combineAttempts } from './combine-attempts';
 export { compileRubric } from './compile-rubric';
 export { defaultRubricForm } from './default-rubric-form';
+export { judgePrediction, type PredictionJudgement } from './judge-prediction';
+export { type PriceStep, priceCurve } from './price-curve';
 export { type Dropped, type ProjectedAttempt, projectAttempt } from './project-attempt';
 export { type Rescored, rescore } from './rescore';
 export * from './rubric-form';
