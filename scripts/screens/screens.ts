@@ -9,8 +9,9 @@ export type ScreenRole = 'public' | DemoAccount['role'];
  * To add one, add a line to the list below: who sees it, a name for its file, and its path. Where the path is not
  * known beforehand (a sitting, a student), give `go` instead: it starts on the role's home and walks there as a
  * person would, by links and buttons. The demo is the same every time, so titles and names can be relied on.
+ * A page that answers with an error on purpose says so by its `status`.
  */
-export type Screen = { role: ScreenRole; name: string } & (
+export type Screen = { role: ScreenRole; name: string; status?: number } & (
   | { path: string }
   | { go: (page: Page) => Promise<void> }
 );
@@ -25,7 +26,7 @@ export const SCREENS: Screen[] = [
       await page.getByText('student', { exact: true }).click();
     },
   },
-  { role: 'public', name: 'not-found', path: '/no-such-page' },
+  { role: 'public', name: 'not-found', path: '/no-such-page', status: 404 },
   { role: 'teacher', name: 'home', path: '/' },
   { role: 'student', name: 'home', path: '/' },
   { role: 'head', name: 'home', path: '/' },

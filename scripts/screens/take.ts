@@ -63,7 +63,7 @@ async function takeScreen(context: BrowserContext, size: Size, screen: Screen): 
   const label = `${size} ${screen.role}-${screen.name}`;
   const page = await context.newPage();
   page.setDefaultTimeout(10_000);
-  const problems = watchPage(page);
+  const problems = watchPage(page, { expectedStatus: screen.status });
   try {
     await arrive(page, screen);
     await page.evaluate(() => document.fonts.ready);
