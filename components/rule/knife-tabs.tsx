@@ -71,7 +71,7 @@ function KnifeTab({ edge, scale, layout }: { edge: KnifeEdge; scale: RuleScale; 
         parts={lengthParts(deviation, scale.unit, {}, true)}
         x={x + (out * TAB.width) / 2}
         baseline={top + 22}
-        size={21}
+        size={23}
         className={held ? 'fill-on-act' : 'fill-ink'}
       />
     </g>

@@ -1,6 +1,5 @@
 import type { Length } from '@/lib/length';
-import type { Points, SizeRule } from '@/lib/scoring';
-import { priceCurve } from './price-curve-local';
+import { type Points, priceCurve, type SizeRule } from '@/lib/scoring';
 
 /** A stretch of deviations with one price, inclusive at both ends. */
 export interface PriceStep {
