@@ -84,9 +84,14 @@ function priceWithin(rule: SizeRule, side: 'over' | 'under', deviation: Length):
   return Math.min(lose, rule.cap ?? lose);
 }
 
+/** A cap above every price changes nothing, so what counts is the dearest that can come about. */
 function capRow(prices: readonly PricedSize[]): ComparedRow {
+  const dearest = ({ rule: { beyondOver, beyondUnder, cap } }: PricedSize) => {
+    const most = Math.max(beyondOver, beyondUnder);
+    return Math.min(most, cap ?? most);
+  };
   return comparedRow(
     'most that a size loses',
-    prices.map(({ rule }) => pointsValue(rule.cap)),
+    prices.map((price) => pointsValue(dearest(price))),
   );
 }

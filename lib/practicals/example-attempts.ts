@@ -1,0 +1,171 @@
+import { type Length, TICKS_PER_INCH, TICKS_PER_MM } from '@/lib/length';
+import {
+  type Attempt,
+  AXES,
+  type Axis,
+  type Line,
+  type Piece,
+  projectAttempt,
+  type Reading,
+  type Rubric,
+  scoreAttempt,
+} from '@/lib/scoring';
+import type { Phrase } from './compare-types';
+
+/** An invented attempt that shows what a rubric gives. */
+export interface ExampleAttempt {
+  id: 'free' | 'one' | 'line' | 'fence' | 'step' | 'missing' | 'gross';
+  label: Phrase;
+  attempt: Attempt;
+}
+
+/** The size that the examples of single errors are about. */
+export interface ExampleSize {
+  lineId: string;
+  axis: Axis;
+}
+
+type Deviate = (line: Line, ordinal: number, axis: Axis) => Length;
+
+/**
+ * Attempts that show the price of usual errors under this rubric: nothing wrong; one size short and the same size of
+ * the whole line shorter still; every width out by a fence; every size one step over; one piece missing; one so far
+ * off that it is not that part. Deviations are edges of the rubric's own bands, so that each example changes
+ * when the bands do. Pure; without a gross limit, or for a limit that leaves no length, that example is left out.
+ */
+export function exampleAttempts(rubric: Rubric, about?: ExampleSize): ExampleAttempt[] {
+  const line = rubric.lines.find(({ id }) => id === about?.lineId) ?? rubric.lines[0];
+  const last = rubric.lines.at(-1);
+  if (!line || !last) return [];
+  const axis = about?.axis ?? 'length';
+  const [near, far] = pricedEdges(rubric, line, axis, 'under');
+  const overWidth = pricedEdges(rubric, line, 'width', 'over')[0];
+  const isOf = (each: Line) => each.id === line.id;
+  const one: Deviate = (each, ordinal, on) => (isOf(each) && ordinal === 1 && on === axis ? -near : 0);
+  const all: Deviate = (each, _, on) => (isOf(each) && on === axis ? -far : 0);
+  return [
+    { id: 'free', label: ['every size in its free band'], attempt: attemptOf(rubric, () => 0) },
+    {
+      id: 'one',
+      label: shortBy(nameOne(line), axis, near),
+      attempt: attemptOf(rubric, one),
+    },
+    ...(line.quantity > 1
+      ? [
+          {
+            id: 'line' as const,
+            label: shortBy(nameAll(line), axis, far),
+            attempt: attemptOf(rubric, all),
+          },
+        ]
+      : []),
+    {
+      id: 'fence',
+      label: ['rip fence out: all widths ', { ticks: overWidth }, ' over'],
+      attempt: attemptOf(rubric, (_, __, on) => (on === 'width' ? overWidth : 0)),
+    },
+    {
+      id: 'step',
+      label: ['every size one step over'],
+      attempt: attemptOf(rubric, (each, _, on) => pricedEdges(rubric, each, on, 'over')[0]),
+    },
+    {
+      id: 'missing',
+      label: [`${nameOne(last)} missing`],
+      attempt: withPiece(
+        attemptOf(rubric, () => 0),
+        last.id,
+        (piece) => ({
+          ...piece,
+          state: 'missing',
+          sizes: {},
+          checks: {},
+        }),
+      ),
+    },
+    ...grossExample(rubric, last),
+  ];
+}
+
+/** "end", or "one end" of several. */
+function nameOne({ label, quantity }: Line): string {
+  return quantity > 1 ? `one ${label}` : label;
+}
+
+function nameAll({ label, quantity }: Line): string {
+  return quantity === 2 ? `both of ${label}` : `all ${quantity} of ${label}`;
+}
+
+function shortBy(what: string, axis: Axis, ticks: Length): Phrase {
+  return axis === 'length' ? [`${what} `, { ticks }, ' short'] : [`${what}, ${axis} `, { ticks }, ' under'];
+}
+
+/** The far edges of the first band that costs, and of the last; past a lone free band, as much again. */
+function pricedEdges(
+  { unit }: Rubric,
+  line: Line,
+  axis: Axis,
+  side: 'over' | 'under',
+): [near: Length, far: Length] {
+  const bands = line.sizes[axis][side];
+  const free = bands.filter(({ lose }) => lose === 0).at(-1)?.within ?? 0;
+  const priced = bands.filter(({ lose }) => lose > 0);
+  const near = priced[0]?.within ?? Math.max(free * 2, FINE[unit]);
+  return [near, priced.at(-1)?.within ?? near];
+}
+
+function attemptOf(rubric: Rubric, deviate: Deviate): Attempt {
+  const pieces = rubric.lines.flatMap((line) =>
+    Array.from({ length: line.quantity }, (_, index) => pieceOf(line, index + 1, deviate)),
+  );
+  const work = Object.fromEntries(rubric.workChecks.map(({ id }) => [id, 0]));
+  return { pieces, work, bonus: 0, daysLate: 0 };
+}
+
+function pieceOf(line: Line, ordinal: number, deviate: Deviate): Piece {
+  const reading = (axis: Axis): Reading => {
+    const ticks = line.target[axis] + deviate(line, ordinal, axis);
+    return { kind: 'value', ticks: Math.max(1, ticks) };
+  };
+  const [thickness, width, length] = AXES.map(reading);
+  return {
+    lineId: line.id,
+    ordinal,
+    state: 'present',
+    sizes: { thickness, width, length },
+    checks: Object.fromEntries(line.checks.map(({ id }) => [id, 0])),
+  };
+}
+
+function withPiece(attempt: Attempt, lineId: string, change: (piece: Piece) => Piece): Attempt {
+  const pieces = attempt.pieces.map((piece) =>
+    piece.lineId === lineId && piece.ordinal === 1 ? change(piece) : piece,
+  );
+  return { ...attempt, pieces };
+}
+
+const FINE = { in: TICKS_PER_INCH / 32, mm: TICKS_PER_MM / 2 };
+const COARSE = { in: TICKS_PER_INCH / 8, mm: 2 * TICKS_PER_MM };
+
+function grossExample(rubric: Rubric, line: Line): ExampleAttempt[] {
+  if (rubric.grossLimit === null) return [];
+  const coarse = COARSE[rubric.unit];
+  const off = Math.ceil((rubric.grossLimit + rubric.margin + 1) / coarse) * coarse;
+  if (line.target.length <= off) return [];
+  const deviate: Deviate = (each, ordinal, on) =>
+    each.id === line.id && ordinal === 1 && on === 'length' ? -off : 0;
+  return [
+    {
+      id: 'gross',
+      label: [`${nameOne(line)} `, { ticks: off }, ' short: not that part'],
+      attempt: attemptOf(rubric, deviate),
+    },
+  ];
+}
+
+/** The score of an example under a rubric, or null where that rubric does not know all of its pieces. */
+export function scoreExample(rubric: Rubric, { attempt }: ExampleAttempt): number | null {
+  const projected = projectAttempt(rubric, attempt);
+  if (projected.dropped.some(({ what }) => what === 'piece')) return null;
+  return scoreAttempt(rubric, projected.attempt).score;
+}
