@@ -1,9 +1,9 @@
 'use client';
 
-import { useState } from 'react';
+import { type ReactNode, useState } from 'react';
 import { pieceScale } from '@/components/part/piece-face';
 import { classNames } from '@/components/ui/class-names';
-import { listPieces, type PiecePlace } from '@/lib/round/pieces';
+import { listPieces } from '@/lib/round/pieces';
 import { recordOf, valueAt } from '@/lib/round/record';
 import { AXES, type Axis } from '@/lib/scoring';
 import { useBench } from './bench-context';
@@ -35,7 +35,11 @@ export function Board() {
   return (
     <section aria-label="pieces" className="min-w-0">
       <div className="flex">
-        <AxisLabels axis={spot?.axis ?? null} />
+        <AxisLabels axis={spot?.axis ?? null}>
+          {pieces.length > atOnce ? (
+            <Pager of={pieces.length} first={first} atOnce={atOnce} turn={(at) => setTurned({ at, spot })} />
+          ) : null}
+        </AxisLabels>
         {shown.map((place) => (
           <PieceColumn
             key={`${place.line.id}/${place.ordinal}`}
@@ -45,17 +49,14 @@ export function Board() {
           />
         ))}
       </div>
-      {pieces.length > atOnce ? (
-        <Pager pieces={pieces} first={first} atOnce={atOnce} turn={(at) => setTurned({ at, spot })} />
-      ) : null}
     </section>
   );
 }
 
-function AxisLabels({ axis }: { axis: Axis | null }) {
+function AxisLabels({ axis, children }: { axis: Axis | null; children: ReactNode }) {
   return (
     <div className="w-[78px] shrink-0">
-      <div className="h-[108px]" />
+      <div className="h-[108px]">{children}</div>
       {AXES.map((each) => (
         <p
           key={each}
@@ -112,33 +113,38 @@ function WorkKey() {
 }
 
 interface PagerProps {
-  pieces: readonly PiecePlace[];
+  of: number;
   first: number;
   atOnce: number;
   turn: (at: number) => void;
 }
 
-function Pager({ pieces, first, atOnce, turn }: PagerProps) {
-  const pages = Array.from({ length: Math.ceil(pieces.length / atOnce) }, (_, index) => index * atOnce);
+function Pager({ of, first, atOnce, turn }: PagerProps) {
+  const last = Math.min(first + atOnce, of);
   return (
-    <nav
-      aria-label="pieces shown"
-      className="mt-2 flex flex-wrap gap-2 pl-[78px] lg:absolute lg:top-1 lg:left-0 lg:mt-0"
-    >
-      {pages.map((at) => (
-        <button
-          key={at}
-          type="button"
-          aria-current={at === first}
-          onClick={() => turn(at)}
-          className={classNames(
-            'tnum min-h-11 min-w-11 border border-ink px-2 text-label font-[620]',
-            at === first ? 'bg-ink text-sheet' : 'bg-plate',
-          )}
-        >
-          {at + 1}–{Math.min(at + atOnce, pieces.length)}
-        </button>
-      ))}
+    <nav aria-label="pieces shown" className="flex h-full flex-col items-end gap-0.5 pr-2">
+      <p className="narrow tnum text-label whitespace-nowrap text-ink-2">
+        {first + 1}–{last} of {of}
+      </p>
+      <TurnKey onPress={() => turn(first - atOnce)} disabled={first === 0}>
+        before
+      </TurnKey>
+      <TurnKey onPress={() => turn(last)} disabled={last >= of}>
+        after
+      </TurnKey>
     </nav>
+  );
+}
+
+function TurnKey(props: { onPress: () => void; disabled: boolean; children: string }) {
+  return (
+    <button
+      type="button"
+      onClick={props.onPress}
+      disabled={props.disabled}
+      className="narrow h-10 w-full border border-ink bg-plate text-text font-[620] active:bg-ink active:text-sheet disabled:border-dashed disabled:border-rule disabled:text-ink-2"
+    >
+      {props.children}
+    </button>
   );
 }

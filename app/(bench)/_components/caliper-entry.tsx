@@ -145,7 +145,7 @@ function Settings() {
       <p className="narrow text-lead leading-6">
         <span className="text-ink-2">zero </span>
         {caliper.zero === null ? (
-          'not checked: close the jaws and press'
+          'not checked: close and press'
         ) : (
           <LengthText ticks={caliper.zero} unit={plan.rubric.unit} decimals={decimals} signed />
         )}

@@ -14,7 +14,7 @@ export function KeptAndSent() {
       onClick={() => open('kept')}
       aria-expanded={panel === 'kept'}
       className={classNames(
-        'grid min-h-14 w-[164px] grid-cols-[auto_auto_1fr] content-center items-center gap-x-2 border-l border-rule px-3 text-left select-none active:bg-ink active:text-sheet',
+        'grid min-h-14 w-[164px] grid-cols-[auto_auto_1fr] content-center items-center gap-x-2 border-rule px-3 text-left select-none max-lg:border-t lg:border-l active:bg-ink active:text-sheet',
         panel === 'kept' && 'bg-ink text-sheet',
         trouble && panel !== 'kept' && 'bg-refuse-wash text-refuse',
       )}

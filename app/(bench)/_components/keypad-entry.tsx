@@ -12,6 +12,7 @@ import { findPiece } from '@/lib/round/pieces';
 import { priceSize } from '@/lib/round/price-size';
 import { type Graduation, neighbours } from '@/lib/round/rule-scale';
 import { useBench } from './bench-context';
+import { useWide } from './use-wide';
 
 /** Neighbours of the target first, one tap each; then the keys. What is typed is what is kept. */
 export function KeypadEntry({ why }: { why?: string }) {
@@ -166,8 +167,21 @@ const ROWS: Record<'in' | 'mm', [string, number][][]> = {
 
 const SPAN: Record<number, string> = { 1: '', 2: 'lg:col-span-2' };
 
+/** Five in a row on a phone: digits, eighths, what builds finer fractions. */
+const PHONE_ORDER = [
+  ...'1234567890',
+  ...FRACTION_KEYS,
+  'and',
+  '.',
+  'rub',
+  ...DENOMINATOR_KEYS,
+  'unit',
+  'keep',
+];
+
 function Keys() {
   const { view, press } = useBench();
+  const wide = useWide();
   const { unit } = view.state.keypad;
   const { rubric } = view.state.plan;
   return ROWS[rubric.unit].flat().map(([key, span]) => (
@@ -180,8 +194,9 @@ function Keys() {
         'flex min-h-touch touch-manipulation flex-col items-center justify-center select-none active:bg-ink active:text-sheet focus-visible:relative focus-visible:z-10',
         LINE,
         SPAN[span],
-        key === 'keep' ? 'bg-act text-on-act max-lg:col-span-2' : 'bg-plate',
+        key === 'keep' ? 'bg-act text-on-act max-lg:col-span-5' : 'bg-plate',
       )}
+      style={wide ? undefined : { order: PHONE_ORDER.indexOf(key) + 1 }}
     >
       <KeyFace text={key} unit={unit} />
     </button>

@@ -7,6 +7,12 @@ import { inHand } from '@/lib/round/walk';
 import { useBench } from './bench-context';
 import { ENTRIES } from './bench-settings';
 import { KeptAndSent } from './kept-and-sent';
+import { useWide } from './use-wide';
+
+function sizeOfName(name: string, crowded: boolean): string {
+  if (!crowded || name.length <= 17) return 'text-[31px]';
+  return name.length <= 22 ? 'text-[25px]' : 'text-[20px]';
+}
 
 /** The head of the bench: whose pieces these are, the ways to enter a reading, and what has been kept. */
 export function Strip() {
@@ -23,7 +29,13 @@ export function Strip() {
           <p className="narrow overflow-hidden text-label text-ellipsis whitespace-nowrap text-ink-2">
             {practice ? 'practice, ' : ''}Period {bundle.period}, {bundle.task.title}, {rubric}
           </p>
-          <h1 className="overflow-hidden font-title text-[31px] leading-9 font-[620] text-ellipsis whitespace-nowrap">
+          <h1
+            className={classNames(
+              'overflow-hidden font-title font-[620] text-ellipsis whitespace-nowrap',
+              sizeOfName(student ? fullName(student) : '', view.inHand.length > 0),
+              'leading-9',
+            )}
+          >
             {student ? fullName(student) : 'no students'}
             {student && student.attemptNumber > 1 ? (
               <span className="font-text text-lead"> attempt {student.attemptNumber}</span>
@@ -38,7 +50,7 @@ export function Strip() {
       <Others />
       <EntrySwitch />
       <KeptAndSent />
-      <div className="flex">
+      <div className="flex border-rule max-lg:flex-1 max-lg:border-t max-lg:[&>*]:flex-1">
         <PlainKey pressed={panel === 'set-up'} onPress={() => open('set-up')}>
           set up
         </PlainKey>
@@ -87,7 +99,7 @@ function Others() {
   return (
     <div
       className={classNames(
-        'flex min-h-14 min-w-0 flex-[0_1_11.5rem] flex-col justify-center border-l border-rule px-3',
+        'flex min-h-14 min-w-0 flex-col justify-center border-rule px-3 max-lg:w-full max-lg:border-t lg:flex-[0_1_10.5rem] lg:border-l',
         first.here && 'border-b-edge border-b-refuse',
       )}
       role="status"
@@ -106,20 +118,27 @@ function Others() {
 
 function EntrySwitch() {
   const { settings, change, open } = useBench();
+  // Fewer than three graduations fit a phone: there the keypad stands for the rule.
+  const wide = useWide();
+  const entries = wide ? ENTRIES : ENTRIES.filter((entry) => entry !== 'rule');
+  const used = !wide && settings.entry === 'rule' ? 'keypad' : settings.entry;
   return (
-    <fieldset aria-label="how a reading is entered" className="flex border-l border-rule">
-      {ENTRIES.map((entry) => (
+    <fieldset
+      aria-label="how a reading is entered"
+      className="flex border-rule max-lg:border-t max-lg:[&>*]:flex-1 max-lg:flex-1 lg:border-l"
+    >
+      {entries.map((entry) => (
         <button
           key={entry}
           type="button"
-          aria-pressed={settings.entry === entry}
+          aria-pressed={used === entry}
           onClick={() => {
             change({ entry });
             open(null);
           }}
           className={classNames(
             'narrow min-h-14 min-w-[80px] px-2 text-lead font-[640] select-none not-first:border-l not-first:border-rule',
-            settings.entry === entry ? 'bg-act text-on-act' : 'active:bg-ink active:text-sheet',
+            used === entry ? 'bg-act text-on-act' : 'active:bg-ink active:text-sheet',
           )}
         >
           {entry}

@@ -16,3 +16,17 @@ export function useWide(): boolean {
     () => true,
   );
 }
+
+const MARGINS_PX = 36;
+
+/** How many px the bench is wide, inside its margins. */
+export function useBenchWidth(): number {
+  return useSyncExternalStore(
+    (listener) => {
+      window.addEventListener('resize', listener);
+      return () => window.removeEventListener('resize', listener);
+    },
+    () => window.innerWidth - MARGINS_PX,
+    () => 1144,
+  );
+}
