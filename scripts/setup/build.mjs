@@ -88,7 +88,8 @@ async function build(id, folder) {
   mkdirSync(join(root, folder), { recursive: true });
   // A configuration that extends another one is left alone by Next, so the project's own stays as it is.
   const settings = join('.data', 'builds', `${id}.tsconfig.json`);
-  writeFileSync(join(root, settings), '{ "extends": "../../tsconfig.json" }\n');
+  const exclude = ['node_modules', '.data', 'tests', 'e2e', 'scripts'].map((name) => `../../${name}`);
+  writeFileSync(join(root, settings), JSON.stringify({ extends: '../../tsconfig.json', exclude }));
   const generated = join(root, 'next-env.d.ts');
   const before = existsSync(generated) ? readFileSync(generated) : undefined;
   const { code, output } = await tryRun(process.execPath, ['node_modules/next/dist/bin/next', 'build'], {
