@@ -10,6 +10,8 @@ export function replyWithoutSecrets<Schema, Value, T>(
 ): SubmissionResult<string[]> {
   const { initialValue, ...reply } = result ? replyTo(submission, result) : submission.reply();
   if (!initialValue) return reply;
-  const kept = Object.entries(initialValue).filter(([name]) => !secrets.includes(name));
+  const kept = Object.entries(initialValue).filter(
+    ([name]) => !secrets.includes(name) && !name.startsWith('$ACTION'),
+  );
   return { ...reply, initialValue: Object.fromEntries(kept) };
 }

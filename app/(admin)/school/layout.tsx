@@ -1,8 +1,7 @@
-import { notFound } from 'next/navigation';
 import type { ReactNode } from 'react';
 import { AccountMenu } from '@/app/account/_components/account-menu';
+import { actorInRole } from '@/app/account/_components/actor-in-role';
 import { DeskShell } from '@/components/shell/desk-shell';
-import { pageActor } from '@/lib/transport/page';
 
 const NAV = [
   { href: '/school', label: 'school', exact: true },
@@ -10,12 +9,11 @@ const NAV = [
   { href: '/school/sections', label: 'sections' },
   { href: '/school/terms', label: 'terms' },
   { href: '/school/departments', label: 'departments' },
-  { href: '/school/log', label: 'access log' },
+  { href: '/school/log', label: 'log' },
 ];
 
 export default async function SchoolLayout({ children }: { children: ReactNode }) {
-  const actor = await pageActor();
-  if (actor.role !== 'admin') notFound();
+  const actor = await actorInRole('admin');
   const name = `${actor.givenName} ${actor.familyName}`.trim();
   return (
     <DeskShell

@@ -10,7 +10,7 @@ export default async function ResetPage({ searchParams }: { searchParams: Promis
   const { sent } = await searchParams;
   if (sent) {
     return (
-      <EntranceShell title="Look into your mail">
+      <EntranceShell title="Check your mail">
         <p className="mb-4">
           If there is an account with that e-mail, a link is on its way to it. It works once, for one hour.
         </p>

@@ -23,7 +23,7 @@ export default async function SignInPage({ searchParams }: SignInPageProps) {
     <EntranceShell
       title="Sign in"
       titleBlock={[
-        { label: 'school', value: known?.name ?? 'not known here yet', wide: true },
+        ...(known ? [{ label: 'school', value: known.name, wide: true }] : []),
         { label: 'unsent readings on this device', value: <UnsentCount />, wide: true },
       ]}
     >

@@ -13,59 +13,57 @@ export const metadata: Metadata = { title: 'Departments' };
 export default async function DepartmentsPage() {
   const departments = pageValue(await listDepartments(await pageActor(), {}));
   return (
-    <DeskPage
-      title="Departments"
-      aside={
+    <DeskPage title="Departments">
+      <div className="grid items-start gap-x-12 gap-y-8 lg:grid-cols-[minmax(0,1fr)_20rem]">
+        {departments.length === 0 ? (
+          <EmptyState title="No departments yet">
+            Practicals and sections belong to a department, and its head compares them. Add the first one.
+          </EmptyState>
+        ) : (
+          <Table caption="departments of the school">
+            <TableHead>
+              <tr>
+                <HeadCell>department</HeadCell>
+                <HeadCell>head</HeadCell>
+                <HeadCell align="right">sections</HeadCell>
+                <HeadCell>
+                  <span className="sr-only">rename</span>
+                </HeadCell>
+              </tr>
+            </TableHead>
+            <TableBody>
+              {departments.map(({ departmentId, name, heads, sectionCount }) => (
+                <tr key={departmentId}>
+                  <RowHead>{name}</RowHead>
+                  <Cell>
+                    {heads.length > 0 ? (
+                      heads.join(', ')
+                    ) : (
+                      <Link className="link" href="/school/people/invite">
+                        invite one
+                      </Link>
+                    )}
+                  </Cell>
+                  <Cell align="right">{sectionCount}</Cell>
+                  <Cell align="right">
+                    <Link
+                      className="link"
+                      href={`/school/departments/${departmentId}`}
+                      aria-label={`rename ${name}`}
+                    >
+                      rename
+                    </Link>
+                  </Cell>
+                </tr>
+              ))}
+            </TableBody>
+          </Table>
+        )}
         <section>
           <Heading className="mb-4 border-b border-ink pb-1">add a department</Heading>
           <DepartmentForm />
         </section>
-      }
-    >
-      {departments.length === 0 ? (
-        <EmptyState title="No departments yet">
-          Practicals and sections belong to a department, and its head compares them. Add the first one.
-        </EmptyState>
-      ) : (
-        <Table caption="departments of the school">
-          <TableHead>
-            <tr>
-              <HeadCell>department</HeadCell>
-              <HeadCell>head</HeadCell>
-              <HeadCell align="right">sections</HeadCell>
-              <HeadCell>
-                <span className="sr-only">rename</span>
-              </HeadCell>
-            </tr>
-          </TableHead>
-          <TableBody>
-            {departments.map(({ departmentId, name, heads, sectionCount }) => (
-              <tr key={departmentId}>
-                <RowHead>{name}</RowHead>
-                <Cell>
-                  {heads.length > 0 ? (
-                    heads.join(', ')
-                  ) : (
-                    <Link className="link" href="/school/people/invite">
-                      invite one
-                    </Link>
-                  )}
-                </Cell>
-                <Cell align="right">{sectionCount}</Cell>
-                <Cell align="right">
-                  <Link
-                    className="link"
-                    href={`/school/departments/${departmentId}`}
-                    aria-label={`rename ${name}`}
-                  >
-                    rename
-                  </Link>
-                </Cell>
-              </tr>
-            ))}
-          </TableBody>
-        </Table>
-      )}
+      </div>
     </DeskPage>
   );
 }

@@ -14,22 +14,21 @@ export const metadata: Metadata = { title: 'Terms' };
 export default async function TermsPage() {
   const terms = pageValue(await listTerms(await pageActor(), {}));
   return (
-    <DeskPage
-      title="Terms"
-      aside={
+    <DeskPage title="Terms">
+      <div className="grid items-start gap-x-12 gap-y-8 lg:grid-cols-[minmax(0,1fr)_20rem]">
+        {terms.length === 0 ? (
+          <EmptyState title="No terms yet">
+            Every section belongs to a term, and so does what is exported for it. Add the term you are in
+            first.
+          </EmptyState>
+        ) : (
+          <TermTable terms={terms} />
+        )}
         <section>
           <Heading className="mb-4 border-b border-ink pb-1">add a term</Heading>
           <TermForm />
         </section>
-      }
-    >
-      {terms.length === 0 ? (
-        <EmptyState title="No terms yet">
-          Every section belongs to a term, and so does what is exported for it. Add the term you are in first.
-        </EmptyState>
-      ) : (
-        <TermTable terms={terms} />
-      )}
+      </div>
     </DeskPage>
   );
 }

@@ -20,7 +20,13 @@ export function SignIn({ who, schoolCode }: SignInProps) {
   const [chosen, setChosen] = useState<string>(who);
   return (
     <div className="grid gap-4">
-      <Segmented label="who signs in" options={WHO} value={chosen} onChange={setChosen} />
+      <Segmented
+        label="who signs in"
+        className="[&_label]:flex-1"
+        options={WHO}
+        value={chosen}
+        onChange={setChosen}
+      />
       <div hidden={chosen !== 'staff'}>
         <SignInStaff />
       </div>

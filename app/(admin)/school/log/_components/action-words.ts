@@ -46,6 +46,7 @@ export function sayAction(action: string): string {
 export function sayDetails(details: unknown): string {
   if (typeof details !== 'object' || details === null) return '';
   return Object.entries(details)
+    .filter(([, value]) => value !== '' && value !== null)
     .map(([name, value]) => `${name.replaceAll(/([A-Z])/g, ' $1').toLowerCase()}: ${sayValue(value)}`)
     .join('; ');
 }

@@ -10,9 +10,9 @@ export function PeopleTable({ people, students }: { people: PersonView[]; studen
       <TableHead>
         <tr>
           <HeadCell>name</HeadCell>
-          {students ? <HeadCell>ID</HeadCell> : <HeadCell>email</HeadCell>}
+          {students ? <HeadCell>ID</HeadCell> : <HeadCell className="max-sm:hidden">email</HeadCell>}
           {students ? null : <HeadCell>roles</HeadCell>}
-          {students ? null : <HeadCell>department</HeadCell>}
+          {students ? null : <HeadCell className="max-md:hidden">department</HeadCell>}
           <HeadCell>
             <span className="sr-only">state</span>
           </HeadCell>
@@ -27,9 +27,11 @@ export function PeopleTable({ people, students }: { people: PersonView[]; studen
               </Link>
               {person.isSelf ? <span className="ml-2 text-label font-[480] text-ink-2">you</span> : null}
             </RowHead>
-            <Cell>{students ? person.localId : (person.email ?? person.localId)}</Cell>
+            <Cell className={students ? undefined : 'max-sm:hidden'}>
+              {students ? person.localId : (person.email ?? person.localId)}
+            </Cell>
             {students ? null : <Cell>{person.roles.map((role) => ROLE_NAMES[role]).join(', ')}</Cell>}
-            {students ? null : <Cell>{person.department?.name}</Cell>}
+            {students ? null : <Cell className="max-md:hidden">{person.department?.name}</Cell>}
             <Cell className="text-label text-ink-2">{STATE_WORDS[person.state]}</Cell>
           </tr>
         ))}
