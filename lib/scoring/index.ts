@@ -6,6 +6,8 @@ export { judgePrediction, type PredictionJudgement } from './judge-prediction';
 export { type PriceStep, priceCurve } from './price-curve';
 export { type Dropped, type ProjectedAttempt, projectAttempt } from './project-attempt';
 export { type Rescored, rescore } from './rescore';
+export type { Finding, FindingCode } from './review/finding';
+export { reviewRubric } from './review-rubric';
 export * from './rubric-form';
 export * from './rubric-form-schema';
 export * from './schemas';
