@@ -61,6 +61,7 @@ test('a forgotten password is reset by a mailed link; the page says the same of 
   for (const address of ['nobody@cedarfork.example', admin.email ?? '']) {
     await page.goto('/sign-in');
     await page.getByRole('link', { name: 'forgotten password' }).click();
+    await expect(page.getByRole('heading', { name: 'Forgotten password' })).toBeVisible();
     await page.getByLabel('email').fill(address);
     await page.getByRole('button', { name: 'send me a link' }).click();
     await expect(page.getByText('If there is an account with that e-mail')).toBeVisible();
