@@ -1,4 +1,5 @@
 import { randomUUID } from 'node:crypto';
+import { draftOf } from '@/lib/practicals/draft-of';
 import type { Task } from '@/lib/practicals/task';
 import type { Rubric } from '@/lib/scoring';
 import type { RubricForm } from '@/lib/scoring/rubric-form';
@@ -13,7 +14,7 @@ export interface TestPractical {
   rubric: Rubric;
 }
 
-/** A practical of the teacher's with its version 1 published. */
+/** A practical of the teacher's with its version 1 published, and the same as its draft. */
 export async function makePractical(
   school: TestSchool,
   ownerId: string,
@@ -38,6 +39,9 @@ export async function makePractical(
       (school_id, id, practical_id, number, task, form, rubric, engine_version, published_by)
     values (${school.id}, ${versionId}, ${practicalId}, 1, ${sql.json({ ...task })}, ${sql.json(jsonOf(form))},
       ${sql.json(jsonOf(rubric))}, 1, ${ownerId})`;
+  await sql`
+    insert into practical_drafts (school_id, practical_id, content, revision, saved_by)
+    values (${school.id}, ${practicalId}, ${sql.json(jsonOf(draftOf(task, form)))}, 1, ${ownerId})`;
   return { practicalId, versionId, task, rubric };
 }
 

@@ -114,9 +114,9 @@ function PieceSides({ cell, events }: { cell: Cell; events: readonly BenchEvent[
 }
 
 function Source({ event }: { event: BenchEvent }) {
-  const { view, bundle } = useBench();
+  const { view } = useBench();
   const own = event.authorId === view.state.plan.personId;
-  const who = own ? 'you' : (bundle.authors[event.authorId] ?? 'another person');
+  const who = own ? 'you' : (view.authors[event.authorId] ?? 'another person');
   const at = new Date(event.capturedAt).toLocaleTimeString([], { hour: 'numeric', minute: '2-digit' });
   return (
     <span className="text-lead">

@@ -68,7 +68,8 @@ export function LockScreen({ lock, choosing, onLock, onCancel }: LockScreenProps
       ) : (
         <>
           <p className="tnum h-12 min-w-56 border-b-outline border-ink text-[40px] leading-none tracking-[0.3em]">
-            {'•'.repeat(pin.length)}
+            <span aria-hidden="true">{'•'.repeat(pin.length)}</span>
+            <span className="sr-only">{pin.length} digits</span>
           </p>
           <p role="status" className="min-h-12 max-w-md text-lead">
             {wait > 0

@@ -105,12 +105,11 @@ function Others() {
       role="status"
     >
       <p className="narrow overflow-hidden text-label text-ellipsis whitespace-nowrap text-ink-2">
-        {first.here ? 'also in hand, ' : 'in hand, '}
-        {first.name}
+        {first.here ? 'also in hand' : `in hand, ${first.name}`}
         {more.length > 0 ? `, and ${more.length} more` : ''}
       </p>
       <p className="narrow overflow-hidden text-lead font-[660] text-ellipsis whitespace-nowrap">
-        {first.student}
+        {first.here ? first.name : first.student}
       </p>
     </div>
   );

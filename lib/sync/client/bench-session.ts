@@ -5,7 +5,7 @@ import { placeOf, startRound } from '@/lib/round/start-round';
 import type { Action, Mint, RoundState, Sound } from '@/lib/round/types';
 import type { OutboxState } from './outbox';
 import { pressesOf } from './presses-of';
-import type { Counts, LoadedRound, Parked, RoundStore } from './round-store';
+import type { Authors, Counts, LoadedRound, Parked, RoundStore } from './round-store';
 import type { TakenIn } from './unsent-file';
 
 /** Everything the bench screen shows, replaced as a whole on every change. */
@@ -15,6 +15,7 @@ export interface BenchView {
   sending: OutboxState;
   parked: readonly Parked[];
   inHand: readonly InHand[];
+  authors: Authors;
   /** Readings that this device could not write down. */
   failure: string | null;
 }
@@ -54,10 +55,16 @@ export class BenchSession {
       sending: { state: 'idle' },
       parked: [],
       inHand: bundle.inHand.others,
+      authors: bundle.authors,
       failure: null,
     };
     this.closers = [
-      store.onEvents((more) => this.change({ state: withEvents(this.view.state, more) })),
+      store.onEvents((more, authors) =>
+        this.change({
+          state: withEvents(this.view.state, more),
+          authors: { ...this.view.authors, ...authors },
+        }),
+      ),
       store.onCounts((counts) => this.change({ counts })),
       store.onSending((sending) => this.change({ sending })),
       store.onParked((parked) => this.park(parked)),

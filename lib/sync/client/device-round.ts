@@ -9,7 +9,7 @@ import { type DeviceStore, deviceStore } from './device-store';
 import { fetchInHand, fetchRound, postInHand } from './fetch-round';
 import { keepOnDevice } from './keep-on-device';
 import { Outbox, type OutboxState } from './outbox';
-import type { Counts, LoadResult, Parked, RoundStore } from './round-store';
+import type { Authors, Counts, EventListener, LoadResult, Parked, RoundStore } from './round-store';
 import { benchEvent, readStoredBundle, readStoredEvents, storeBundle } from './stored-round';
 import { type TakenIn, takeUnsentFile, writeUnsentFile } from './unsent-file';
 
@@ -31,7 +31,7 @@ export class DeviceRound implements RoundStore {
   private readonly outbox: Outbox;
   private readonly channel: BroadcastChannel;
   private readonly closers: (() => void)[] = [];
-  private readonly eventListeners = new Set<(events: BenchEvent[]) => void>();
+  private readonly eventListeners = new Set<EventListener>();
   private readonly inHandListeners = new Set<(view: InHandView) => void>();
   private attemptInHand: string | null = null;
   private saidAt = 0;
@@ -62,12 +62,13 @@ export class DeviceRound implements RoundStore {
 
   async load(): Promise<LoadResult> {
     const { store, personId, sittingId } = this;
-    const fetched = await fetchRound(sittingId);
+    const before = await readStoredBundle(store, personId, sittingId);
+    const fetched = await fetchRound(sittingId, before !== null);
     if (fetched.ok) {
       await storeBundle(store, personId, fetched.value);
       this.benchEvents = fetched.value.inHand.benchEvents;
     }
-    const bundle = fetched.ok ? fetched.value : await readStoredBundle(store, personId, sittingId);
+    const bundle = fetched.ok ? fetched.value : before;
     if (!bundle || (!fetched.ok && fetched.why === 'not-found')) {
       return { ok: false, why: fetched.ok ? 'not-found' : fetched.why };
     }
@@ -88,7 +89,7 @@ export class DeviceRound implements RoundStore {
     await this.store.meta.put({ key: this.placeKey, value: { ...place, skipped: [...place.skipped] } });
   }
 
-  onEvents(listener: (events: BenchEvent[]) => void): () => void {
+  onEvents(listener: EventListener): () => void {
     this.eventListeners.add(listener);
     return () => this.eventListeners.delete(listener);
   }
@@ -183,8 +184,8 @@ export class DeviceRound implements RoundStore {
     return () => subscription.unsubscribe();
   }
 
-  private tellEvents(events: BenchEvent[]): void {
-    if (events.length > 0) for (const listener of this.eventListeners) listener(events);
+  private tellEvents(events: BenchEvent[], authors: Authors = {}): void {
+    if (events.length > 0) for (const listener of this.eventListeners) listener(events, authors);
   }
 
   /** Events that another page of this browser has kept. */
@@ -220,10 +221,13 @@ export class DeviceRound implements RoundStore {
     try {
       const stored = await this.store.readings.where({ sittingId: this.sittingId }).count();
       if (stored < benchEvents) {
-        const fetched = await fetchRound(this.sittingId);
+        const fetched = await fetchRound(this.sittingId, true);
         if (!fetched.ok) return;
         await storeBundle(this.store, this.personId, fetched.value);
-        this.tellEvents(fetched.value.events.map((event) => benchEvent({ event })));
+        this.tellEvents(
+          fetched.value.events.map((event) => benchEvent({ event })),
+          fetched.value.authors,
+        );
       }
       this.benchEvents = benchEvents;
     } finally {

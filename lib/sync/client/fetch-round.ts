@@ -8,11 +8,17 @@ import {
 
 export type Fetched<T> = { ok: true; value: T } | { ok: false; why: 'sign-in' | 'not-found' | 'offline' };
 
-const ROUND_TIMEOUT_MS = 8_000;
+/** Without a round on the device there is nothing to show meanwhile; with one, a hanging network is not waited for. */
+const ROUND_TIMEOUT_MS = 20_000;
+const REFRESH_TIMEOUT_MS = 4_000;
 const IN_HAND_TIMEOUT_MS = 5_000;
 
-export function fetchRound(sittingId: string): Promise<Fetched<RoundBundle>> {
-  return fetchParsed(`/api/sittings/${sittingId}/round`, roundBundleSchema, ROUND_TIMEOUT_MS);
+export function fetchRound(sittingId: string, stored: boolean): Promise<Fetched<RoundBundle>> {
+  return fetchParsed(
+    `/api/sittings/${sittingId}/round`,
+    roundBundleSchema,
+    stored ? REFRESH_TIMEOUT_MS : ROUND_TIMEOUT_MS,
+  );
 }
 
 export function fetchInHand(sittingId: string, deviceId: string): Promise<Fetched<InHandView>> {

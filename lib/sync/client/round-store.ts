@@ -24,6 +24,11 @@ export interface StoredPress {
   events: BenchEvent[];
 }
 
+/** Names of those who recorded, by person. */
+export type Authors = Readonly<Record<string, string>>;
+
+export type EventListener = (events: BenchEvent[], authors: Authors) => void;
+
 export interface LoadedRound {
   bundle: RoundBundle;
   /** From the server just now, or as it was last stored here. */
@@ -44,7 +49,7 @@ export interface RoundStore {
   keep(events: readonly BenchEvent[], press: string | null, undoes: string | null): Promise<void>;
   savePlace(place: Place): Promise<void>;
   /** Events made elsewhere: another page, or another device by way of the server. */
-  onEvents(listener: (events: BenchEvent[]) => void): () => void;
+  onEvents(listener: EventListener): () => void;
   onCounts(listener: (counts: Counts) => void): () => void;
   onParked(listener: (parked: Parked[]) => void): () => void;
   onSending(listener: (state: OutboxState) => void): () => void;

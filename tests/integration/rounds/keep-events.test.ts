@@ -3,15 +3,8 @@ import { beforeAll, describe, expect, test } from 'vitest';
 import { deriveAttempt } from '@/lib/sync/derive';
 import { ownerSql } from '../../support/database';
 import { giveAide, makePractical, makeSitting } from '../../support/factories';
-import {
-  eventOf,
-  outcomes,
-  push,
-  type RoundStage,
-  sheetOf,
-  stageRound,
-  storedEvents,
-} from '../../support/round-stage';
+import { outcomes, push } from '../../support/push-events';
+import { eventOf, type RoundStage, sheetOf, stageRound, storedEvents } from '../../support/round-stage';
 import { ticksOf } from '../../support/rubrics';
 import { logOf, makeActor, makeSchool } from '../../support/school';
 
