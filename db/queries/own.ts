@@ -1,4 +1,4 @@
-import { and, asc, desc, eq, sql } from 'drizzle-orm';
+import { and, asc, desc, eq, inArray, sql } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
 import {
   attempts,
@@ -7,26 +7,44 @@ import {
   readingEvents,
   results,
   rubricVersions,
-  scoreSheets,
   sections,
   sittings,
 } from '@/db/schema';
 
-/** The sittings of every section the student is in, with the student's latest attempt at each. */
-export function selectOwnSittings(tx: Transaction, schoolId: string, studentId: string) {
+const isLatest = sql`not exists (
+  select from ${attempts} later
+  where later.school_id = ${attempts.schoolId} and later.sitting_id = ${attempts.sittingId}
+    and later.student_id = ${attempts.studentId} and later.number > ${attempts.number})`;
+
+const hasResult = sql<boolean>`exists (
+  select from ${results} told join ${attempts} tried
+    on tried.school_id = told.school_id and tried.id = told.attempt_id
+  where told.school_id = ${attempts.schoolId} and tried.sitting_id = ${attempts.sittingId}
+    and tried.student_id = ${attempts.studentId})`;
+
+const ofLatestAttempt = {
+  schoolId: attempts.schoolId,
+  studentId: attempts.studentId,
+  attemptId: attempts.id,
+  attemptNumber: attempts.number,
+  sittingId: sittings.id,
+  state: sittings.state,
+  dueOn: sittings.dueOn,
+  openedAt: sittings.openedAt,
+  title: practicals.title,
+  sectionName: sections.name,
+  period: sections.period,
+  hasResult,
+  versionNumber: rubricVersions.number,
+  task: rubricVersions.task,
+  form: rubricVersions.form,
+  rubric: rubricVersions.rubric,
+};
+
+/** The student's latest attempt at each sitting of theirs, with what it asks for; nothing that the bench recorded. */
+function latestAttempts(tx: Transaction) {
   return tx
-    .select({
-      sittingId: sittings.id,
-      state: sittings.state,
-      dueOn: sittings.dueOn,
-      openedAt: sittings.openedAt,
-      title: practicals.title,
-      sectionName: sections.name,
-      period: sections.period,
-      attemptId: attempts.id,
-      attemptNumber: attempts.number,
-      lockedAt: scoreSheets.lockedAt,
-    })
+    .select(ofLatestAttempt)
     .from(attempts)
     .innerJoin(sittings, and(eq(sittings.schoolId, attempts.schoolId), eq(sittings.id, attempts.sittingId)))
     .innerJoin(
@@ -34,25 +52,69 @@ export function selectOwnSittings(tx: Transaction, schoolId: string, studentId: 
       and(eq(practicals.schoolId, sittings.schoolId), eq(practicals.id, sittings.practicalId)),
     )
     .innerJoin(sections, and(eq(sections.schoolId, sittings.schoolId), eq(sections.id, sittings.sectionId)))
-    .leftJoin(
-      scoreSheets,
-      and(
-        eq(scoreSheets.schoolId, attempts.schoolId),
-        eq(scoreSheets.attemptId, attempts.id),
-        eq(scoreSheets.side, 'own'),
-      ),
+    .innerJoin(
+      rubricVersions,
+      and(eq(rubricVersions.schoolId, sittings.schoolId), eq(rubricVersions.id, sittings.rubricVersionId)),
     )
-    .where(and(eq(attempts.schoolId, schoolId), eq(attempts.studentId, studentId), isLatest))
-    .orderBy(desc(sittings.openedAt));
+    .$dynamic();
 }
 
-const isLatest = sql`not exists (
-  select from ${attempts} later
-  where later.school_id = ${attempts.schoolId} and later.sitting_id = ${attempts.sittingId}
-    and later.student_id = ${attempts.studentId} and later.number > ${attempts.number})`;
+export function selectOwnAttempts(tx: Transaction, schoolId: string, studentId: string) {
+  return latestAttempts(tx)
+    .where(and(eq(attempts.schoolId, schoolId), eq(attempts.studentId, studentId), isLatest))
+    .orderBy(desc(sittings.openedAt), asc(practicals.title));
+}
 
-/** One student's latest attempt at a sitting, with what the sitting asks for. */
 export async function selectOwnAttempt(
+  tx: Transaction,
+  schoolId: string,
+  studentId: string,
+  sittingId: string,
+) {
+  const [row] = await latestAttempts(tx).where(
+    and(
+      eq(attempts.schoolId, schoolId),
+      eq(attempts.sittingId, sittingId),
+      eq(attempts.studentId, studentId),
+      isLatest,
+    ),
+  );
+  return row;
+}
+
+/** What was recorded on the students' own side of the attempts; never anything of the bench's. */
+export function selectOwnEvents(tx: Transaction, schoolId: string, attemptIds: readonly string[]) {
+  return tx
+    .select({
+      id: readingEvents.id,
+      attemptId: readingEvents.attemptId,
+      side: readingEvents.side,
+      lineId: readingEvents.lineId,
+      ordinal: readingEvents.ordinal,
+      what: readingEvents.what,
+      value: readingEvents.value,
+      typed: readingEvents.typed,
+      unit: readingEvents.unit,
+      instrument: readingEvents.instrument,
+      supersedes: readingEvents.supersedes,
+      capturedAt: readingEvents.capturedAt,
+      authorId: readingEvents.authorId,
+    })
+    .from(readingEvents)
+    .where(
+      and(
+        eq(readingEvents.schoolId, schoolId),
+        inArray(readingEvents.attemptId, [...attemptIds]),
+        eq(readingEvents.side, 'own'),
+      ),
+    )
+    .orderBy(asc(readingEvents.receivedAt), asc(readingEvents.sequence));
+}
+
+export type OwnEventRow = Awaited<ReturnType<typeof selectOwnEvents>>[number];
+
+/** What the latest publication said of the student's latest attempt that was published; nothing before the first. */
+export async function selectOwnResult(
   tx: Transaction,
   schoolId: string,
   studentId: string,
@@ -62,67 +124,9 @@ export async function selectOwnAttempt(
     .select({
       schoolId: attempts.schoolId,
       studentId: attempts.studentId,
-      attemptId: attempts.id,
       attemptNumber: attempts.number,
-      standing: attempts.standing,
-      sittingId: sittings.id,
-      state: sittings.state,
-      dueOn: sittings.dueOn,
       sectionName: sections.name,
       period: sections.period,
-      versionNumber: rubricVersions.number,
-      task: rubricVersions.task,
-      form: rubricVersions.form,
-      rubric: rubricVersions.rubric,
-    })
-    .from(attempts)
-    .innerJoin(sittings, and(eq(sittings.schoolId, attempts.schoolId), eq(sittings.id, attempts.sittingId)))
-    .innerJoin(sections, and(eq(sections.schoolId, sittings.schoolId), eq(sections.id, sittings.sectionId)))
-    .innerJoin(
-      rubricVersions,
-      and(eq(rubricVersions.schoolId, sittings.schoolId), eq(rubricVersions.id, sittings.rubricVersionId)),
-    )
-    .where(
-      and(
-        eq(attempts.schoolId, schoolId),
-        eq(attempts.sittingId, sittingId),
-        eq(attempts.studentId, studentId),
-        isLatest,
-      ),
-    );
-  return row;
-}
-
-export function selectOwnEvents(tx: Transaction, schoolId: string, attemptId: string) {
-  return tx
-    .select({
-      id: readingEvents.id,
-      side: readingEvents.side,
-      lineId: readingEvents.lineId,
-      ordinal: readingEvents.ordinal,
-      what: readingEvents.what,
-      value: readingEvents.value,
-      typed: readingEvents.typed,
-      unit: readingEvents.unit,
-      supersedes: readingEvents.supersedes,
-      capturedAt: readingEvents.capturedAt,
-      authorId: readingEvents.authorId,
-    })
-    .from(readingEvents)
-    .where(
-      and(
-        eq(readingEvents.schoolId, schoolId),
-        eq(readingEvents.attemptId, attemptId),
-        eq(readingEvents.side, 'own'),
-      ),
-    )
-    .orderBy(asc(readingEvents.receivedAt), asc(readingEvents.sequence));
-}
-
-/** What the latest publication said of this attempt; nothing before the first. */
-export async function selectOwnResult(tx: Transaction, schoolId: string, attemptId: string) {
-  const [row] = await tx
-    .select({
       status: results.status,
       scorePoints: results.scorePoints,
       totalPoints: results.totalPoints,
@@ -140,6 +144,9 @@ export async function selectOwnResult(tx: Transaction, schoolId: string, attempt
       rubric: rubricVersions.rubric,
     })
     .from(results)
+    .innerJoin(attempts, and(eq(attempts.schoolId, results.schoolId), eq(attempts.id, results.attemptId)))
+    .innerJoin(sittings, and(eq(sittings.schoolId, attempts.schoolId), eq(sittings.id, attempts.sittingId)))
+    .innerJoin(sections, and(eq(sections.schoolId, sittings.schoolId), eq(sections.id, sittings.sectionId)))
     .innerJoin(
       publications,
       and(eq(publications.schoolId, results.schoolId), eq(publications.id, results.publicationId)),
@@ -151,8 +158,14 @@ export async function selectOwnResult(tx: Transaction, schoolId: string, attempt
         eq(rubricVersions.id, publications.rubricVersionId),
       ),
     )
-    .where(and(eq(results.schoolId, schoolId), eq(results.attemptId, attemptId)))
-    .orderBy(desc(publications.number))
+    .where(
+      and(
+        eq(results.schoolId, schoolId),
+        eq(attempts.studentId, studentId),
+        eq(attempts.sittingId, sittingId),
+      ),
+    )
+    .orderBy(desc(attempts.number), desc(publications.number))
     .limit(1);
   return row;
 }

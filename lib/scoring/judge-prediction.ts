@@ -176,8 +176,18 @@ function distance(own: SizeSheet, bench: SizeSheet): Length {
   return same ? 0 : MAX_LENGTH;
 }
 
-/** For each piece of the bench the student's piece it is compared with; undefined where there is none left. */
-function pairPieces(own: PieceSheet[], bench: PieceSheet[], within: Length): (PieceSheet | undefined)[] {
+/**
+ * For each piece of the bench, in order, the student's piece of the same line it is compared with: the least total
+ * distance, then the most agreements within `within` ticks, then the lowest ordinals; undefined where none is left.
+ * Both lists are the present pieces of one line, as scored. Pure; never fails.
+ *
+ * @example pairPieces(sticksAsMeasured, sticksAtTheBench, 7_937_500) // the stick read as no. 2 stands first
+ */
+export function pairPieces(
+  own: PieceSheet[],
+  bench: PieceSheet[],
+  within: Length,
+): (PieceSheet | undefined)[] {
   const columns = assignLeast(bench.length, Math.max(own.length, bench.length), (row, column) => {
     const [theirs, ours] = [bench[row], own[column]];
     if (!theirs || !ours) return { major: 0, minor: 0 };

@@ -1,7 +1,13 @@
 import 'server-only';
-import { selectOwnSittings } from '@/db/queries/own';
+import { selectOwnAttempts, selectOwnEvents } from '@/db/queries/own';
 import { noInput } from '@/lib/contracts/own';
+import { countOwnSizes, type OwnEvent, ownRecordOf } from '@/lib/practicals/own-record';
+import { rubricSchema } from '@/lib/scoring/schemas';
 import { defineVerb } from '../verb';
+import { ownEventOf } from './own-event';
+
+/** To do: cut and measure. Locked: the bench is next. Published: there is a result. Closed: published without one. */
+export type TaskStage = 'to do' | 'locked' | 'published' | 'closed';
 
 export interface OwnTaskRow {
   sittingId: string;
@@ -10,8 +16,9 @@ export interface OwnTaskRow {
   period: string;
   dueOn: string | null;
   attemptNumber: number;
-  /** What the student can do next: cut and measure, wait for the bench, or look at the result. */
-  stage: 'to do' | 'locked' | 'published';
+  stage: TaskStage;
+  /** Own sizes that a lock no longer waits for, of all. */
+  sizes: { of: number; done: number };
 }
 
 /** The practicals given to the student, the newest first. */
@@ -19,15 +26,40 @@ export const listTasks = defineVerb({
   action: 'task.read',
   input: noInput,
   async run({ actor, tx }): Promise<OwnTaskRow[]> {
-    const rows = await selectOwnSittings(tx, actor.schoolId, actor.personId);
-    return rows.map((row) => ({
-      sittingId: row.sittingId,
-      title: row.title,
-      sectionName: row.sectionName,
-      period: row.period,
-      dueOn: row.dueOn,
-      attemptNumber: row.attemptNumber,
-      stage: row.state === 'published' ? 'published' : row.lockedAt ? 'locked' : 'to do',
-    }));
+    const rows = await selectOwnAttempts(tx, actor.schoolId, actor.personId);
+    const attemptIds = rows.map(({ attemptId }) => attemptId);
+    const stored = attemptIds.length > 0 ? await selectOwnEvents(tx, actor.schoolId, attemptIds) : [];
+    const events = stored.map(ownEventOf);
+    return rows.map((row) =>
+      taskRow(
+        row,
+        events.filter(({ attemptId }) => attemptId === row.attemptId),
+      ),
+    );
   },
 });
+
+type AttemptRow = Awaited<ReturnType<typeof selectOwnAttempts>>[number];
+
+function taskRow(row: AttemptRow, events: readonly OwnEvent[]): OwnTaskRow {
+  const { sittingId, title, sectionName, period, dueOn, attemptNumber } = row;
+  const record = ownRecordOf(events);
+  return {
+    sittingId,
+    title,
+    sectionName,
+    period,
+    dueOn,
+    attemptNumber,
+    stage: stageOf(row, record.derived.lock !== null),
+    sizes: countOwnSizes(rubricSchema.parse(row.rubric), record),
+  };
+}
+
+export function stageOf(
+  row: { state: 'open' | 'published'; hasResult: boolean },
+  locked: boolean,
+): TaskStage {
+  if (row.state === 'published') return row.hasResult ? 'published' : 'closed';
+  return locked ? 'locked' : 'to do';
+}

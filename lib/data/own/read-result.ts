@@ -1,10 +1,9 @@
 import 'server-only';
-import { selectOwnAttempt, selectOwnResult } from '@/db/queries/own';
+import { selectOwnResult } from '@/db/queries/own';
 import { ownSittingInput } from '@/lib/contracts/own';
 import { judgementSchema, scoreSheetSchema } from '@/lib/contracts/results';
 import { type Task, taskSchema } from '@/lib/practicals/task';
-import type { Points, Rubric, ScoreSheet } from '@/lib/scoring';
-import type { RubricForm } from '@/lib/scoring/rubric-form';
+import type { Points, Policies, PredictionJudgement, Rubric, ScoreSheet } from '@/lib/scoring';
 import { rubricFormSchema } from '@/lib/scoring/rubric-form-schema';
 import { rubricSchema } from '@/lib/scoring/schemas';
 import { defineVerb } from '../verb';
@@ -26,10 +25,10 @@ export interface OwnResultView {
   measuredAt: string | null;
   task: Task;
   rubric: Rubric;
-  policies: RubricForm['policies'];
+  policies: Policies;
   sheet: ScoreSheet | null;
   ownSheet: ScoreSheet | null;
-  judgement: ReturnType<typeof judgementSchema.parse> | null;
+  judgement: PredictionJudgement | null;
 }
 
 /** What the latest publication said of the student's own attempt; not found before there is one. */
@@ -37,14 +36,13 @@ export const readResult = defineVerb({
   action: 'result.read',
   input: ownSittingInput,
   async run({ actor, input, tx, found, authorize }): Promise<OwnResultView> {
-    const attempt = found(await selectOwnAttempt(tx, actor.schoolId, actor.personId, input.sittingId));
-    authorize({ schoolId: attempt.schoolId, studentId: attempt.studentId });
-    const row = found(await selectOwnResult(tx, actor.schoolId, attempt.attemptId));
+    const row = found(await selectOwnResult(tx, actor.schoolId, actor.personId, input.sittingId));
+    authorize({ schoolId: row.schoolId, studentId: row.studentId });
     return {
-      sittingId: attempt.sittingId,
-      sectionName: attempt.sectionName,
-      period: attempt.period,
-      attemptNumber: attempt.attemptNumber,
+      sittingId: input.sittingId,
+      sectionName: row.sectionName,
+      period: row.period,
+      attemptNumber: row.attemptNumber,
       versionNumber: row.versionNumber,
       publishedAt: row.publishedAt.toISOString(),
       corrected: row.publicationNumber > 1,

@@ -1,21 +1,14 @@
 import 'server-only';
 import { selectOwnAttempt, selectOwnEvents } from '@/db/queries/own';
 import { ownSittingInput } from '@/lib/contracts/own';
+import { type OwnEvent, ownRecordOf } from '@/lib/practicals/own-record';
 import { type Task, taskSchema } from '@/lib/practicals/task';
-import type { Rubric } from '@/lib/scoring';
-import type { RubricForm } from '@/lib/scoring/rubric-form';
+import type { Policies, Rubric } from '@/lib/scoring';
 import { rubricFormSchema } from '@/lib/scoring/rubric-form-schema';
 import { rubricSchema } from '@/lib/scoring/schemas';
-import { type CellValue, cellValueSchema, type Side } from '@/lib/sync/cells';
-import type { CellEvent } from '@/lib/sync/derive';
 import { defineVerb } from '../verb';
-
-export interface OwnEvent extends CellEvent {
-  typed: string | null;
-  unit: 'in' | 'mm' | null;
-  value: CellValue;
-  side: Side;
-}
+import { stageOf, type TaskStage } from './list-tasks';
+import { ownEventOf } from './own-event';
 
 export interface OwnTaskView {
   sittingId: string;
@@ -25,11 +18,11 @@ export interface OwnTaskView {
   sectionName: string;
   period: string;
   dueOn: string | null;
-  published: boolean;
+  stage: TaskStage;
   versionNumber: number;
   task: Task;
   rubric: Rubric;
-  policies: RubricForm['policies'];
+  policies: Policies;
   /** The student's own events; nothing of the bench. */
   events: OwnEvent[];
 }
@@ -41,37 +34,22 @@ export const readTask = defineVerb({
   async run({ actor, input, tx, found, authorize }): Promise<OwnTaskView> {
     const row = found(await selectOwnAttempt(tx, actor.schoolId, actor.personId, input.sittingId));
     authorize({ schoolId: row.schoolId, studentId: row.studentId });
-    const events = await selectOwnEvents(tx, actor.schoolId, row.attemptId);
+    const events = (await selectOwnEvents(tx, actor.schoolId, [row.attemptId])).map(ownEventOf);
+    const { sittingId, attemptId, attemptNumber, studentId, sectionName, period, dueOn, versionNumber } = row;
     return {
-      sittingId: row.sittingId,
-      attemptId: row.attemptId,
-      attemptNumber: row.attemptNumber,
-      studentId: row.studentId,
-      sectionName: row.sectionName,
-      period: row.period,
-      dueOn: row.dueOn,
-      published: row.state === 'published',
-      versionNumber: row.versionNumber,
+      sittingId,
+      attemptId,
+      attemptNumber,
+      studentId,
+      sectionName,
+      period,
+      dueOn,
+      stage: stageOf(row, ownRecordOf(events).derived.lock !== null),
+      versionNumber,
       task: taskSchema.parse(row.task),
       rubric: rubricSchema.parse(row.rubric),
       policies: rubricFormSchema.parse(row.form).policies,
-      events: events.map(ownEvent),
+      events,
     };
   },
 });
-
-type EventRow = Awaited<ReturnType<typeof selectOwnEvents>>[number];
-
-function ownEvent(row: EventRow): OwnEvent {
-  return {
-    id: row.id,
-    side: row.side,
-    cell: { lineId: row.lineId, ordinal: row.ordinal, what: row.what },
-    value: cellValueSchema.parse(row.value),
-    typed: row.typed,
-    unit: row.unit,
-    supersedes: row.supersedes,
-    capturedAt: row.capturedAt.toISOString(),
-    authorId: row.authorId,
-  };
-}
