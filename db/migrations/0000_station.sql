@@ -412,9 +412,12 @@ BEGIN
       END IF;
     EXCEPTION WHEN duplicate_object OR unique_violation THEN NULL;
     END;
-    IF NOT pg_has_role(current_user, wanted, 'MEMBER') THEN
+    BEGIN
       EXECUTE format('GRANT %I TO %I', wanted, current_user);
-    END IF;
+    EXCEPTION WHEN insufficient_privilege THEN
+      -- Made beforehand by somebody else: then it must have been granted with them.
+      IF NOT pg_has_role(current_user, wanted, 'MEMBER') THEN RAISE; END IF;
+    END;
     EXECUTE format('GRANT USAGE ON SCHEMA public TO %I', wanted);
   END LOOP;
 END $$;

@@ -5,7 +5,7 @@ import { Lucia, TimeSpan } from 'lucia';
 import { cookies } from 'next/headers';
 import { cache } from 'react';
 import { credentials, people, personRoles, schools, sessions } from '@/db/schema';
-import { authDatabase } from '@/lib/data/database';
+import { authDatabase, withoutValues } from '@/lib/data/database';
 import type { Actor } from './actor';
 import { ROLES, type Role } from './roles';
 
@@ -78,8 +78,12 @@ export async function switchRole(role: Role): Promise<boolean> {
 export const currentActor = cache(async (): Promise<Actor | null> => {
   const id = await sessionId();
   if (!id) return null;
-  const { session } = await lucia().validateSession(id);
-  return session && loadActor(session.userId, session.activeRole);
+  try {
+    const { session } = await lucia().validateSession(id);
+    return session && (await loadActor(session.userId, session.activeRole));
+  } catch (error) {
+    throw withoutValues(error);
+  }
 });
 
 async function loadActor(personId: string, activeRole: Role): Promise<Actor | null> {

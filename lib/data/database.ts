@@ -26,3 +26,14 @@ export function inSchool<T>(schoolId: string, work: (tx: Transaction) => Promise
 export function authDatabase(): Database {
   return pool('trymark_auth');
 }
+
+/**
+ * A failed query as an error that can be logged: its statement and code, without the values it was given, which are
+ * people's names and addresses. Anything else passes unchanged.
+ */
+export function withoutValues(error: unknown): unknown {
+  if (!(error instanceof Error) || !('query' in error)) return error;
+  const { cause } = error;
+  const code = cause instanceof Error && 'code' in cause ? String(cause.code) : 'unknown';
+  return Object.assign(new Error(`A query failed (${code}): ${String(error.query)}`), { code });
+}

@@ -12,7 +12,7 @@ import {
   problem,
   type Result,
 } from '@/lib/result';
-import { inSchool } from './database';
+import { inSchool, withoutValues } from './database';
 
 export interface LogEntry {
   subjectKind: string;
@@ -149,7 +149,7 @@ export function databaseProblem(error: unknown): { ok: false; problem: Problem }
       'Somebody changed this at the same moment. Look at it again and repeat the change.',
     );
   }
-  throw error;
+  throw withoutValues(error);
 }
 
 /** The code of an error or of what caused it; by shape, for a bundle can hold one error class several times. */
