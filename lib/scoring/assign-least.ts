@@ -1,225 +1,227 @@
-/** A cost of two ranks: `minor` decides only between equals in `major`. Sums stay whole and below 2^53. */
+/** A cost of two ranks: `minor` decides only between equals in `major`. Whole, >= 0, with sums below 2^53. */
 export interface Cost {
   major: number;
   minor: number;
 }
 
-interface Solution {
-  /** The row that holds each column, or −1. */
-  rowOf: Int32Array;
-  columnOf: Int32Array;
-  /** Whether row and column may stand together in an assignment of least cost. */
-  tight(row: number, column: number): boolean;
-  /** Whether every assignment of least cost fills this column. */
-  mustFill(column: number): boolean;
-}
+type CostOf = (row: number, column: number) => Cost | null;
 
-/**
- * Gives each row a column of its own for the least total cost; of equal assignments, the one whose columns, read in
- * the order of the rows, come first. Exact: shortest augmenting paths (Kuhn 1955, Munkres 1957), then exchanges along
- * edges without slack. There are at least as many columns as rows; a `null` cost is a pair that must not be.
- *
- * @returns the column of each row. @throws RangeError when some row has no column left that it may take.
- * @example assignLeast(2, 2, (row, column) => ({ major: row === column ? 2 : 1, minor: 0 })) // [1, 0]
- */
-export function assignLeast(
-  rows: number,
-  columns: number,
-  costOf: (row: number, column: number) => Cost | null,
-): number[] {
-  if (columns < rows) throw new RangeError('there are fewer columns than rows');
-  const solution = solve(rows, columns, costOf);
-  for (let row = 0; row < rows; row++) takeFirst(solution, row, rows, columns);
-  return [...solution.columnOf];
-}
-
-function solve(
-  rows: number,
-  columns: number,
-  costOf: (row: number, column: number) => Cost | null,
-): Solution {
-  const costs = tabulate(rows, columns, costOf);
-  const u = makePairs(rows);
-  const v = makePairs(columns);
-  const rowOf = new Int32Array(columns).fill(-1);
-  for (let row = 0; row < rows; row++) augment(row, columns, costs, u, v, rowOf);
-  const columnOf = new Int32Array(rows);
-  rowOf.forEach((row, column) => {
-    if (row >= 0) columnOf[row] = column;
-  });
-  return {
-    rowOf,
-    columnOf,
-    tight: (row, column) => {
-      const at = row * columns + column;
-      return (
-        get(costs.major, at) === get(u.major, row) + get(v.major, column) &&
-        get(costs.minor, at) === get(u.minor, row) + get(v.minor, column)
-      );
-    },
-    mustFill: (column) => get(v.major, column) !== 0 || get(v.minor, column) !== 0,
-  };
-}
-
-interface Pairs {
+interface Ranks {
   major: Float64Array;
   minor: Float64Array;
 }
 
-function makePairs(length: number): Pairs {
+/** Costs, the prices that prove an assignment the least (Kuhn's u and v), and the assignment so far. */
+interface Table {
+  rows: number;
+  columns: number;
+  capacities: readonly number[];
+  costs: Ranks;
+  u: Ranks;
+  v: Ranks;
+  columnOf: Int32Array;
+  used: Int32Array;
+}
+
+/**
+ * Gives each row a column, no column more rows than its capacity, for the least total cost; of equal assignments, the
+ * one whose columns, read in the order of the rows, come first. A `null` cost is a pair that must not be. Exact:
+ * shortest augmenting paths (Kuhn 1955; Edmonds and Karp 1972), then exchanges along pairs without slack.
+ *
+ * @returns the column of each row. @throws RangeError when some row is left without a column that it may take.
+ * @example assignLeast(2, [1, 1], (row, column) => ({ major: row === column ? 2 : 1, minor: 0 })) // [1, 0]
+ */
+export function assignLeast(rows: number, capacities: readonly number[], costOf: CostOf): number[] {
+  const table = layOut(rows, capacities, costOf);
+  for (let row = 0; row < rows; row++) addRow(table, row);
+  for (let row = 0; row < rows; row++) takeFirst(table, row);
+  return [...table.columnOf];
+}
+
+function layOut(rows: number, capacities: readonly number[], costOf: CostOf): Table {
+  const columns = capacities.length;
+  const costs = makeRanks(rows * columns);
+  for (let at = 0; at < rows * columns; at++) {
+    const column = at % columns;
+    const cost = costOf((at - column) / columns, column);
+    costs.major[at] = cost?.major ?? Number.POSITIVE_INFINITY;
+    costs.minor[at] = cost?.minor ?? 0;
+  }
+  return {
+    ...{ rows, columns, capacities, costs },
+    u: makeRanks(rows),
+    v: makeRanks(columns),
+    columnOf: new Int32Array(rows).fill(-1),
+    used: new Int32Array(columns),
+  };
+}
+
+function makeRanks(length: number): Ranks {
   return { major: new Float64Array(length), minor: new Float64Array(length) };
 }
 
-function get(values: Float64Array | Int32Array, at: number): number {
+function get(values: Float64Array | Int32Array | Uint8Array, at: number): number {
   return values[at] ?? 0;
 }
 
-function tabulate(
-  rows: number,
-  columns: number,
-  costOf: (row: number, column: number) => Cost | null,
-): Pairs {
-  const costs = makePairs(rows * columns);
-  for (let row = 0; row < rows; row++) {
-    for (let column = 0; column < columns; column++) {
-      const cost = costOf(row, column);
-      costs.major[row * columns + column] = cost?.major ?? Number.POSITIVE_INFINITY;
-      costs.minor[row * columns + column] = cost?.minor ?? 0;
+function hasRoom({ used, capacities }: Table, column: number): boolean {
+  return get(used, column) < (capacities[column] ?? 0);
+}
+
+/** How far each column is from the row that looks for one, and which row would move there. */
+interface Search {
+  far: Ranks;
+  mover: Int32Array;
+  done: Uint8Array;
+}
+
+/** Finds the row a column by the cheapest chain of moves, and keeps every pair's slack at or above 0. */
+function addRow(table: Table, row: number): void {
+  const { columns, columnOf } = table;
+  const search: Search = {
+    far: makeRanks(columns),
+    mover: new Int32Array(columns).fill(-1),
+    done: new Uint8Array(columns),
+  };
+  search.far.major.fill(Number.POSITIVE_INFINITY);
+  relax(table, search, row, 0, 0);
+  let column = nearest(table, search);
+  while (!hasRoom(table, column)) {
+    search.done[column] = 1;
+    for (let holder = 0; holder < row; holder++) {
+      if (get(columnOf, holder) !== column) continue;
+      relax(table, search, holder, get(search.far.major, column), get(search.far.minor, column));
     }
+    column = nearest(table, search);
   }
-  return costs;
-}
-
-/** Finds the row a column by the shortest path of exchanges, and keeps all reduced costs at or above 0. */
-function augment(row: number, columns: number, costs: Pairs, u: Pairs, v: Pairs, rowOf: Int32Array): void {
-  const least = makePairs(columns);
-  least.major.fill(Number.POSITIVE_INFINITY);
-  const from = new Int32Array(columns).fill(-1);
-  const done = new Uint8Array(columns);
-  let at = -1;
-  let current = row;
-  do {
-    relax(current, at, columns, costs, u, v, least, from, done);
-    const next = nearest(columns, least, done);
-    shift(row, next, columns, u, v, least, done, rowOf);
-    done[next] = 1;
-    at = next;
-    current = get(rowOf, next);
-  } while (current >= 0);
-  while (at >= 0) {
-    const before = get(from, at);
-    rowOf[at] = before >= 0 ? get(rowOf, before) : row;
-    at = before;
+  reprice(table, search, row, column);
+  table.used[column] = get(table.used, column) + 1;
+  for (let free = column; free >= 0; ) {
+    const mover = get(search.mover, free);
+    const left = get(columnOf, mover);
+    columnOf[mover] = free;
+    free = left;
   }
 }
 
-function relax(
-  row: number,
-  via: number,
-  columns: number,
-  costs: Pairs,
-  u: Pairs,
-  v: Pairs,
-  least: Pairs,
-  from: Int32Array,
-  done: Uint8Array,
-): void {
-  for (let column = 0; column < columns; column++) {
-    if (done[column]) continue;
-    const at = row * columns + column;
-    const major = get(costs.major, at) - get(u.major, row) - get(v.major, column);
-    const minor = get(costs.minor, at) - get(u.minor, row) - get(v.minor, column);
-    if (isLess(major, minor, get(least.major, column), get(least.minor, column))) {
-      least.major[column] = major;
-      least.minor[column] = minor;
-      from[column] = via;
-    }
+function relax({ columns, costs, u, v }: Table, search: Search, row: number, major: number, minor: number) {
+  const { far, mover, done } = search;
+  const baseMajor = major - get(u.major, row);
+  const baseMinor = minor - get(u.minor, row);
+  for (let column = 0, at = row * columns; column < columns; column++, at++) {
+    if (get(done, column) === 1) continue;
+    const farMajor = baseMajor + get(costs.major, at) - get(v.major, column);
+    if (farMajor > get(far.major, column)) continue;
+    const farMinor = baseMinor + get(costs.minor, at) - get(v.minor, column);
+    if (farMajor === get(far.major, column) && farMinor >= get(far.minor, column)) continue;
+    far.major[column] = farMajor;
+    far.minor[column] = farMinor;
+    mover[column] = row;
   }
 }
 
-function isLess(major: number, minor: number, thanMajor: number, thanMinor: number): boolean {
-  return major < thanMajor || (major === thanMajor && minor < thanMinor);
-}
-
-function nearest(columns: number, least: Pairs, done: Uint8Array): number {
+/** The nearest column that is not done; of equals one with room, which ends the search. */
+function nearest(table: Table, { far, mover, done }: Search): number {
   let best = -1;
-  for (let column = 0; column < columns; column++) {
-    if (done[column] || get(least.major, column) === Number.POSITIVE_INFINITY) continue;
-    const [major, minor] = [get(least.major, column), get(least.minor, column)];
-    if (best < 0 || isLess(major, minor, get(least.major, best), get(least.minor, best))) best = column;
+  for (let column = 0; column < table.columns; column++) {
+    if (get(done, column) === 1 || get(mover, column) < 0) continue;
+    if (best < 0 || isNearer(table, far, column, best)) best = column;
   }
-  if (best < 0) throw new RangeError('some row has no column that it may take');
+  if (best < 0) throw new RangeError('a row is left without a column that it may take');
   return best;
 }
 
-function shift(
-  row: number,
-  next: number,
-  columns: number,
-  u: Pairs,
-  v: Pairs,
-  least: Pairs,
-  done: Uint8Array,
-  rowOf: Int32Array,
-): void {
+function isNearer(table: Table, { major, minor }: Ranks, column: number, than: number): boolean {
+  if (get(major, column) !== get(major, than)) return get(major, column) < get(major, than);
+  if (get(minor, column) !== get(minor, than)) return get(minor, column) < get(minor, than);
+  return hasRoom(table, column) && !hasRoom(table, than);
+}
+
+function reprice({ columns, columnOf, u, v }: Table, { far, done }: Search, row: number, last: number) {
   for (const rank of ['major', 'minor'] as const) {
-    const by = get(least[rank], next);
-    u[rank][row] = get(u[rank], row) + by;
+    const end = get(far[rank], last);
+    u[rank][row] = end;
+    for (let holder = 0; holder < row; holder++) {
+      const column = get(columnOf, holder);
+      if (get(done, column) === 1) u[rank][holder] = get(u[rank], holder) + end - get(far[rank], column);
+    }
     for (let column = 0; column < columns; column++) {
-      if (done[column]) {
-        const held = get(rowOf, column);
-        u[rank][held] = get(u[rank], held) + by;
-        v[rank][column] = get(v[rank], column) - by;
-      } else {
-        least[rank][column] = get(least[rank], column) - by;
-      }
+      if (get(done, column) === 1) v[rank][column] = get(v[rank], column) - end + get(far[rank], column);
     }
   }
+}
+
+/** Whether row and column may stand together in an assignment of least cost. */
+function isTight({ columns, costs, u, v }: Table, row: number, column: number): boolean {
+  const at = row * columns + column;
+  return (
+    get(costs.major, at) === get(u.major, row) + get(v.major, column) &&
+    get(costs.minor, at) === get(u.minor, row) + get(v.minor, column)
+  );
+}
+
+/** Whether every assignment of least cost fills this column. */
+function mustFill({ v }: Table, column: number): boolean {
+  return get(v.major, column) !== 0 || get(v.minor, column) !== 0;
 }
 
 /** Moves a row to the first column that some assignment of least cost gives it, earlier rows kept where they are. */
-function takeFirst(solution: Solution, row: number, rows: number, columns: number): void {
-  const now = get(solution.columnOf, row);
-  for (let column = 0; column < now; column++) {
-    const holder = get(solution.rowOf, column);
-    if ((holder >= 0 && holder < row) || !solution.tight(row, column)) continue;
-    if (exchange(solution, row, column, rows, columns)) return;
-  }
+function takeFirst(table: Table, row: number): void {
+  const now = get(table.columnOf, row);
+  let wanted = 0;
+  while (wanted < now && !isTight(table, row, wanted)) wanted += 1;
+  if (wanted === now) return;
+  const chains = findChains(table, row);
+  while (wanted < now && !(get(chains.onward, wanted) >= 0 && isTight(table, row, wanted))) wanted += 1;
+  if (wanted < now) exchange(table, row, wanted, chains);
 }
 
-/** Nobody's row: it stands for all columns left empty, and may hold any column that need not be filled. */
+/** No row: it holds the room that is left in a column, and may hold any column that need not be filled. */
 const NOBODY = -1;
 
-/**
- * Lets `row` take `wanted`; whoever held it looks for another column, and so on, until one takes the column that
- * `row` leaves. Changes nothing when there is no such chain.
- */
-function exchange(solution: Solution, row: number, wanted: number, rows: number, columns: number): boolean {
-  const { rowOf, columnOf, tight, mustFill } = solution;
+interface Chains {
+  /** Where the mover of a column goes when somebody takes its place there; −1 where no chain begins. */
+  onward: Int32Array;
+  mover: Int32Array;
+}
+
+/** From every column the chain of moves, by later rows only, whose last takes the place that `row` leaves. */
+function findChains(table: Table, row: number): Chains {
+  const { rows, columns, columnOf } = table;
   const left = get(columnOf, row);
-  const mayHold = (holder: number, column: number) =>
-    holder === NOBODY ? !mustFill(column) : tight(holder, column);
-  const from = new Map<number, number>();
-  const queue = [wanted];
-  for (let head = 0; head < queue.length && !from.has(left); head++) {
-    const source = queue[head] ?? wanted;
-    const holder = get(rowOf, source);
+  const chains = { onward: new Int32Array(columns).fill(-1), mover: new Int32Array(columns).fill(NOBODY) };
+  chains.onward[left] = left;
+  const queue = [left];
+  const reach = (column: number, mover: number, target: number) => {
+    if (get(chains.onward, column) >= 0) return;
+    chains.onward[column] = target;
+    chains.mover[column] = mover;
+    queue.push(column);
+  };
+  let roomReached = false;
+  for (let head = 0; head < queue.length; head++) {
+    const target = queue[head] ?? left;
+    for (let holder = row + 1; holder < rows; holder++) {
+      if (isTight(table, holder, target)) reach(get(columnOf, holder), holder, target);
+    }
+    if (roomReached || mustFill(table, target)) continue;
+    roomReached = true;
     for (let column = 0; column < columns; column++) {
-      const fixed = get(rowOf, column) >= 0 && get(rowOf, column) < row;
-      if (fixed || column === wanted || from.has(column) || !mayHold(holder, column)) continue;
-      from.set(column, source);
-      queue.push(column);
+      if (hasRoom(table, column)) reach(column, NOBODY, target);
     }
   }
-  if (!from.has(left)) return false;
-  for (let column = left; column !== wanted; ) {
-    const source = from.get(column) ?? wanted;
-    const holder = get(rowOf, source);
-    rowOf[column] = holder;
-    if (holder >= 0 && holder < rows) columnOf[holder] = column;
-    column = source;
-  }
-  rowOf[wanted] = row;
+  return chains;
+}
+
+function exchange({ columnOf, used }: Table, row: number, wanted: number, { onward, mover }: Chains): void {
+  const left = get(columnOf, row);
   columnOf[row] = wanted;
-  return true;
+  for (let column = wanted; column !== left; ) {
+    const target = get(onward, column);
+    const moving = get(mover, column);
+    if (moving >= 0) columnOf[moving] = target;
+    column = target;
+  }
+  used.fill(0);
+  for (const column of columnOf) used[column] = get(used, column) + 1;
 }

@@ -24,8 +24,9 @@ const DEFAULTS: Record<Unit, UnitDefaults> = {
 
 /**
  * The form a new practical begins with: three bands of 0, 1 and 2 points and 3 beyond on each dimension, 9 points a
- * piece, 100 in all. Inch and metric bands are each their own, neither converted. Lengths in ticks, points in
- * hundredths. A new object each time. The figures are the product's defaults, all changeable.
+ * piece, 100 in all; the checks of a piece are taken as good, that of the whole work is to be recorded. Inch and metric
+ * bands are each their own, neither converted. Lengths in ticks, points in hundredths. A new object each time. The
+ * figures are the product's defaults, all changeable.
  *
  * @example
  * defaultRubricForm('mm').margin // 500_000 ticks: 0.05 mm
@@ -49,12 +50,12 @@ export function defaultRubricForm(unit: Unit): RubricForm {
       worth: 900,
       missing: null,
       sizes: { thickness: sizeRule(bands), width: sizeRule(bands), length: sizeRule(bands) },
-      checks: [passOrLose('square', 'square'), passOrLose('surface', 'surface')],
+      checks: [passOrLose('square', 'square', 0), passOrLose('surface', 'surface', 0)],
       swap: true,
       set: 'each',
     },
     exceptions: {},
-    workChecks: [passOrLose('name-and-period', 'name and period on pieces')],
+    workChecks: [passOrLose('name-and-period', 'name and period on pieces', null)],
     policies: {
       late: null,
       redo: { kind: 'higher', capPercent: 90 },
@@ -76,10 +77,10 @@ function sizeRule(edges: UnitDefaults['bands']): SizeRule {
   return { over: side(), under: side(), beyondOver: 300, beyondUnder: 300, cap: null };
 }
 
-function passOrLose(id: string, label: string): Check {
+function passOrLose(id: string, label: string, assume: Check['assume']): Check {
   const levels = [
     { label: 'good', lose: 0 },
     { label: 'not good', lose: 100 },
   ];
-  return { id, label, levels, assume: 0 };
+  return { id, label, levels, assume };
 }

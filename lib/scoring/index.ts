@@ -1,3 +1,4 @@
+export { applyPreset, type PresetOptions } from './apply-preset';
 export { bandsFromRate, type Rate } from './bands-from-rate';
 export { type AttemptScore, combineAttempts } from './combine-attempts';
 export { compileRubric } from './compile-rubric';
@@ -5,6 +6,7 @@ export { defaultRubricForm } from './default-rubric-form';
 export { judgePrediction, type PredictionJudgement } from './judge-prediction';
 export { type PriceStep, priceCurve } from './price-curve';
 export { type Dropped, type ProjectedAttempt, projectAttempt } from './project-attempt';
+export { type LaidPiece, type PlacedPiece, type ProposedMatch, proposeMatch } from './propose-match';
 export { type Rescored, rescore } from './rescore';
 export type { Finding, FindingCode } from './review/finding';
 export { reviewRubric } from './review-rubric';

@@ -1,5 +1,5 @@
 import { type Length, MAX_LENGTH } from '@/lib/length';
-import { assignLeast } from './assign-least';
+import { assignLeast, type Cost } from './assign-least';
 import type { PredictionPolicy, Share } from './rubric-form';
 import { scoreAttempt } from './score-attempt';
 import {
@@ -158,7 +158,7 @@ function agree(own: SizeSheet, bench: SizeSheet, within: Length): boolean {
   const [ownKind, benchKind] = [kindOf(own), kindOf(bench)];
   if (ownKind === 'value' && benchKind === 'value') return apart(own, bench) <= within;
   if (benchKind === 'gauged') return (ownKind === 'value' || ownKind === 'gauged') && own.lose === 0;
-  if (ownKind === 'gauged') return benchKind === 'value' && bench.lose === 0;
+  if (ownKind === 'gauged') return bench.lose === 0;
   return ownKind === 'spoiled' && benchKind === 'spoiled';
 }
 
@@ -190,19 +190,22 @@ export function pairPieces(
 ): (PieceSheet | undefined)[] {
   const columns = assignLeast(bench.length, Math.max(own.length, bench.length), (row, column) => {
     const [theirs, ours] = [bench[row], own[column]];
-    if (!theirs || !ours) return { major: 0, minor: 0 };
-    return pairCost(ours, theirs, within);
+    return theirs && ours ? pairCost(ours, theirs, within) : UNPAIRED;
   });
   return columns.map((column) => own[column]);
 }
 
-function pairCost(own: PieceSheet, bench: PieceSheet, within: Length): { major: number; minor: number } {
-  let [major, minor] = [0, 0];
+/** A piece without a partner is no distance off and agrees nowhere. */
+const UNPAIRED: Cost = { major: 0, minor: AXES.length };
+
+/** The total distance, then how many of the axes do not agree. */
+function pairCost(own: PieceSheet, bench: PieceSheet, within: Length): Cost {
+  const cost = { major: 0, minor: AXES.length };
   for (const axis of AXES) {
     const [ours, theirs] = [sizeOf(own, axis), sizeOf(bench, axis)];
     if (!ours || !theirs) continue;
-    major += distance(ours, theirs);
-    if (isItem(theirs) && !agree(ours, theirs, within)) minor += 1;
+    cost.major += distance(ours, theirs);
+    if (isItem(theirs) && agree(ours, theirs, within)) cost.minor -= 1;
   }
-  return { major, minor };
+  return cost;
 }
