@@ -54,6 +54,18 @@ export async function closeLimits(): Promise<void> {
   held.trymarkLimits = undefined;
 }
 
+/** pg gives no code to a connection that broke or never came; the product tells a database that is away by its code. */
+async function reaching<T>(work: () => Promise<T>): Promise<T> {
+  try {
+    return await work();
+  } catch (error) {
+    if (error instanceof Error && !('code' in error) && /connect|terminat/i.test(error.message)) {
+      throw Object.assign(error, { code: 'CONNECTION_LOST' });
+    }
+    throw error;
+  }
+}
+
 /** An account as it is named at sign-in, known or not; counters keep only its hash. */
 export function accountKey(name: { email: string } | { schoolCode: string; localId: string }): string {
   const text = 'email' in name ? `staff\n${name.email.toLowerCase()}` : `${name.schoolCode}\n${name.localId}`;
@@ -68,7 +80,11 @@ export type TryAnswer =
  * Counts a try as failed before it is checked, so that tries at the same moment cannot outrun the delays.
  * `waitSeconds` null: the account has failed too often and opens again only by a reset.
  */
-export async function beginTry(account: string, address: string): Promise<TryAnswer> {
+export function beginTry(account: string, address: string): Promise<TryAnswer> {
+  return reaching(() => countTry(account, address));
+}
+
+async function countTry(account: string, address: string): Promise<TryAnswer> {
   const { failures, waits, addresses } = limits();
   const [waiting, crowd] = await Promise.all([waits.get(account), addresses.get(address)]);
   if (crowd && crowd.consumedPoints >= ADDRESS_FAILURES) return refused(crowd);
@@ -89,12 +105,13 @@ export async function beginTry(account: string, address: string): Promise<TryAns
 }
 
 export async function tryFailed(address: string): Promise<void> {
-  await limits().addresses.penalty(address);
+  await reaching(() => limits().addresses.penalty(address));
 }
 
 /** Forgets an account's failures, as after it was proved or reset. */
 export async function forgetFailures(account: string): Promise<void> {
-  await Promise.all([limits().failures.delete(account), limits().waits.delete(account)]);
+  const { failures, waits } = limits();
+  await reaching(() => Promise.all([failures.delete(account), waits.delete(account)]));
 }
 
 /** The counter of one's own account page, where the present password is asked for again. */
@@ -107,14 +124,20 @@ export function counterKeys(account: string): string[] {
   return [limits().failures.getKey(account), limits().waits.getKey(account)];
 }
 
+interface ResetAnswer {
+  account: boolean;
+  address: number | null;
+}
+
 /**
  * Counts a request for a reset. `account`: whether a mail may still go there this hour; `address`: seconds to wait
  * when too many came from one address, null otherwise.
  */
-export async function mayAskReset(
-  account: string,
-  address: string,
-): Promise<{ account: boolean; address: number | null }> {
+export function mayAskReset(account: string, address: string): Promise<ResetAnswer> {
+  return reaching(() => countReset(account, address));
+}
+
+async function countReset(account: string, address: string): Promise<ResetAnswer> {
   const { addresses, resets } = limits();
   const crowd = await addresses.penalty(address);
   if (crowd.consumedPoints > ADDRESS_FAILURES) return { account: false, address: waitSeconds(crowd) };

@@ -26,10 +26,34 @@ export const SCREENS: Screen[] = [
       await page.getByText('student', { exact: true }).click();
     },
   },
+  { role: 'public', name: 'forgotten-password', path: '/reset' },
+  { role: 'public', name: 'reset-sent', path: '/reset?sent=yes' },
+  { role: 'public', name: 'link-unknown', path: '/invitation/not-a-link' },
   { role: 'public', name: 'not-found', path: '/no-such-page', status: 404 },
   { role: 'teacher', name: 'home', path: '/' },
   { role: 'student', name: 'home', path: '/' },
   { role: 'head', name: 'home', path: '/' },
   { role: 'aide', name: 'home', path: '/' },
   { role: 'admin', name: 'home', path: '/' },
+  { role: 'admin', name: 'people', path: '/school/people' },
+  { role: 'admin', name: 'students', path: '/school/people?shown=students' },
+  { role: 'admin', name: 'people-left', path: '/school/people?shown=left' },
+  { role: 'admin', name: 'invite', path: '/school/people/invite' },
+  {
+    role: 'admin',
+    name: 'person',
+    go: async (page) => {
+      await page.goto('/school/people');
+      await page.getByRole('link', { name: 'Lindqvist, Rut' }).click();
+      await page.getByRole('button', { name: 'mark as left' }).waitFor();
+    },
+  },
+  { role: 'admin', name: 'sections', path: '/school/sections' },
+  { role: 'admin', name: 'terms', path: '/school/terms' },
+  { role: 'admin', name: 'departments', path: '/school/departments' },
+  { role: 'admin', name: 'log', path: '/school/log' },
+  { role: 'admin', name: 'school-settings', path: '/school/settings' },
+  { role: 'admin', name: 'account', path: '/account' },
+  { role: 'student', name: 'account', path: '/account' },
+  { role: 'head', name: 'roles', path: '/account/role' },
 ];

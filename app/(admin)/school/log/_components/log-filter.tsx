@@ -17,7 +17,7 @@ export function LogFilter({ said, choices }: LogFilterProps) {
     <Form
       action="/school/log"
       key={JSON.stringify(said)}
-      className="mb-4 grid items-end gap-x-4 gap-y-3 sm:grid-cols-2 lg:grid-cols-[9.5rem_9.5rem_1fr_1fr_auto] print:hidden"
+      className="mb-4 grid grid-cols-2 items-end gap-x-4 gap-y-3 lg:grid-cols-[9.5rem_9.5rem_1fr_1fr_auto] print:hidden"
     >
       <TextField label="from" type="date" name="from" defaultValue={said.from} />
       <TextField label="to" type="date" name="to" defaultValue={said.to} />

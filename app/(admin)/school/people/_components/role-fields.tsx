@@ -29,7 +29,7 @@ export function RoleFields({ roles, departmentId, departments, errors }: RoleFie
   const needsPlace = ticked.has('teacher') || ticked.has('head');
   return (
     <>
-      <ChoiceGroup legend="roles" error={errors.roles?.join(' ')}>
+      <ChoiceGroup legend="may act as" error={errors.roles?.join(' ')}>
         {STAFF_ROLES.map((role) => (
           <CheckboxField
             key={role}
