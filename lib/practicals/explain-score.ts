@@ -27,7 +27,7 @@ export interface ScoreExplanation {
   possible: Points;
   total: Points;
   /** Given back because the raw score never falls below the floor; 0 when the floor is not reached. */
-  floorGives: Points;
+  floorGives: { points: Points; ofTotal: Points };
   bonus: Points;
   /** What lateness, the ceiling and rounding together add or take, on the scale of the total. */
   rest: Points;
@@ -38,7 +38,7 @@ type BareRow = Omit<LossRow, 'ofTotal'>;
 
 /**
  * Where every lost point of a score sheet went. The rows add up in both scales: `lost` is the sum of the rows,
- * `kept` and `lost` make the whole, and kept + bonus + rest is the score. Shares of the total are hundredths, each
+ * `kept` is the whole less `lost` plus what the floor gives, and kept + bonus + rest is the score. Shares of the total are hundredths, each
  * rounded down and the missing hundredths given to the largest remainders, first rows first. Pure; never fails.
  */
 export function explainScore(rubric: Rubric, sheet: ScoreSheet, bonus: Points): ScoreExplanation {
@@ -56,7 +56,7 @@ export function explainScore(rubric: Rubric, sheet: ScoreSheet, bonus: Points): 
     kept: { points: raw, ofTotal: keptOfTotal },
     possible,
     total,
-    floorGives,
+    floorGives: { points: floorGives, ofTotal: keptOfTotal - (total - lostOfTotal) },
     bonus,
     rest: score === null ? 0 : score - keptOfTotal - bonus,
     score,
