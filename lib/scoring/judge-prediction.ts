@@ -188,7 +188,8 @@ export function pairPieces(
   bench: PieceSheet[],
   within: Length,
 ): (PieceSheet | undefined)[] {
-  const columns = assignLeast(bench.length, Math.max(own.length, bench.length), (row, column) => {
+  const capacities = [...own.map(() => 1), Math.max(0, bench.length - own.length)];
+  const columns = assignLeast(bench.length, capacities, (row, column) => {
     const [theirs, ours] = [bench[row], own[column]];
     return theirs && ours ? pairCost(ours, theirs, within) : UNPAIRED;
   });
