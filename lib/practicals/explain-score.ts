@@ -27,7 +27,8 @@ export interface ScoreExplanation {
   possible: Points;
   total: Points;
   /** Given back because the raw score never falls below the floor; 0 when the floor is not reached. */
-  floorGives: { points: Points; ofTotal: Points };
+  floorGives: Points;
+  floorGivesOfTotal: Points;
   bonus: Points;
   /** What lateness, the ceiling and rounding together add or take, on the scale of the total. */
   rest: Points;
@@ -56,7 +57,8 @@ export function explainScore(rubric: Rubric, sheet: ScoreSheet, bonus: Points): 
     kept: { points: raw, ofTotal: keptOfTotal },
     possible,
     total,
-    floorGives: { points: floorGives, ofTotal: keptOfTotal - (total - lostOfTotal) },
+    floorGives,
+    floorGivesOfTotal: keptOfTotal - (total - lostOfTotal),
     bonus,
     rest: score === null ? 0 : score - keptOfTotal - bonus,
     score,
