@@ -1,28 +1,25 @@
-import { AXES, type Band, type SizeRule } from '@/lib/scoring';
-import type { PresetId, RubricForm } from '@/lib/scoring/rubric-form';
-import { pointsAsTyped } from './as-typed';
-import type { DraftSide, DraftSizeRule } from './draft';
-import { readPoints } from './field-reader';
+import type { Unit } from '@/lib/length';
+import {
+  AXES,
+  applyPreset,
+  type Band,
+  defaultRubricForm,
+  type PresetId,
+  type RubricForm,
+  type SizeRule,
+} from '@/lib/scoring';
 
-/** The same bands on both sides, the dear side at twice the price; null while a price cannot be read. */
-export function doubleSide(rule: DraftSizeRule, dear: 'over' | 'under'): DraftSizeRule | null {
-  const cheap = rule[dear === 'over' ? 'under' : 'over'];
-  const doubled = timesTwo(cheap);
-  return doubled && { ...rule, mirrored: false, [dear]: doubled };
-}
-
-function timesTwo(side: DraftSide): DraftSide | null {
-  const twice = (text: string) => {
-    const points = readPoints(text);
-    return points === null ? null : pointsAsTyped(points * 2);
-  };
-  const bands = side.bands.map(({ within, lose }, index) => ({
-    within,
-    lose: index === 0 ? lose : twice(lose),
-  }));
-  const beyond = twice(side.beyond);
-  if (beyond === null || bands.some(({ lose }) => lose === null)) return null;
-  return { bands: bands.map(({ within, lose }) => ({ within, lose: lose ?? '' })), beyond };
+/** One price as a preset makes it; the same rule as for a whole form. Null when a price would pass 1 000 points. */
+export function doubleSide(rule: SizeRule, dear: 'over' | 'under', unit: Unit): SizeRule | null {
+  const form = defaultRubricForm(unit);
+  const sizes = { thickness: rule, width: rule, length: rule };
+  const preset = dear === 'over' ? 'oversize-doubles' : 'undersize-doubles';
+  try {
+    return applyPreset({ ...form, defaults: { ...form.defaults, sizes } }, preset).defaults.sizes.length;
+  } catch (error) {
+    if (error instanceof RangeError) return null;
+    throw error;
+  }
 }
 
 /** Whether one side has the other's bands at twice the price, and any price at all. */

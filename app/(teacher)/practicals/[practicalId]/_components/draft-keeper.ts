@@ -1,0 +1,158 @@
+import type { PracticalDraft } from '@/lib/practicals/draft';
+
+export interface KeptDraft {
+  content: PracticalDraft;
+  revision: number;
+  at: string;
+}
+
+export type SaveReply =
+  | { kind: 'kept'; revision: number; at: string }
+  | { kind: 'stale'; message: string; there: KeptDraft }
+  | { kind: 'refused'; message: string; temporary: boolean };
+
+/** Where what is typed stands: kept on the server, on its way, or on this device alone. */
+export type KeepState =
+  | { kind: 'kept'; at: string }
+  | { kind: 'keeping' }
+  | { kind: 'waiting'; message: string }
+  | { kind: 'stale'; message: string; there: KeptDraft };
+
+/** What was typed on this device and the server has not confirmed. */
+export interface LocalCopy {
+  revision: number;
+  content: PracticalDraft;
+}
+
+export interface LocalStore {
+  put(copy: LocalCopy): void;
+  clear(): void;
+}
+
+interface Connections {
+  save(revision: number, content: PracticalDraft): Promise<SaveReply>;
+  store: LocalStore;
+  onState(state: KeepState): void;
+}
+
+const PAUSE = 800;
+const FIRST_RETRY = 2_000;
+const LONGEST_RETRY = 30_000;
+const MOVED_ON = 'This practical was changed in another place since you typed here.';
+const NOT_REACHED = 'The server does not answer. What you typed is on this device and is sent when it does.';
+
+/**
+ * Keeps a draft while it is typed: on the device at once, on the server after each pause, one save at a time. A save
+ * that fails for a moment is repeated with growing waits; one that is stale waits for a person to choose.
+ */
+export class DraftKeeper {
+  private latest: PracticalDraft | null = null;
+  private timer: ReturnType<typeof setTimeout> | null = null;
+  private running: Promise<void> | null = null;
+  private retry = FIRST_RETRY;
+  private stale = false;
+
+  constructor(
+    private revision: number,
+    private readonly to: Connections,
+  ) {}
+
+  /** The revision that the server last confirmed. */
+  get keptRevision(): number {
+    return this.revision;
+  }
+
+  change(draft: PracticalDraft): void {
+    this.latest = draft;
+    this.to.store.put({ revision: this.revision, content: draft });
+    if (!this.stale) this.schedule(PAUSE);
+  }
+
+  /** Goes on with what this device kept, unless the server has moved on from what that was typed into. */
+  bringBack(copy: LocalCopy, opened: KeptDraft): void {
+    if (copy.revision === opened.revision) {
+      this.change(copy.content);
+      return;
+    }
+    this.latest = copy.content;
+    this.stale = true;
+    this.to.onState({ kind: 'stale', message: MOVED_ON, there: opened });
+  }
+
+  /** Saves now what is not kept yet; true when all is kept. */
+  async keepNow(): Promise<boolean> {
+    this.cancel();
+    if (this.running) await this.running;
+    if (this.latest && !this.stale) await this.run();
+    return this.latest === null;
+  }
+
+  /** Keeps the draft over what was kept in another place. */
+  settle(draft: PracticalDraft, revision: number): void {
+    this.stale = false;
+    this.revision = revision;
+    this.change(draft);
+  }
+
+  /** Takes what was kept in another place; what was typed here is let go. */
+  take(there: KeptDraft): void {
+    this.stale = false;
+    this.latest = null;
+    this.revision = there.revision;
+    this.to.store.clear();
+    this.to.onState({ kind: 'kept', at: there.at });
+  }
+
+  stop(): void {
+    this.cancel();
+  }
+
+  private cancel(): void {
+    if (this.timer) clearTimeout(this.timer);
+    this.timer = null;
+  }
+
+  private schedule(wait: number): void {
+    this.cancel();
+    this.timer = setTimeout(() => void this.run(), wait);
+  }
+
+  private run(): Promise<void> {
+    this.running ??= this.save().finally(() => {
+      this.running = null;
+      if (this.latest && !this.stale && !this.timer) this.schedule(PAUSE);
+    });
+    return this.running;
+  }
+
+  private async save(): Promise<void> {
+    const sent = this.latest;
+    if (!sent) return;
+    this.cancel();
+    this.to.onState({ kind: 'keeping' });
+    const reply = await this.to
+      .save(this.revision, sent)
+      .catch((): SaveReply => ({ kind: 'refused', message: NOT_REACHED, temporary: true }));
+    if (reply.kind === 'kept') this.onKept(sent, reply);
+    else if (reply.kind === 'stale') {
+      this.stale = true;
+      this.to.onState(reply);
+    } else {
+      this.to.onState({ kind: 'waiting', message: reply.message });
+      this.schedule(this.retry);
+      this.retry = Math.min(this.retry * 2, LONGEST_RETRY);
+    }
+  }
+
+  private onKept(sent: PracticalDraft, { revision, at }: { revision: number; at: string }): void {
+    this.revision = revision;
+    this.retry = FIRST_RETRY;
+    if (this.latest === sent) {
+      this.latest = null;
+      this.to.store.clear();
+    } else if (this.latest) {
+      this.to.store.put({ revision, content: this.latest });
+    }
+    this.to.onState({ kind: 'kept', at });
+  }
+}

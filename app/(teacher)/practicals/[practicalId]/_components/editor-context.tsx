@@ -1,0 +1,58 @@
+'use client';
+
+import { createContext, type ReactNode, useContext } from 'react';
+import type { PracticalView } from '@/lib/data/practicals/read-practical';
+import type { Unit } from '@/lib/length';
+import type { DraftLine } from '@/lib/practicals/draft';
+import type { ParsedDraft } from '@/lib/practicals/parse-draft';
+import type { PlacedFinding } from '@/lib/practicals/place-findings';
+import type { Axis } from '@/lib/scoring';
+import type { DraftDesk } from './use-draft';
+
+/** What the lower half of the sheet is about; a line of null is all lines. */
+export type Selection =
+  | { kind: 'size'; lineId: string | null; axis: Axis }
+  | { kind: 'checks'; lineId: string | null }
+  | { kind: 'line'; lineId: string };
+
+export interface Editor {
+  desk: DraftDesk;
+  unit: Unit;
+  parsed: ParsedDraft;
+  latest: PracticalView['latest'];
+  findings: readonly PlacedFinding[];
+  /** The field in hand: it is not refused before it is left. */
+  focused: string | null;
+  setFocused(path: string | null): void;
+  /** What is shown as wrong with a field now; empty fields are refused once publishing was tried. */
+  errorsAt(path: string): string[];
+  selection: Selection;
+  select(selection: Selection): void;
+}
+
+const Context = createContext<Editor | null>(null);
+
+export function EditorProvider({ value, children }: { value: Editor; children: ReactNode }) {
+  return <Context value={value}>{children}</Context>;
+}
+
+export function useEditor(): Editor {
+  const editor = useContext(Context);
+  if (!editor) throw new Error('This belongs inside the editor.');
+  return editor;
+}
+
+/** A line with its place, by id; a selection may outlive the line it named. */
+export function lineOf(
+  lines: readonly DraftLine[],
+  lineId: string | null,
+): { line: DraftLine; index: number } | null {
+  const index = lines.findIndex(({ id }) => id === lineId);
+  const line = lines[index];
+  return line ? { line, index } : null;
+}
+
+/** The id of the control that types into a path of the draft. */
+export function fieldId(path: string): string {
+  return `field-${path.replaceAll('.', '-')}`;
+}

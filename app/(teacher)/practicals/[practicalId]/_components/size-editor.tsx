@@ -1,0 +1,118 @@
+'use client';
+
+import { FittedRuleFace } from '@/components/rule/fitted-rule-face';
+import { Button } from '@/components/ui/button';
+import { CheckboxField } from '@/components/ui/choice';
+import { LengthText } from '@/components/ui/fraction';
+import { Heading } from '@/components/ui/titles';
+import { readSizeRule } from '@/lib/practicals/parse-size-rule';
+import type { Axis, SizeRule } from '@/lib/scoring';
+import { BandFields } from './band-fields';
+import { lineOf, useEditor } from './editor-context';
+import { PresetKeys } from './preset-keys';
+import { marginOf, readSize, ruleScaleOf, targetOf } from './read-draft';
+import { FindingText } from './row-notes';
+import { type SizeRuleDesk, useSizeRule } from './use-size-rule';
+
+const OFF: Record<Axis, [under: string, over: string]> = {
+  thickness: ['thin', 'thick'],
+  width: ['narrow', 'wide'],
+  length: ['short', 'long'],
+};
+
+/** The price of one size on its rule: what is typed below stands on it at once. */
+export function SizeEditor({ lineId, axis }: { lineId: string | null; axis: Axis }) {
+  const { desk, unit, findings } = useEditor();
+  const size = useSizeRule(lineId, axis);
+  const found = lineOf(desk.draft.lines, lineId);
+  const target = targetOf(desk.draft, lineId, axis);
+  const name = found ? found.line.label || `line ${found.index + 1}` : 'all lines';
+  const ofLine = found ? readSize(found.line[axis], unit) : null;
+  const read = readSizeRule(size.rule, unit);
+  const here = findings.filter(({ path }) => path === size.base);
+  return (
+    <section aria-labelledby="size-heading" className="mt-8">
+      <div className="mb-3 flex flex-wrap items-center gap-x-4 gap-y-2">
+        <Heading id="size-heading" className="text-[1.4375rem] leading-7 first-letter:uppercase">
+          {name}, {size.together ? 'every size' : axis}{' '}
+          {ofLine === null ? null : <LengthText ticks={ofLine} unit={unit} />}
+        </Heading>
+        <Owner lineId={lineId} size={size} />
+        <div className="lg:ml-auto">
+          <PresetKeys size={size} read={read} disabled={!size.isOwn} />
+        </div>
+      </div>
+      {lineId === null ? (
+        <CheckboxField
+          label="one price for thickness, width and length"
+          checked={size.together}
+          onChange={(event) => size.setTogether(event.target.checked)}
+        />
+      ) : null}
+      {read ? (
+        <PriceOnRule rule={read} axis={axis} target={target} label={`${name}, ${axis}`} />
+      ) : (
+        <p className="border-y border-hair py-6 text-ink-2">
+          The rule is drawn again as soon as every band below can be read.
+        </p>
+      )}
+      {here.length > 0 ? (
+        <div className={here.every(({ isNote }) => isNote) ? 'mt-3' : 'mt-3 border-t-edge border-ink pt-2'}>
+          {here.map((finding) => (
+            <FindingText key={finding.code} {...finding} />
+          ))}
+        </div>
+      ) : null}
+      {size.isOwn ? <BandFields size={size} axis={axis} off={OFF[axis]} /> : null}
+    </section>
+  );
+}
+
+function Owner({ lineId, size }: { lineId: string | null; size: SizeRuleDesk }) {
+  if (lineId === null) return null;
+  return size.isOwn ? (
+    <p className="text-label text-ink-2">
+      differs from all lines{' '}
+      <Button kind="quiet" size="small" className="px-2" onClick={size.makeAsAll}>
+        price as all lines
+      </Button>
+    </p>
+  ) : (
+    <p className="text-label text-ink-2">
+      priced as all lines{' '}
+      <Button kind="quiet" size="small" className="px-2" onClick={size.makeOwn}>
+        price it by itself
+      </Button>
+    </p>
+  );
+}
+
+interface PriceOnRuleProps {
+  rule: SizeRule;
+  axis: Axis;
+  target: number;
+  label: string;
+}
+
+function PriceOnRule({ rule, axis, target, label }: PriceOnRuleProps) {
+  const { desk, unit } = useEditor();
+  const margin = marginOf(desk.draft);
+  const [under, over] = OFF[axis];
+  const edges = (['under', 'over'] as const).flatMap((side) =>
+    rule[side].filter(({ within }) => within > 0).map(({ within }) => ({ side, within })),
+  );
+  return (
+    <div>
+      <div className="flex justify-between text-label">
+        <span>− under: {under}</span>
+        <span>over: {over} +</span>
+      </div>
+      <FittedRuleFace {...{ unit, target, rule, margin, edges, label }} {...ruleScaleOf(rule, unit)} />
+      {margin > 0 ? (
+        <p className="mt-1 text-small text-ink-2">
+          reading margin <LengthText ticks={margin} unit={unit} />: each price begins this far past its edge
+        </p>
+      ) : null}
+    </div>
+  );
+}

@@ -1,0 +1,61 @@
+'use client';
+
+import { LocalTime } from '@/app/(teacher)/practicals/_components/local-time';
+import { Cell, HeadCell, RowHead, Table, TableBody, TableHead } from '@/components/table/table';
+import { Button } from '@/components/ui/button';
+import { Dialog } from '@/components/ui/dialog';
+import { draftDifferences } from '@/lib/practicals/field-names';
+import type { DraftDesk } from './use-draft';
+
+const MOST_ROWS = 12;
+
+/** Two drafts of one practical: what each says where they differ, and the choice between them. */
+export function StaleDialog({ desk }: { desk: DraftDesk }) {
+  if (desk.keep.kind !== 'stale') return null;
+  const { there, message } = desk.keep;
+  const differences = draftDifferences(desk.draft, there.content);
+  return (
+    <Dialog
+      open
+      onOpenChange={() => {}}
+      title="Two drafts of this practical"
+      description={`${message} Nothing is lost yet: this is where they differ.`}
+      className="max-w-[46rem] [&_button.close]:hidden"
+      closeLabel="look first"
+    >
+      {differences.length === 0 ? (
+        <p>Both say the same.</p>
+      ) : (
+        <Table caption="where the two drafts differ">
+          <TableHead>
+            <tr>
+              <HeadCell>field</HeadCell>
+              <HeadCell>typed here</HeadCell>
+              <HeadCell>
+                kept there <LocalTime at={there.at} />
+              </HeadCell>
+            </tr>
+          </TableHead>
+          <TableBody>
+            {differences.slice(0, MOST_ROWS).map(({ path, name, here, there: other }) => (
+              <tr key={path}>
+                <RowHead>{name}</RowHead>
+                <Cell className="max-w-48 truncate">{here || '–'}</Cell>
+                <Cell className="max-w-48 truncate">{other || '–'}</Cell>
+              </tr>
+            ))}
+          </TableBody>
+        </Table>
+      )}
+      {differences.length > MOST_ROWS ? (
+        <p className="mt-2 text-label text-ink-2">and {differences.length - MOST_ROWS} more</p>
+      ) : null}
+      <div className="mt-6 flex flex-wrap justify-end gap-2">
+        <Button onClick={() => desk.takeThere(there)}>take the one kept there</Button>
+        <Button kind="act" onClick={() => desk.keepHere(there)}>
+          keep what is typed here
+        </Button>
+      </div>
+    </Dialog>
+  );
+}

@@ -1,0 +1,56 @@
+'use client';
+
+import { useSearchParams } from 'next/navigation';
+import { classNames } from '@/components/ui/class-names';
+import type { EditorStep } from '@/lib/practicals/field-names';
+
+const STEPS: { step: EditorStep; label: string }[] = [
+  { step: 'task', label: 'task' },
+  { step: 'prices', label: 'cut list and prices' },
+  { step: 'rules', label: 'total and rules' },
+];
+
+/** The sheet of the editor that lies on top; its address can be kept and shared. */
+export function useStep(): [EditorStep, (step: EditorStep) => void] {
+  const asked = useSearchParams().get('step');
+  const step = STEPS.find((each) => each.step === asked)?.step ?? 'prices';
+  return [step, (next) => window.history.pushState(null, '', `?step=${next}`)];
+}
+
+interface StepsProps {
+  current: EditorStep;
+  /** Fields shown as wrong, by sheet. */
+  wrong: Record<EditorStep, number>;
+  onStep(step: EditorStep): void;
+}
+
+export function Steps({ current, wrong, onStep }: StepsProps) {
+  return (
+    <nav aria-label="sheets of this practical">
+      <ol className="flex flex-wrap gap-x-4 gap-y-1">
+        {STEPS.map(({ step, label }, index) => (
+          <li key={step}>
+            <a
+              href={`?step=${step}`}
+              aria-current={step === current ? 'step' : undefined}
+              onClick={(event) => {
+                event.preventDefault();
+                onStep(step);
+              }}
+              className={classNames(
+                'inline-flex min-h-11 items-center gap-2 border-b border-rule px-1 pt-1 hover:border-ink',
+                step === current && 'border-b-[4px] border-act font-[660] hover:border-act',
+              )}
+            >
+              <span className="tnum text-ink-2">{index + 1}</span>
+              {label}
+              {wrong[step] > 0 ? (
+                <span className="text-label font-[640] text-refuse">{wrong[step]} to mend</span>
+              ) : null}
+            </a>
+          </li>
+        ))}
+      </ol>
+    </nav>
+  );
+}

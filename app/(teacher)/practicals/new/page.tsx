@@ -1,0 +1,26 @@
+import type { Metadata } from 'next';
+import { DeskPage } from '@/components/shell/desk-page';
+import { Heading } from '@/components/ui/titles';
+import { listPracticals } from '@/lib/data/practicals/list-practicals';
+import { pageActor, pageValue } from '@/lib/transport/page';
+import { NewPracticalForm } from '../_components/new-practical-form';
+import { StarterList } from '../_components/starter-list';
+
+export const metadata: Metadata = { title: 'New practical' };
+
+export default async function NewPracticalPage() {
+  const { own } = pageValue(await listPracticals(await pageActor(), {}));
+  return (
+    <DeskPage title="New practical">
+      <div className="grid gap-10">
+        <section aria-labelledby="empty-heading">
+          <Heading id="empty-heading" className="mb-3">
+            From nothing
+          </Heading>
+          <NewPracticalForm unit={own[0]?.unit ?? 'in'} />
+        </section>
+        <StarterList heading="Or copy a starter" />
+      </div>
+    </DeskPage>
+  );
+}
