@@ -3,7 +3,7 @@ import type { Line } from '@/lib/scoring';
 import { spotBefore } from './cursor';
 import { otherUnit } from './keypad';
 import { findPiece } from './pieces';
-import { NOTHING_TO_READ, readSize } from './read-size';
+import { readSize } from './read-size';
 import { makeEvent, moved, recorded, refused } from './record-events';
 import type { Caliper, Mint, Outcome, RoundState, Spot } from './types';
 
@@ -24,6 +24,8 @@ export function takeInstrument(state: RoundState, mint: Mint, text: string, at: 
   const heard = withCaliper(state, { last: { text: typed, at } });
   const parsed = parseLength(typed, state.caliper.unit);
   if (!parsed.ok) return refused(withCaliper(heard, { closed: false }), `“${typed}”: ${parsed.reason}`);
+  const doubtful = suspectUnit(heard, typed, parsed.ticks, parsed.unit);
+  if (doubtful) return doubtful;
   if (Math.abs(parsed.ticks) < CLOSED_BELOW) return closeJaws(heard, mint, typed, parsed.ticks);
   if (parsed.ticks < 0) {
     return refused(
@@ -31,10 +33,7 @@ export function takeInstrument(state: RoundState, mint: Mint, text: string, at: 
       'The caliper shows less than nothing: set its zero and measure again.',
     );
   }
-  const ready = withCaliper(heard, { closed: false });
-  const doubtful = suspectUnit(ready, typed, parsed.ticks, parsed.unit);
-  if (doubtful) return doubtful;
-  return readSize({ ...ready, asked: null }, mint, {
+  return readSize({ ...withCaliper(heard, { closed: false }), asked: null }, mint, {
     ticks: parsed.ticks,
     typed,
     unit: parsed.unit,
@@ -81,7 +80,7 @@ function closeJaws(state: RoundState, mint: Mint, typed: string, ticks: Length):
 /** Asks when a bare number fits the target only in the other unit: 88.9 for 3 1/2, or 0.51 for 13. */
 function suspectUnit(state: RoundState, typed: string, ticks: Length, unit: Unit): Outcome | null {
   const place = state.spot && findPiece(state.plan.rubric, state.spot);
-  if (!state.spot || !place) return refused(state, NOTHING_TO_READ);
+  if (!place) return null;
   const other = otherUnit(unit);
   const read = parseLength(typed, other);
   const isBare = read.ok && read.unit === other;
@@ -89,7 +88,7 @@ function suspectUnit(state: RoundState, typed: string, ticks: Length, unit: Unit
   const near = (length: Length) => isNear(state, place.line, state.spot, length);
   if (near(ticks) || !near(read.ticks)) return null;
   return moved(
-    state,
+    withCaliper(state, { closed: false }),
     { asked: { about: 'unit', text: typed, unit, other, ticks: read.ticks }, doubt: null },
     'refused',
   );

@@ -9,7 +9,7 @@ import type { Mint, Outcome, Reading, RoundState, Spot } from './types';
 /** Two presses of one gross reading are rarely the same to the last digit. */
 const SAME_WITHIN = TICKS_PER_INCH / 32;
 
-export const NOTHING_TO_READ = 'Nothing is left to read. Tap a size to read it again.';
+const NOTHING_TO_READ = 'Nothing is left to read. Tap a size to read it again.';
 
 /** Keeps a reading where the cursor stands and moves on; one past the gross limit needs a second press. */
 export function readSize(state: RoundState, mint: Mint, reading: Reading): Outcome {
