@@ -100,6 +100,29 @@ test('an admin marks somebody as left, whose session ends, and brings them back'
   await theirs.context().close();
 });
 
+test('an admin gives a student first words, which are shown once and let the student in', async ({
+  page,
+  browser,
+}) => {
+  const school = await makeSchool();
+  const admin = await makePerson(school, ['admin'], { password: PASSWORD });
+  const student = await makePerson(school, ['student'], { familyName: 'Quispe' });
+  await signIn(page, { ...admin, schoolCode: null, password: PASSWORD });
+  await page.goto('/school/people?shown=students');
+  await page.getByRole('link', { name: /^Quispe/ }).click();
+  await page.getByRole('button', { name: 'give first words' }).click();
+  const shown = page.getByRole('list', { name: 'the new words' });
+  await expect(shown.getByRole('listitem')).toHaveCount(4);
+  const words = (await shown.getByRole('listitem').allTextContents()).join(' ');
+  await expectAccessible(page);
+  await page.reload();
+  await expect(shown).toHaveCount(0);
+  const theirs = await (await browser.newContext()).newPage();
+  await signIn(theirs, { ...student, schoolCode: school.code, password: words });
+  await expect(theirs.getByRole('heading', { name: 'Your own words' })).toBeVisible();
+  await theirs.context().close();
+});
+
 test('an admin adds a term and a department, and is told what is taken', async ({ page }) => {
   const school = await makeSchool();
   const admin = await makePerson(school, ['admin'], { password: PASSWORD });

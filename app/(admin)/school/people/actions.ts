@@ -5,6 +5,7 @@ import { revalidatePath } from 'next/cache';
 import { redirect } from 'next/navigation';
 import { currentActor } from '@/lib/auth/session';
 import { changeRolesInput, invitePersonInput } from '@/lib/contracts/school';
+import { type PassphraseSlip, resetPassphrase } from '@/lib/data/account/reset-passphrase';
 import { bringBack } from '@/lib/data/school/bring-back';
 import { changeRoles } from '@/lib/data/school/change-roles';
 import { invitePerson } from '@/lib/data/school/invite-person';
@@ -45,6 +46,14 @@ export async function markLeftAction(_: PressReply, data: FormData): Promise<Pre
 export async function bringBackAction(_: PressReply, data: FormData): Promise<PressReply> {
   const result = await bringBack(await currentActor(), { personId: data.get('personId') });
   return settle(result, () => 'Back again.');
+}
+
+/** New words for a student, to be shown this once. */
+export type WordsReply = { refused: string } | { slip: PassphraseSlip } | undefined;
+
+export async function giveWordsAction(_: WordsReply, data: FormData): Promise<WordsReply> {
+  const result = await resetPassphrase(await currentActor(), { studentId: data.get('studentId') });
+  return result.ok ? { slip: result.value } : { refused: result.problem.message };
 }
 
 function settle<T>(result: Result<T>, say: (value: T) => string): PressReply {

@@ -1,11 +1,13 @@
 import { Heading } from '@/components/ui/titles';
 import type { PersonView } from '@/lib/data/school/person-view';
+import { GiveWords } from './give-words';
 import { Press } from './press';
 
 /** What an admin can do about a person besides the roles. */
 export function PersonActs({ person }: { person: PersonView }) {
-  const { personId, state, isSelf, email } = person;
+  const { personId, state, isSelf, email, roles } = person;
   const waits = state === 'invited' || state === 'invitation ended';
+  const isStudentAlone = roles.every((role) => role === 'student');
   if (isSelf) return null;
   return (
     <section className="grid gap-6">
@@ -20,8 +22,8 @@ export function PersonActs({ person }: { person: PersonView }) {
           <Press what="resend" personId={personId} />
         </div>
       ) : null}
-      {state === 'no passphrase' ? (
-        <p>This student has no passphrase yet. The teacher of a section gives out the first words.</p>
+      {isStudentAlone && state !== 'left' ? (
+        <GiveWords studentId={personId} first={state === 'no passphrase'} />
       ) : null}
       {state === 'left' ? (
         <div className="grid gap-2">
