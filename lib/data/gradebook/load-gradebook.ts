@@ -1,0 +1,105 @@
+import 'server-only';
+import type { Transaction } from '@/db/client';
+import { selectSittingsOf, selectVersion } from '@/db/queries/gradebook';
+import {
+  type AttemptRow,
+  type PublicationRow,
+  type ResultRow,
+  selectAttempts,
+  selectPublications,
+  selectResults,
+} from '@/db/queries/sittings';
+import { type Task, taskSchema } from '@/lib/practicals/task';
+import type { Rubric } from '@/lib/scoring';
+import type { RubricForm } from '@/lib/scoring/rubric-form';
+import { rubricFormSchema } from '@/lib/scoring/rubric-form-schema';
+import { rubricSchema } from '@/lib/scoring/schemas';
+
+export interface LoadedVersion {
+  versionId: string;
+  number: number;
+  task: Task;
+  form: RubricForm;
+  rubric: Rubric;
+}
+
+export interface LoadedSitting {
+  sittingId: string;
+  title: string;
+  open: boolean;
+  openedAt: Date;
+  /** The version the sitting stands under. */
+  version: LoadedVersion;
+  attempts: AttemptRow[];
+  latest: { publication: PublicationRow; version: LoadedVersion; results: Map<string, ResultRow> } | null;
+}
+
+/** The sittings of a section, the first one first, with attempts and what was last published. */
+export async function loadSittings(
+  tx: Transaction,
+  schoolId: string,
+  sectionId: string,
+): Promise<LoadedSitting[]> {
+  const sittings = await selectSittingsOf(tx, schoolId, sectionId);
+  if (sittings.length === 0) return [];
+  const ids = sittings.map(({ sittingId }) => sittingId);
+  const attempts = await selectAttempts(tx, schoolId, ids);
+  const latest = new Map<string, PublicationRow>();
+  for (const row of await selectPublications(tx, schoolId, ids)) {
+    if (!latest.has(row.sittingId)) latest.set(row.sittingId, row);
+  }
+  const publications = [...latest.values()];
+  const results =
+    publications.length === 0
+      ? []
+      : await selectResults(
+          tx,
+          schoolId,
+          publications.map(({ publicationId }) => publicationId),
+        );
+  const versionOf = versionReader(tx, schoolId);
+  const loaded: LoadedSitting[] = [];
+  for (const { sittingId, title, state, openedAt, rubricVersionId } of sittings) {
+    const publication = latest.get(sittingId);
+    loaded.push({
+      sittingId,
+      title,
+      open: state === 'open',
+      openedAt,
+      version: await versionOf(rubricVersionId),
+      attempts: attempts.filter((row) => row.sittingId === sittingId),
+      latest: publication
+        ? {
+            publication,
+            version: await versionOf(publication.rubricVersionId),
+            results: new Map(
+              results
+                .filter((row) => row.publicationId === publication.publicationId)
+                .map((row) => [row.attemptId, row]),
+            ),
+          }
+        : null,
+    });
+  }
+  return loaded;
+}
+
+/** Each version is read once. */
+function versionReader(tx: Transaction, schoolId: string): (versionId: string) => Promise<LoadedVersion> {
+  const known = new Map<string, LoadedVersion>();
+  return async (versionId) => {
+    const read = known.get(versionId);
+    if (read) return read;
+    const row = await selectVersion(tx, schoolId, versionId);
+    if (!row) throw new Error(`rubric version ${versionId} is not there`);
+    const version = {
+      versionId,
+      number: row.number,
+      task: taskSchema.parse(row.task),
+      form: rubricFormSchema.parse(row.form),
+      rubric: rubricSchema.parse(row.rubric),
+    };
+    known.set(versionId, version);
+    return version;
+  };
+}

@@ -1,0 +1,121 @@
+import 'server-only';
+import { selectFiles } from '@/db/queries/gradebook';
+import { wasViewLogged } from '@/db/queries/rounds';
+import { selectRoster, selectSection, selectSections } from '@/db/queries/sections';
+import { selectMissingNumbers } from '@/db/queries/sittings';
+import type { Actor } from '@/lib/auth/actor';
+import { may } from '@/lib/auth/policy';
+import { type GradebookCell, type GradebookView, gradebookInput } from '@/lib/contracts/gradebook';
+import { asSectionView, sectionSubject } from '../sections/section-view';
+import { defineVerb } from '../verb';
+import { cellOf, isChanged } from './gradebook-cells';
+import { type LoadedSitting, loadSittings } from './load-gradebook';
+import { termMean } from './term-mean';
+
+const FILES_SHOWN = 10;
+
+/** A section's students by its practicals. Looking at it is logged once an hour. */
+export const readGradebook = defineVerb({
+  action: 'gradebook.read',
+  input: gradebookInput,
+  async run({ actor, input, tx, authorize, found, log }): Promise<GradebookView> {
+    const { schoolId, personId } = actor;
+    const { sectionId } = input;
+    const section = found(await selectSection(tx, schoolId, sectionId));
+    const subject = sectionSubject(section);
+    authorize(subject);
+    const sittings = await loadSittings(tx, schoolId, sectionId);
+    const missing = await selectMissingNumbers(
+      tx,
+      schoolId,
+      sittings.map(({ sittingId }) => sittingId),
+    );
+    const byAttempt = new Map<string, number>();
+    for (const row of missing.filter(({ sameAttempt }) => sameAttempt)) {
+      byAttempt.set(row.attemptId, (byAttempt.get(row.attemptId) ?? 0) + row.missing);
+    }
+    const mayExport = may(actor, 'grades.export', subject);
+    const files = mayExport ? await selectFiles(tx, schoolId, sectionId, FILES_SHOWN) : [];
+    const siblings = (await selectSections(tx, schoolId, scopeOf(actor))).filter(
+      ({ termId }) => termId === section.termId,
+    );
+    if (!(await wasViewLogged(tx, schoolId, personId, 'gradebook.read', sectionId))) {
+      await log({ subjectKind: 'section', subjectId: sectionId, details: { sittings: sittings.length } });
+    }
+    const roster = await selectRoster(tx, schoolId, sectionId);
+    return {
+      section: asSectionView(section),
+      sections: siblings.map(({ sectionId: id, name, period }) => ({ sectionId: id, name, period })),
+      sittings: sittings.map((sitting) => headOf(sitting, missing)),
+      students: roster.map(({ studentId, localId, familyName, givenName, joinedOn, leftOn }) => {
+        const cells = sittings.map((sitting) => cellIn(sitting, studentId, byAttempt));
+        return { studentId, localId, familyName, givenName, joinedOn, leftOn, cells, mean: meanOf(cells) };
+      }),
+      files: files.map((file) => ({
+        fileId: file.fileId,
+        kind: file.kind,
+        fileName: file.fileName,
+        sentAt: file.exportedAt.toISOString(),
+        sentBy: `${file.givenName} ${file.familyName}`.trim(),
+        rows: file.rowCount,
+        bytes: file.byteCount,
+        sha256: file.sha256,
+      })),
+      may: { export: mayExport, change: may(actor, 'sitting.change', subject) },
+      timeZone: section.timeZone,
+    };
+  },
+});
+
+function scopeOf({ role, personId, departmentId }: Actor) {
+  return role === 'head' ? { departmentId: departmentId ?? personId } : { teacherId: personId };
+}
+
+function headOf(
+  sitting: LoadedSitting,
+  missing: readonly { sittingId: string; missing: number }[],
+): GradebookView['sittings'][number] {
+  const { sittingId, title, open, openedAt, version, latest, attempts } = sitting;
+  const notArrived = missing
+    .filter((row) => row.sittingId === sittingId)
+    .reduce((sum, row) => sum + row.missing, 0);
+  return {
+    sittingId,
+    title,
+    open,
+    openedAt: openedAt.toISOString(),
+    versionNumber: latest?.version.number ?? version.number,
+    publication: latest && {
+      number: latest.publication.number,
+      publishedAt: latest.publication.publishedAt.toISOString(),
+      changedSince: attempts.filter((row) =>
+        isChanged({ row, result: latest.results.get(row.attemptId) }, version.rubric),
+      ).length,
+    },
+    notArrived,
+  };
+}
+
+function cellIn(
+  { attempts, latest, version }: LoadedSitting,
+  studentId: string,
+  notArrived: ReadonlyMap<string, number>,
+): GradebookCell | null {
+  const own = attempts.filter((row) => row.studentId === studentId);
+  return cellOf(
+    own.map((row) => ({ row, result: latest?.results.get(row.attemptId) })),
+    (latest?.version ?? version).form.policies.redo,
+    {
+      rubric: version.rubric,
+      notArrived: own.reduce((sum, { attemptId }) => sum + (notArrived.get(attemptId) ?? 0), 0),
+    },
+  );
+}
+
+function meanOf(cells: readonly (GradebookCell | null)[]): number | null {
+  return termMean(
+    cells.flatMap((cell) =>
+      cell?.published && cell.score !== null ? [{ score: cell.score, total: cell.total }] : [],
+    ),
+  );
+}

@@ -1,0 +1,149 @@
+import 'server-only';
+import { createHash } from 'node:crypto';
+import type { Transaction } from '@/db/client';
+import { insertMissingAttempts } from '@/db/queries/rounds';
+import {
+  type AttemptRow,
+  type PublicationRow,
+  type ResultRow,
+  type SittingRow,
+  selectAttempts,
+  selectLockEvents,
+  selectPublications,
+  selectResults,
+} from '@/db/queries/sittings';
+import { scoreSheetSchema } from '@/lib/contracts/results';
+import type { Rubric } from '@/lib/scoring';
+import type { PredictionPolicy } from '@/lib/scoring/rubric-form';
+import { rubricFormSchema } from '@/lib/scoring/rubric-form-schema';
+import { attemptSchema, rubricSchema } from '@/lib/scoring/schemas';
+import { type CellEvent, deriveCells } from '@/lib/sync/derive';
+import { asCellEvent } from '@/lib/sync/server/stored-event';
+import { rebuildSheets } from '../rounds/rebuild-sheets';
+import { type JudgedResult, judgeResult, type RecordedAttempt } from './judge-result';
+import { sameJson } from './same-json';
+
+export interface GatheredAttempt {
+  row: AttemptRow;
+  recorded: RecordedAttempt;
+}
+
+/** All that a publication of a sitting depends on, as it stands. */
+export interface Gathered {
+  rubric: Rubric;
+  policy: PredictionPolicy;
+  attempts: GatheredAttempt[];
+  /** Equal as long as nothing that could change a result has changed. */
+  seen: string;
+  latest: { publication: PublicationRow; results: ResultRow[] } | null;
+}
+
+/**
+ * Brings the sheets of a sitting up to date with its events and loads what its results are judged from. Those who
+ * left the section are in it only with something recorded, a standing, or an earlier result.
+ */
+export async function gatherResults(tx: Transaction, sitting: SittingRow): Promise<Gathered> {
+  const { schoolId, sittingId, sectionId } = sitting;
+  if (sitting.state === 'open') await insertMissingAttempts(tx, schoolId, sittingId, sectionId);
+  const ids = (await selectAttempts(tx, schoolId, [sittingId])).map(({ attemptId }) => attemptId);
+  await rebuildSheets(tx, schoolId, ids);
+  const late = await lateLocks(tx, sitting);
+  const latest = await loadLatest(tx, sitting);
+  const told = new Set(latest?.results.map(({ attemptId }) => attemptId));
+  const rows = (await selectAttempts(tx, schoolId, [sittingId])).filter(
+    (row) => row.here || row.recorded !== null || row.standing !== 'expected' || told.has(row.attemptId),
+  );
+  const attempts = rows.map((row) => ({ row, recorded: asRecorded(row, late.has(row.attemptId)) }));
+  const material = attempts.map(({ row, recorded }) => [row.attemptId, row.here, recorded]);
+  return {
+    rubric: rubricSchema.parse(sitting.rubric),
+    policy: rubricFormSchema.parse(sitting.form).policies.prediction,
+    attempts,
+    seen: createHash('sha256')
+      .update(sameJson([sitting.rubricVersionId, latest?.publication.number ?? 0, material]))
+      .digest('hex'),
+    latest,
+  };
+}
+
+export interface GatheredResult extends JudgedResult {
+  row: AttemptRow;
+}
+
+/** Each attempt with its result. What holds it up does not hold for those who have left the section. */
+export function judgeAll({ rubric, policy, attempts }: Gathered, countLate: boolean): GatheredResult[] {
+  return attempts.map(({ row, recorded }) => {
+    const result = judgeResult(rubric, policy, recorded, countLate);
+    const open = row.here || result.open === 'conflict' ? result.open : null;
+    return { row, ...result, open };
+  });
+}
+
+function asRecorded(row: AttemptRow, late: boolean): RecordedAttempt {
+  return {
+    standing: row.standing,
+    recorded: row.recorded === null ? null : attemptSchema.parse(row.recorded),
+    conflicts: row.conflicts ?? 0,
+    measuredAt: row.measuredAt,
+    own:
+      row.ownRecorded === null
+        ? null
+        : {
+            attempt: attemptSchema.parse(row.ownRecorded),
+            sheet: scoreSheetSchema.parse(row.ownSheet),
+            locked: row.lockedAt !== null,
+            late,
+          },
+  };
+}
+
+/** The attempts whose standing lock came after the bench had begun, without a receipt. */
+async function lateLocks(tx: Transaction, { schoolId, sittingId }: SittingRow): Promise<Set<string>> {
+  const byAttempt = new Map<string, (CellEvent & { flags: string[] })[]>();
+  for (const row of await selectLockEvents(tx, schoolId, sittingId)) {
+    const events = byAttempt.get(row.attemptId) ?? [];
+    byAttempt.set(row.attemptId, [...events, { ...asCellEvent(row), flags: row.flags }]);
+  }
+  const isLate = (events: (CellEvent & { flags: string[] })[]) =>
+    [...deriveCells(events, 'own').values()].some(({ heads }) =>
+      heads.some(({ flags }) => flags.includes('late-lock')),
+    );
+  return new Set([...byAttempt].flatMap(([attemptId, events]) => (isLate(events) ? [attemptId] : [])));
+}
+
+async function loadLatest(tx: Transaction, { schoolId, sittingId }: SittingRow): Promise<Gathered['latest']> {
+  const [publication] = await selectPublications(tx, schoolId, [sittingId]);
+  if (!publication) return null;
+  return { publication, results: await selectResults(tx, schoolId, [publication.publicationId]) };
+}
+
+type Told = Pick<
+  ResultRow,
+  | 'attemptId'
+  | 'status'
+  | 'scorePoints'
+  | 'totalPoints'
+  | 'bonusPoints'
+  | 'predictedPoints'
+  | 'measuredAt'
+  | 'sheet'
+  | 'ownSheet'
+  | 'judgement'
+>;
+
+export function asTold({ row, open: _, ...result }: GatheredResult): Told {
+  return { attemptId: row.attemptId, ...result };
+}
+
+/** How many results differ from what the latest publication told; all of them when there is none. */
+export function countChanges(
+  sitting: SittingRow,
+  latest: Gathered['latest'],
+  results: readonly GatheredResult[],
+): number {
+  if (!latest || latest.publication.rubricVersionId !== sitting.rubricVersionId) return results.length;
+  const told = new Map(
+    latest.results.map(({ publicationId: _p, schoolId: _s, ...row }) => [row.attemptId, sameJson(row)]),
+  );
+  return results.filter((result) => told.get(result.row.attemptId) !== sameJson(asTold(result))).length;
+}
