@@ -1,0 +1,47 @@
+import { NavLinks } from '@/components/ui/nav-links';
+import { PageTitle } from '@/components/ui/titles';
+import type { TaskStage } from '@/lib/data/own/list-tasks';
+import { DayText } from './day-text';
+
+interface TaskHeadProps {
+  sittingId: string;
+  title: string;
+  sectionName: string;
+  period: string;
+  attemptNumber: number;
+  dueOn?: string | null;
+  stage: TaskStage;
+}
+
+/** The name of the practical and where it was given; its sheets below, those that there are. */
+export function TaskHead({
+  sittingId,
+  title,
+  sectionName,
+  period,
+  attemptNumber,
+  dueOn,
+  stage,
+}: TaskHeadProps) {
+  const home = `/my/${sittingId}`;
+  const items = [
+    { href: home, label: 'task', exact: true },
+    { href: `${home}/measure`, label: stage === 'to do' ? 'measure' : 'own readings' },
+    ...(stage === 'published' ? [{ href: `${home}/result`, label: 'result' }] : []),
+  ];
+  return (
+    <header>
+      <PageTitle>{title}</PageTitle>
+      <p className="mt-1 text-label text-ink-2">
+        {sectionName}, period {period}
+        {attemptNumber > 1 ? `, attempt ${attemptNumber}` : ''}
+        {dueOn ? (
+          <>
+            , due <DayText day={dueOn} />
+          </>
+        ) : null}
+      </p>
+      <NavLinks label="sheets of this practical" items={items} className="mt-1" />
+    </header>
+  );
+}
