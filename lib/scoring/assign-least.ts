@@ -111,7 +111,7 @@ function relax({ columns, costs, u, v }: Table, search: Search, row: number, maj
   for (let column = 0, at = row * columns; column < columns; column++, at++) {
     if (get(done, column) === 1) continue;
     const farMajor = baseMajor + get(costs.major, at) - get(v.major, column);
-    if (farMajor > get(far.major, column)) continue;
+    if (farMajor > get(far.major, column) || farMajor === Number.POSITIVE_INFINITY) continue;
     const farMinor = baseMinor + get(costs.minor, at) - get(v.minor, column);
     if (farMajor === get(far.major, column) && farMinor >= get(far.minor, column)) continue;
     far.major[column] = farMajor;
