@@ -96,18 +96,18 @@ test('a person with several roles switches between them, also where a sheet belo
   page,
 }) => {
   const school = await makeSchool();
-  const both = await makePerson(school, ['teacher', 'admin'], { password: PASSWORD });
+  const both = await makePerson(school, ['aide', 'admin'], { password: PASSWORD });
   await signIn(page, { ...both, schoolCode: null, password: PASSWORD });
-  await expect(page).toHaveURL(/\/periods/);
+  await expect(page).toHaveURL(/\/school$/);
+  await page.getByRole('button', { name: /^Rut/ }).click();
+  await page.getByRole('button', { name: 'aide' }).click();
+  await expect(page).toHaveURL(/\/round$/);
   await page.goto('/school/people');
   await expect(page.getByRole('heading', { name: 'Another of your roles' })).toBeVisible();
   await expectAccessible(page);
   await page.getByRole('button', { name: 'admin' }).click();
   await expect(page).toHaveURL(/\/school$/);
   await expect(page.getByRole('heading', { name: school.name })).toBeVisible();
-  await page.getByRole('button', { name: /^Rut/ }).click();
-  await page.getByRole('button', { name: 'teacher' }).click();
-  await expect(page).toHaveURL(/\/periods/);
 });
 
 test('wrong tries are slowed down, and the page says for how long', async ({ page }) => {
