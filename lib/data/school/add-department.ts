@@ -1,5 +1,5 @@
 import 'server-only';
-import { insertDepartment, isDepartmentNameTaken } from '@/db/queries/school';
+import { insertDepartment, isDepartmentNameTaken } from '@/db/queries/departments';
 import { addDepartmentInput } from '@/lib/contracts/school';
 import { defineVerb } from '../verb';
 

@@ -1,5 +1,5 @@
 import 'server-only';
-import { insertTerm, isTermNameTaken } from '@/db/queries/school';
+import { insertTerm, isTermNameTaken } from '@/db/queries/terms';
 import { addTermInput } from '@/lib/contracts/school';
 import { defineVerb } from '../verb';
 

@@ -1,5 +1,5 @@
 import 'server-only';
-import { isTermNameTaken, selectTerm, updateTerm } from '@/db/queries/school';
+import { isTermNameTaken, selectTerm, updateTerm } from '@/db/queries/terms';
 import { changeTermInput } from '@/lib/contracts/school';
 import { defineVerb } from '../verb';
 import { TERM_NAME_TAKEN } from './add-term';

@@ -1,6 +1,6 @@
 import 'server-only';
 import { z } from 'zod';
-import { selectDepartments } from '@/db/queries/school';
+import { selectDepartments } from '@/db/queries/departments';
 import { defineVerb } from '../verb';
 
 export interface DepartmentView {

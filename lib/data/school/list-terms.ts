@@ -1,6 +1,7 @@
 import 'server-only';
 import { z } from 'zod';
-import { selectSchool, selectTerms } from '@/db/queries/school';
+import { selectSchool } from '@/db/queries/school';
+import { selectTerms } from '@/db/queries/terms';
 import { defineVerb } from '../verb';
 
 export interface TermView {

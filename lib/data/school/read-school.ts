@@ -1,13 +1,9 @@
 import 'server-only';
 import { z } from 'zod';
+import { selectDepartments } from '@/db/queries/departments';
 import { countWaiting } from '@/db/queries/people';
-import {
-  countRoles,
-  countSections,
-  selectDepartments,
-  selectSchool,
-  selectTermOn,
-} from '@/db/queries/school';
+import { countRoles, countSections, selectSchool } from '@/db/queries/school';
+import { selectTermOn } from '@/db/queries/terms';
 import { defineVerb } from '../verb';
 
 export interface SchoolView {

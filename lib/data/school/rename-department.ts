@@ -1,5 +1,5 @@
 import 'server-only';
-import { isDepartmentNameTaken, selectDepartment, updateDepartment } from '@/db/queries/school';
+import { isDepartmentNameTaken, selectDepartment, updateDepartment } from '@/db/queries/departments';
 import { renameDepartmentInput } from '@/lib/contracts/school';
 import { defineVerb } from '../verb';
 import { DEPARTMENT_NAME_TAKEN } from './add-department';

@@ -1,5 +1,5 @@
 import type { Transaction } from '@/db/client';
-import { selectDepartment } from '@/db/queries/school';
+import { selectDepartment } from '@/db/queries/departments';
 import type { Role } from '@/lib/auth/roles';
 
 /** Role rows as they are kept: an admin belongs to no department. */

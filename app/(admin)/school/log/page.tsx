@@ -1,18 +1,14 @@
 import type { Metadata } from 'next';
-import Link from 'next/link';
 import { DeskPage } from '@/components/shell/desk-page';
-import { Cell, HeadCell, RowHead, Table, TableBody, TableHead } from '@/components/table/table';
 import { EmptyState } from '@/components/ui/empty-state';
 import { LinkButton } from '@/components/ui/link-button';
 import { Refusal } from '@/components/ui/refusal';
-import { ROLE_NAMES } from '@/lib/auth/roles';
-import { type LogEntryView, readLog } from '@/lib/data/school/read-log';
+import { readLog } from '@/lib/data/school/read-log';
 import { pageActor, pageValue } from '@/lib/transport/page';
-import { sayMoment } from '../_components/day';
 import { Pages } from '../_components/pages';
 import { type SearchParams, saidIn } from '../_components/search-params';
-import { sayAction, sayDetails } from './_components/action-words';
 import { LogFilter } from './_components/log-filter';
+import { LogTable } from './_components/log-table';
 
 export const metadata: Metadata = { title: 'Access log' };
 
@@ -51,41 +47,5 @@ export default async function LogPage({ searchParams }: { searchParams: SearchPa
         hrefOf={(to) => `/school/log?${new URLSearchParams({ ...said, page: String(to) })}`}
       />
     </DeskPage>
-  );
-}
-
-function LogTable({ entries, timeZone }: { entries: LogEntryView[]; timeZone: string }) {
-  return (
-    <Table caption="entries of the access log, the newest first">
-      <TableHead>
-        <tr>
-          <HeadCell>when</HeadCell>
-          <HeadCell>who</HeadCell>
-          <HeadCell>what</HeadCell>
-          <HeadCell>about whom</HeadCell>
-          <HeadCell>details</HeadCell>
-        </tr>
-      </TableHead>
-      <TableBody fives>
-        {entries.map(({ id, at, actor, action, about, details }) => (
-          <tr key={id}>
-            <RowHead className="whitespace-nowrap font-[480]">{sayMoment(at, timeZone)}</RowHead>
-            <Cell>
-              {actor ? actor.name : 'somebody not signed in'}
-              {actor?.role ? <span className="text-label text-ink-2">, {ROLE_NAMES[actor.role]}</span> : null}
-            </Cell>
-            <Cell>{sayAction(action)}</Cell>
-            <Cell>
-              {about ? (
-                <Link className="link" href={`/school/people/${about.personId}`}>
-                  {about.name}
-                </Link>
-              ) : null}
-            </Cell>
-            <Cell className="max-w-[22rem] text-label break-words text-ink-2">{sayDetails(details)}</Cell>
-          </tr>
-        ))}
-      </TableBody>
-    </Table>
   );
 }
