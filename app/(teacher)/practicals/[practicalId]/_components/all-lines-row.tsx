@@ -29,7 +29,7 @@ export function AllLinesRow() {
       </td>
       <td className={CELL.wide}>
         <CellLabel>missing</CellLabel>
-        <SheetCell path="all.missing" label="points for a missing piece, all lines" placeholder="the worth" />
+        <SheetCell path="all.missing" label="points for a missing piece, all lines" placeholder={all.worth} />
       </td>
       <td className={CELL.wide}>
         <CellLabel>checks</CellLabel>

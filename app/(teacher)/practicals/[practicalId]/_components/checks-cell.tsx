@@ -22,9 +22,9 @@ export function ChecksCell({ lineId, checks }: { lineId: string | null; checks: 
       aria-label={`checks, ${name}: ${text}`}
       onClick={() => select({ kind: 'checks', lineId })}
       className={classNames(
-        'block min-h-9 w-full truncate border-b border-transparent px-1 pt-1 pb-1 text-left leading-6 hover:border-ink',
-        checks === null ? 'text-label text-ink-2' : 'border-rule text-text',
-        selected && 'border-b-edge border-act bg-plate pb-[2px]',
+        'block h-9 w-full truncate border-b border-transparent px-1 text-left leading-6 hover:border-ink',
+        checks === null ? 'text-label text-ink-2' : 'narrow border-rule text-text',
+        selected && 'border-b-edge border-act bg-plate',
       )}
     >
       {text}

@@ -20,7 +20,7 @@ export function ChecksEditor({ lineId }: { lineId: string | null }) {
   return (
     <section aria-labelledby="checks-heading" className="mt-8">
       <div className="mb-4 flex flex-wrap items-center gap-x-4 gap-y-1">
-        <Heading id="checks-heading" className="text-[1.4375rem] leading-7 first-letter:uppercase">
+        <Heading id="checks-heading" className="text-[1.4375rem] leading-7 font-[660] first-letter:uppercase">
           {name}, checks of a piece
         </Heading>
         {found ? (

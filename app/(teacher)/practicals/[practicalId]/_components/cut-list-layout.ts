@@ -1,6 +1,6 @@
 /** One grid for the head and all rows of the cut list; on narrow paper each line is a block of six columns. */
 export const ROW =
-  'grid grid-cols-6 gap-x-3 gap-y-2 lg:gap-x-2 lg:grid-cols-[2rem_minmax(6rem,1.7fr)_3.25rem_repeat(3,minmax(3.5rem,1fr))_repeat(2,minmax(3.25rem,0.75fr))_minmax(5.5rem,1.35fr)_repeat(3,4.5rem)]';
+  'grid grid-cols-6 gap-x-3 gap-y-2 lg:gap-x-2 lg:grid-cols-[1.75rem_minmax(6rem,1.5fr)_3.25rem_repeat(3,minmax(3.5rem,0.95fr))_repeat(2,minmax(3.25rem,0.7fr))_minmax(6.5rem,1.7fr)_repeat(3,4.25rem)]';
 
 export const CELL = {
   number: 'col-span-1 lg:col-span-1',

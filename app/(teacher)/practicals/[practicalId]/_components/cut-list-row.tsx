@@ -1,7 +1,9 @@
 'use client';
 
+import { useState } from 'react';
+import { Button } from '@/components/ui/button';
 import { classNames } from '@/components/ui/class-names';
-import type { DraftLine } from '@/lib/practicals/draft';
+import { type DraftLine, isException } from '@/lib/practicals/draft';
 import { AXES } from '@/lib/scoring';
 import { CellLabel } from './cell-label';
 import { ChecksCell } from './checks-cell';
@@ -27,6 +29,9 @@ export function CutListRow({ line, index, sheet }: CutListRowProps) {
   const at = `lines.${index}`;
   const name = line.label || `line ${index + 1}`;
   const dearest = dearestOf(desk.draft);
+  const [opened, setOpened] = useState(false);
+  const folded = !opened && !isException(line);
+  const priced = classNames(CELL.wide, folded && 'max-lg:hidden');
   const selected = selection.kind === 'line' && selection.lineId === line.id;
   const cell = (column: string) => ({
     path: `${at}.${column}`,
@@ -44,8 +49,8 @@ export function CutListRow({ line, index, sheet }: CutListRowProps) {
             aria-label={`line ${index + 1}, ${name}: drawing, note, move, remove`}
             onClick={() => select({ kind: 'line', lineId: line.id })}
             className={classNames(
-              'tnum block min-h-9 w-full border-b border-transparent pt-1 pb-1 text-left leading-6 text-ink-2 hover:border-ink hover:text-ink',
-              selected && 'border-b-edge border-act pb-[2px] font-[640] text-ink',
+              'tnum block h-9 w-full border-b border-transparent text-left leading-6 text-ink-2 hover:border-ink hover:text-ink',
+              selected && 'border-b-edge border-act font-[640] text-ink',
             )}
           >
             {index + 1}
@@ -65,20 +70,27 @@ export function CutListRow({ line, index, sheet }: CutListRowProps) {
             <SheetCell {...cell(axis)} isLength />
           </td>
         ))}
-        <td className={CELL.wide}>
+        {folded ? (
+          <td className="col-span-6 lg:hidden">
+            <Button kind="quiet" size="small" className="px-0" onClick={() => setOpened(true)}>
+              priced as all lines: change it for {name}
+            </Button>
+          </td>
+        ) : null}
+        <td className={priced}>
           <CellLabel>worth</CellLabel>
           <SheetCell {...cell('worth')} placeholder="as all" />
         </td>
-        <td className={CELL.wide}>
+        <td className={priced}>
           <CellLabel>missing</CellLabel>
           <SheetCell {...cell('missing')} placeholder="as all" />
         </td>
-        <td className={CELL.wide}>
+        <td className={priced}>
           <CellLabel>checks</CellLabel>
           <ChecksCell lineId={line.id} checks={line.checks} />
         </td>
         {AXES.map((axis) => (
-          <td key={axis} className={CELL.wide}>
+          <td key={axis} className={priced}>
             <CellLabel>price of {axis}</CellLabel>
             <PriceCell
               lineId={line.id}

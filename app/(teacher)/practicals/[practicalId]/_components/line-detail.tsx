@@ -35,7 +35,7 @@ export function LineDetail({ lineId, sheet }: { lineId: string; sheet: Sheet }) 
   return (
     <section aria-labelledby="line-heading" className="mt-8">
       <div className="mb-3 flex flex-wrap items-center gap-x-4 gap-y-2">
-        <Heading id="line-heading" className="text-[1.4375rem] leading-7 first-letter:uppercase">
+        <Heading id="line-heading" className="text-[1.4375rem] leading-7 font-[660] first-letter:uppercase">
           {name}
         </Heading>
         <ButtonRow className="lg:ml-auto">

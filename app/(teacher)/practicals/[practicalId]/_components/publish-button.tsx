@@ -5,6 +5,7 @@ import { useState, useTransition } from 'react';
 import { Button } from '@/components/ui/button';
 import { Dialog } from '@/components/ui/dialog';
 import { LinkButton } from '@/components/ui/link-button';
+import { PhraseText } from '@/components/ui/phrase-text';
 import { Refusal } from '@/components/ui/refusal';
 import { changesSince } from '@/lib/practicals/changes-since';
 import type { ParsedDraft } from '@/lib/practicals/parse-draft';
@@ -12,7 +13,6 @@ import { sameInEffect } from '@/lib/practicals/same-in-effect';
 import { publishVersionAction } from '../actions';
 import type { Editor } from './editor-context';
 import type { DraftDesk } from './use-draft';
-import { PhraseText } from './what-it-gives';
 
 interface PublishButtonProps {
   practicalId: string;

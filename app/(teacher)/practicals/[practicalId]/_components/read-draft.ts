@@ -1,7 +1,7 @@
 import { type Length, parseLength, TICKS_PER_INCH, TICKS_PER_MM, type Unit } from '@/lib/length';
 import type { DraftLine, DraftSizeRule, PracticalDraft } from '@/lib/practicals/draft';
 import { readSizeRule } from '@/lib/practicals/parse-size-rule';
-import { AXES, type Axis, type SizeRule } from '@/lib/scoring';
+import { AXES, type Axis } from '@/lib/scoring';
 
 /** A typed size, or null while it cannot be read as one. */
 export function readSize(text: string, unit: Unit): Length | null {
@@ -36,21 +36,4 @@ export function dearestOf(draft: PracticalDraft): number {
   );
   const rules = typed.flatMap((rule) => (rule ? (readSizeRule(rule, draft.unit) ?? []) : []));
   return Math.max(0, ...rules.map(({ beyondOver, beyondUnder }) => Math.max(beyondOver, beyondUnder)));
-}
-
-const GRADUATIONS: Record<Unit, Length[]> = {
-  in: [TICKS_PER_INCH / 32, TICKS_PER_INCH / 64, TICKS_PER_INCH / 128],
-  mm: [TICKS_PER_MM / 2, TICKS_PER_MM / 10, TICKS_PER_MM / 20],
-};
-
-/** The stretch of rule on which every edge can be seen: the coarsest graduation they all stand on, and a little more. */
-export function ruleScaleOf(rule: SizeRule, unit: Unit): { graduation: Length; span: number } {
-  const edges = [...rule.over, ...rule.under].map(({ within }) => within).filter((within) => within > 0);
-  const [coarse = 1, ...finer] = GRADUATIONS[unit];
-  const farthest = Math.max(coarse, ...edges);
-  const fits = (graduation: Length) => edges.every((edge) => edge % graduation === 0);
-  const seen = [coarse, ...finer].filter((graduation) => farthest / graduation <= 13);
-  const graduation =
-    seen.find(fits) ?? (seen.length > 0 ? coarse : Math.ceil(farthest / 8 / coarse) * coarse);
-  return { graduation, span: Math.max(6, Math.ceil(farthest / graduation) + 3) };
 }

@@ -20,7 +20,7 @@ interface SheetCellProps {
   onPaste?: (event: ClipboardEvent<HTMLInputElement>) => void;
 }
 
-const TEXT = 'px-1 pt-1 pb-1 text-lead leading-6';
+const TEXT = 'px-1 text-lead leading-6';
 
 /** A cell of the sheet: a line to write on. What was typed stays as it is; at rest a size is set as a fraction. */
 export function SheetCell(props: SheetCellProps) {
@@ -52,12 +52,12 @@ export function SheetCell(props: SheetCellProps) {
         }}
         onBlur={() => setFocused(null)}
         className={classNames(
-          'tnum block min-h-9 w-full min-w-0 border-b border-rule bg-transparent placeholder:text-label placeholder:text-ink-2',
-          'hover:border-ink focus:border-b-edge focus:border-act focus:bg-plate focus:pb-[2px]',
+          'tnum block h-9 w-full min-w-0 border-b border-rule bg-transparent py-0 placeholder:text-label placeholder:text-ink-2',
+          'hover:border-ink focus:border-b-edge focus:border-act focus:bg-plate',
           TEXT,
           strong && 'font-[640]',
           parts && 'text-transparent',
-          found && !refused && 'border-b-edge border-ink bg-plate pb-[2px]',
+          found && !refused && 'border-b-edge border-ink bg-plate',
           refused && 'border-b-outline border-refuse bg-refuse-wash',
         )}
         {...handlers}
@@ -66,7 +66,7 @@ export function SheetCell(props: SheetCellProps) {
         <span
           aria-hidden
           className={classNames(
-            'pointer-events-none absolute inset-0 truncate border-b border-transparent',
+            'pointer-events-none absolute inset-0 flex items-center overflow-hidden border-b border-transparent',
             TEXT,
             strong && 'font-[640]',
           )}

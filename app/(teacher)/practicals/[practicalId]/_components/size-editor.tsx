@@ -1,16 +1,17 @@
 'use client';
 
-import { FittedRuleFace } from '@/components/rule/fitted-rule-face';
+import { RuleFace } from '@/components/rule/rule-face';
 import { Button } from '@/components/ui/button';
 import { CheckboxField } from '@/components/ui/choice';
 import { LengthText } from '@/components/ui/fraction';
 import { Heading } from '@/components/ui/titles';
 import { readSizeRule } from '@/lib/practicals/parse-size-rule';
+import { ruleScaleOf } from '@/lib/practicals/rule-scale-of';
 import type { Axis, SizeRule } from '@/lib/scoring';
 import { BandFields } from './band-fields';
 import { lineOf, useEditor } from './editor-context';
 import { PresetKeys } from './preset-keys';
-import { marginOf, readSize, ruleScaleOf, targetOf } from './read-draft';
+import { marginOf, readSize, targetOf } from './read-draft';
 import { FindingText } from './row-notes';
 import { type SizeRuleDesk, useSizeRule } from './use-size-rule';
 
@@ -33,22 +34,24 @@ export function SizeEditor({ lineId, axis }: { lineId: string | null; axis: Axis
   return (
     <section aria-labelledby="size-heading" className="mt-8">
       <div className="mb-3 flex flex-wrap items-center gap-x-4 gap-y-2">
-        <Heading id="size-heading" className="text-[1.4375rem] leading-7 first-letter:uppercase">
+        <Heading id="size-heading" className="text-[1.4375rem] leading-7 font-[660] first-letter:uppercase">
           {name}, {size.together ? 'every size' : axis}{' '}
           {ofLine === null ? null : <LengthText ticks={ofLine} unit={unit} />}
         </Heading>
-        <Owner lineId={lineId} size={size} />
+        {lineId === null ? (
+          <CheckboxField
+            label="thickness, width and length alike"
+            className="text-label"
+            checked={size.together}
+            onChange={(event) => size.setTogether(event.target.checked)}
+          />
+        ) : (
+          <Owner size={size} />
+        )}
         <div className="lg:ml-auto">
           <PresetKeys size={size} read={read} disabled={!size.isOwn} />
         </div>
       </div>
-      {lineId === null ? (
-        <CheckboxField
-          label="one price for thickness, width and length"
-          checked={size.together}
-          onChange={(event) => size.setTogether(event.target.checked)}
-        />
-      ) : null}
       {read ? (
         <PriceOnRule rule={read} axis={axis} target={target} label={`${name}, ${axis}`} />
       ) : (
@@ -68,8 +71,7 @@ export function SizeEditor({ lineId, axis }: { lineId: string | null; axis: Axis
   );
 }
 
-function Owner({ lineId, size }: { lineId: string | null; size: SizeRuleDesk }) {
-  if (lineId === null) return null;
+function Owner({ size }: { size: SizeRuleDesk }) {
   return size.isOwn ? (
     <p className="text-label text-ink-2">
       differs from all lines{' '}
@@ -94,6 +96,7 @@ interface PriceOnRuleProps {
   label: string;
 }
 
+/** Where there is room for them, the band edges stand on the rule as knives. */
 function PriceOnRule({ rule, axis, target, label }: PriceOnRuleProps) {
   const { desk, unit } = useEditor();
   const margin = marginOf(desk.draft);
@@ -101,13 +104,22 @@ function PriceOnRule({ rule, axis, target, label }: PriceOnRuleProps) {
   const edges = (['under', 'over'] as const).flatMap((side) =>
     rule[side].filter(({ within }) => within > 0).map(({ within }) => ({ side, within })),
   );
+  const face = { unit, target, rule, margin, label, ...ruleScaleOf([rule], unit) };
   return (
-    <div>
-      <div className="flex justify-between text-label">
+    <div className="@container">
+      <div className="flex justify-between text-label @min-[920px]:-mb-5">
         <span>− under: {under}</span>
         <span>over: {over} +</span>
       </div>
-      <FittedRuleFace {...{ unit, target, rule, margin, edges, label }} {...ruleScaleOf(rule, unit)} />
+      <div className="@min-[560px]:hidden">
+        <RuleFace {...face} variant="phone" />
+      </div>
+      <div className="hidden @min-[560px]:block @min-[920px]:hidden">
+        <RuleFace {...face} variant="card" />
+      </div>
+      <div className="hidden @min-[920px]:block">
+        <RuleFace {...face} edges={edges} variant="wide" />
+      </div>
       {margin > 0 ? (
         <p className="mt-1 text-small text-ink-2">
           reading margin <LengthText ticks={margin} unit={unit} />: each price begins this far past its edge

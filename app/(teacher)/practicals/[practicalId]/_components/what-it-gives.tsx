@@ -1,10 +1,9 @@
 'use client';
 
 import { classNames } from '@/components/ui/class-names';
-import { LengthText } from '@/components/ui/fraction';
+import { PhraseText } from '@/components/ui/phrase-text';
 import { pointsAsText } from '@/components/ui/points-text';
 import { Heading } from '@/components/ui/titles';
-import type { Phrase } from '@/lib/practicals/compare-types';
 import { type ExampleAttempt, exampleAttempts, scoreExample } from '@/lib/practicals/example-attempts';
 import { scoreAttempt } from '@/lib/scoring';
 import { type Editor, useEditor } from './editor-context';
@@ -14,7 +13,7 @@ export function WhatItGives() {
   const { parsed, latest, selection } = useEditor();
   return (
     <section aria-labelledby="gives-heading">
-      <Heading id="gives-heading" className="text-[1.4375rem] leading-7">
+      <Heading id="gives-heading" className="text-[1.4375rem] leading-7 font-[660]">
         What it gives
       </Heading>
       {parsed.ok ? (
@@ -131,11 +130,5 @@ function LeavingOut({ scored }: { scored: readonly { example: ExampleAttempt; dr
     <p className="mt-2 text-label">
       Leaving a piece out gives {pointsAsText(missing)}, cutting it badly {pointsAsText(gross)}.
     </p>
-  );
-}
-
-export function PhraseText({ phrase, unit }: { phrase: Phrase; unit: 'in' | 'mm' }) {
-  return phrase.map((part) =>
-    typeof part === 'string' ? part : <LengthText key={part.ticks} ticks={part.ticks} unit={unit} />,
   );
 }

@@ -1,0 +1,26 @@
+import { notFound } from 'next/navigation';
+import type { ReactNode } from 'react';
+import { AccountMenu } from '@/app/account/_components/account-menu';
+import { DeskShell } from '@/components/shell/desk-shell';
+import { pageActor } from '@/lib/transport/page';
+
+const NAV = [
+  { href: '/department', label: 'department' },
+  { href: '/gradebook', label: 'gradebook' },
+];
+
+export default async function HeadLayout({ children }: { children: ReactNode }) {
+  const actor = await pageActor();
+  if (actor.role !== 'head') notFound();
+  const name = `${actor.givenName} ${actor.familyName}`.trim();
+  return (
+    <DeskShell
+      home="/department"
+      nav={NAV}
+      person={{ name, place: 'department head' }}
+      menu={<AccountMenu actor={actor} />}
+    >
+      {children}
+    </DeskShell>
+  );
+}
