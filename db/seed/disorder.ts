@@ -6,7 +6,7 @@ import type { CellValue } from '@/lib/sync/cells';
 import type { SeededSchool } from './people';
 import { morningOf } from './practicals';
 import type { Random } from './random';
-import { Recorder, recordPieces, type SeedEvent } from './recording';
+import { Recorder, recordFinish, recordPieces, type SeedEvent } from './recording';
 import type { SeededAttempt, SeededSitting } from './sittings';
 import { makeHand, makePieces } from './wood';
 
@@ -31,14 +31,10 @@ export async function addDisorder(
     case 'cf1 bench-hook':
       return replaceBy(events, sitting.attempts[7], (attempt) => standing(teacher(), attempt, 'zero'));
     case 'cf3 six-stick':
-      await transferIn(tx, school, sitting);
-      return redo(
-        tx,
-        random,
-        school,
-        sitting,
-        replaceBy(events, sitting.attempts[9], (attempt) => standing(teacher(), attempt, 'excused')),
-      );
+      return redo(tx, random, school, sitting, [
+        ...replaceBy(events, sitting.attempts[9], (attempt) => standing(teacher(), attempt, 'excused')),
+        ...standing(teacher(), await transferIn(tx, random, school, sitting), 'excused'),
+      ]);
     case 'cf3 desk-caddy':
       return splitAndHeld(random, sitting, caliperInMillimetres(random, sitting, events));
     case 'cf5 desk-caddy-okonjo':
@@ -92,7 +88,7 @@ function readAgain(
     const reader = { bias: 0, ...odd, instrument: 'caliper' as const, gauges: false };
     return [
       ...recordPieces(random, recorder, attempt.id, sitting.version.rubric, attempt.pieces, reader),
-      recorder.record(attempt.id, { ...ATTEMPT, what: '@finish' }, { kind: 'finish', done: true }),
+      ...recordFinish(random, recorder, attempt.id, sitting.version.rubric),
     ];
   });
 }
@@ -168,7 +164,12 @@ function twoGraders(
 }
 
 /** A student who came from another section after the sitting: excused from what they never saw. */
-async function transferIn(tx: Transaction, school: SeededSchool, sitting: SeededSitting): Promise<void> {
+async function transferIn(
+  tx: Transaction,
+  random: Random,
+  school: SeededSchool,
+  sitting: SeededSitting,
+): Promise<SeededAttempt> {
   const from = school.sections.get('cf6');
   const student = from?.students[2];
   if (!from || !student) throw new Error('nobody to transfer');
@@ -187,6 +188,13 @@ async function transferIn(tx: Transaction, school: SeededSchool, sitting: Seeded
     .insert(enrollments)
     .values({ schoolId, sectionId: sitting.section.id, studentId: student.id, joinedOn: '2026-11-02' });
   sitting.section.students.push(student);
+  const attempt = { id: random.uuid(), student, pieces: [] };
+  await tx.insert(attempts).values({
+    ...{ schoolId, id: attempt.id, sittingId: sitting.id, studentId: student.id },
+    ...{ number: 1, createdAt: morningOf('2026-11-02') },
+  });
+  sitting.attempts.push(attempt);
+  return attempt;
 }
 
 /** Two students cut again: the next attempt, better and still not perfect. */
@@ -220,7 +228,7 @@ async function redo(
     const reader = { bias: 0, instrument: 'caliper' as const, gauges: true };
     again.push(
       ...recordPieces(random, recorder, attempt.id, sitting.version.rubric, attempt.pieces, reader),
-      recorder.record(attempt.id, { ...ATTEMPT, what: '@finish' }, { kind: 'finish', done: true }),
+      ...recordFinish(random, recorder, attempt.id, sitting.version.rubric),
     );
   }
   return [...events, ...again];

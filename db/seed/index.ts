@@ -8,6 +8,7 @@ import { makeNames } from './names';
 import { type SeededSchool, seedSchool } from './people';
 import { ARDMORE, CEDAR_FORK, SITTINGS } from './plan';
 import { seedPracticals } from './practicals';
+import { seedPublication } from './publications';
 import { makeRandom, type Random } from './random';
 import { seedSitting } from './sittings';
 
@@ -45,6 +46,6 @@ export async function seedDemo(databaseUrl: string) {
 async function seedWork(tx: Transaction, random: Random, school: SeededSchool): Promise<void> {
   const versions = await seedPracticals(tx, random, school);
   for (const plan of SITTINGS.filter(({ section }) => school.sections.has(section))) {
-    await seedSitting(tx, random, school, versions, plan);
+    await seedPublication(tx, school, await seedSitting(tx, random, school, versions, plan));
   }
 }

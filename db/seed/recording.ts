@@ -150,3 +150,21 @@ function writeReading(
 function finerThan32(rubric: Rubric): boolean {
   return rubric.lines.some((line) => (line.sizes.length.over[0]?.within ?? 0) < TICKS_PER_INCH / 32);
 }
+
+/** The checks of the whole work that nobody may assume, and the mark that this student is done. */
+export function recordFinish(
+  random: Random,
+  recorder: Recorder,
+  attemptId: string,
+  rubric: Rubric,
+): SeedEvent[] {
+  const cell = (what: string): Cell => ({ lineId: '', ordinal: 0, what });
+  const checks = rubric.workChecks.filter((check) => check.assume === null);
+  return [
+    ...checks.map((check) => {
+      const level = random.chance(0.1) ? check.levels.length - 1 : 0;
+      return recorder.record(attemptId, cell(check.id), { kind: 'level', level });
+    }),
+    recorder.record(attemptId, cell('@finish'), { kind: 'finish', done: true }),
+  ];
+}

@@ -7,7 +7,7 @@ import type { SeededSchool, SeededSection, SeededStudent } from './people';
 import { ROOMS, type SittingPlan } from './plan';
 import { morningOf, type SeededVersion } from './practicals';
 import type { Random } from './random';
-import { Recorder, recordPieces, type SeedEvent } from './recording';
+import { Recorder, recordFinish, recordPieces, type SeedEvent } from './recording';
 import { type MadePiece, makeHand, makePieces, stepOf } from './wood';
 
 export interface SeededAttempt {
@@ -85,21 +85,7 @@ function recordSitting(random: Random, sitting: SeededSitting, graderBias: numbe
     const reader = { bias, instrument, gauges: true };
     return [
       ...recordPieces(random, recorder, attempt.id, rubric, attempt.pieces, reader),
-      ...rubric.workChecks
-        .filter((check) => check.assume === null)
-        .map((check) => {
-          const level = random.chance(0.1) ? check.levels.length - 1 : 0;
-          return recorder.record(
-            attempt.id,
-            { lineId: '', ordinal: 0, what: check.id },
-            { kind: 'level', level },
-          );
-        }),
-      recorder.record(
-        attempt.id,
-        { lineId: '', ordinal: 0, what: '@finish' },
-        { kind: 'finish', done: true },
-      ),
+      ...recordFinish(random, recorder, attempt.id, rubric),
     ];
   });
 }
