@@ -1,7 +1,8 @@
 import 'server-only';
 import type { z } from 'zod';
-import { insertTerm, isTermNameTaken, selectDepartment, selectTerm } from '@/db/queries/school';
+import { selectDepartment } from '@/db/queries/departments';
 import { insertSection } from '@/db/queries/sections';
+import { insertTerm, isTermNameTaken, selectTerm } from '@/db/queries/terms';
 import { createSectionInput, NEW_TERM } from '@/lib/contracts/sections';
 import { type Context, defineVerb } from '../verb';
 

@@ -1,7 +1,8 @@
 import 'server-only';
 import { z } from 'zod';
-import { selectSchool, selectTerms } from '@/db/queries/school';
+import { selectSchool } from '@/db/queries/school';
 import { selectTeachingDepartments } from '@/db/queries/sections';
+import { selectTerms } from '@/db/queries/terms';
 import { proposeTerm } from '@/lib/contracts/school';
 import { defineVerb } from '../verb';
 
