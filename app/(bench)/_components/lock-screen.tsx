@@ -25,6 +25,7 @@ export function LockScreen({ lock, choosing, onLock, onCancel }: LockScreenProps
 
   async function enter() {
     setPin('');
+    if (Date.now() < lock.waitUntil) return;
     if (pin.length < SHORTEST_PIN) return setTold(`A PIN has ${SHORTEST_PIN} to ${LONGEST_PIN} digits.`);
     setBusy(true);
     try {
@@ -157,12 +158,16 @@ function useDeafToInstruments(): void {
   }, []);
 }
 
+/** Counted by a timer of its own; a moment that has passed is 0. */
 function useSecondsUntil(time: number): number {
-  const [now, setNow] = useState(() => Date.now());
+  const [seconds, setSeconds] = useState(0);
   useEffect(() => {
-    if (time <= Date.now()) return;
-    const timer = setInterval(() => setNow(Date.now()), 250);
+    const left = () => Math.max(0, Math.ceil((time - Date.now()) / 1000));
+    const timer = setInterval(() => {
+      setSeconds(left());
+      if (left() === 0) clearInterval(timer);
+    }, 200);
     return () => clearInterval(timer);
   }, [time]);
-  return Math.max(0, Math.ceil((time - now) / 1000));
+  return seconds;
 }

@@ -38,7 +38,7 @@ export async function tryPin(lock: Lock, pin: string, now: number): Promise<Lock
   const wrong = lock.wrong + 1;
   const waits = wrong - FREE_TRIES;
   const wait = waits <= 0 ? 0 : Math.min(LONGEST_WAIT_MS, FIRST_WAIT_MS * 2 ** (waits - 1));
-  return { ...lock, wrong, waitUntil: now + wait };
+  return { ...lock, wrong, waitUntil: wait === 0 ? 0 : now + wait };
 }
 
 async function hashPin(pin: string, salt: string): Promise<string> {
