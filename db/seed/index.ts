@@ -46,6 +46,6 @@ export async function seedDemo(databaseUrl: string) {
 async function seedWork(tx: Transaction, random: Random, school: SeededSchool): Promise<void> {
   const versions = await seedPracticals(tx, random, school);
   for (const plan of SITTINGS.filter(({ section }) => school.sections.has(section))) {
-    await seedPublication(tx, school, await seedSitting(tx, random, school, versions, plan));
+    await seedPublication(tx, random, school, await seedSitting(tx, random, school, versions, plan));
   }
 }

@@ -3,11 +3,13 @@ import { insertPublication, insertResults, selectSitting, updateSitting } from '
 import { asTold, gatherResults, judgeAll } from '@/lib/data/sittings/gather-results';
 import type { SeededSchool } from './people';
 import { morningOf } from './practicals';
+import type { Random } from './random';
 import type { SeededSitting } from './sittings';
 
 /** Publishes a sitting as its teacher did, on the evening of the day after. */
 export async function seedPublication(
   tx: Transaction,
+  random: Random,
   school: SeededSchool,
   sitting: SeededSitting,
 ): Promise<void> {
@@ -17,7 +19,13 @@ export async function seedPublication(
   if (!row) throw new Error('this sitting is not there');
   const results = judgeAll(await gatherResults(tx, row), false);
   const publicationId = await insertPublication(tx, {
-    ...{ schoolId, sittingId: sitting.id, number: 1, rubricVersionId: row.rubricVersionId },
+    ...{
+      schoolId,
+      id: random.uuid(),
+      sittingId: sitting.id,
+      number: 1,
+      rubricVersionId: row.rubricVersionId,
+    },
     publishedBy: sitting.section.teacherId,
     publishedAt: new Date(morningOf(sitting.plan.day).getTime() + 32 * 3_600_000),
   });
