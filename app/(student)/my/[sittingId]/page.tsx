@@ -28,7 +28,7 @@ export default async function TaskPage({ params }: PageProps<'/my/[sittingId]'>)
   return (
     <>
       <TaskHead {...view} title={task.title} dueOn={stage === 'to do' ? view.dueOn : null} />
-      <div className="mt-4 grid gap-8 pb-8">
+      <div className="mt-4 grid grid-cols-[minmax(0,1fr)] gap-8 pb-8">
         <SizeChooser rubric={rubric} lineNotes={task.lineNotes} />
         <StockOfTask task={task} />
         <CautionsList />

@@ -15,7 +15,7 @@ interface LineRowProps {
 export function LineRow({ rubric, chosen, onChoose }: LineRowProps) {
   const scale = pieceScale(
     rubric.lines.map(({ target }) => target),
-    { height: 84, columnWidth: 56 },
+    { height: 84, columnWidth: 44 },
   );
   return (
     <ScrollRegion>
@@ -27,7 +27,7 @@ export function LineRow({ rubric, chosen, onChoose }: LineRowProps) {
             type="button"
             aria-pressed={line.id === chosen}
             onClick={() => onChoose(line.id)}
-            className="group flex min-w-16 flex-1 touch-manipulation flex-col items-stretch justify-end select-none focus-visible:relative focus-visible:z-1"
+            className="group flex min-w-12 flex-1 touch-manipulation flex-col items-stretch justify-end select-none focus-visible:relative focus-visible:z-1"
           >
             <span className="flex justify-center border-b-outline border-ink px-1">
               <PieceFace

@@ -1,0 +1,36 @@
+'use client';
+
+import { useSyncExternalStore } from 'react';
+import { TaskHead } from '@/app/(student)/my/_components/task-head';
+import { EmptyState } from '@/components/ui/empty-state';
+import type { OwnTaskView } from '@/lib/data/own/read-task';
+import type { OwnSession } from '@/lib/sync/client/own-session';
+import { KeptLine } from './kept-line';
+import { LockedSheet } from './locked-sheet';
+import { MeasureBoard } from './measure-board';
+
+/** Measuring until the lock; after it the receipt and the predicted score. */
+export function MeasureSheet({ session, task }: { session: OwnSession; task: OwnTaskView }) {
+  const view = useSyncExternalStore(session.subscribe, session.getView, session.getView);
+  const { lock } = view.record.derived;
+  const over = task.stage === 'published' || task.stage === 'closed';
+  if (!lock && !over) return <MeasureBoard session={session} view={view} task={task} />;
+  return (
+    <>
+      <TaskHead {...task} stage={over ? task.stage : 'locked'} title={task.task.title} />
+      <KeptLine view={view} session={session} />
+      {lock ? (
+        <LockedSheet
+          lock={lock}
+          record={view.record}
+          rubric={task.rubric}
+          sent={view.counts.sent === view.counts.kept}
+        />
+      ) : (
+        <EmptyState title="Own readings are closed">
+          The results are out, and you had not locked your readings by then. What you recorded is kept.
+        </EmptyState>
+      )}
+    </>
+  );
+}
