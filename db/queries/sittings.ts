@@ -40,6 +40,7 @@ export async function selectSitting(tx: Transaction, schoolId: string, sittingId
       departmentId: sections.departmentId,
       termName: terms.name,
       timeZone: schools.timeZone,
+      today: sql<string>`${schoolToday}::text`,
       title: practicals.title,
       versionNumber: rubricVersions.number,
       form: rubricVersions.form,

@@ -22,16 +22,16 @@ export const changeDueInput = z.object({
 
 export const STANDINGS = ['expected', 'absent', 'excused', 'zero'] as const;
 
-export const changeStandingInput = z.object({
+export const changeAttemptInput = z.object({
   sittingId: id,
   attemptId: z.uuid(),
-  standing: z.enum(STANDINGS, 'Choose what holds for this student.'),
-});
-
-export const changeDaysLateInput = z.object({
-  sittingId: id,
-  attemptId: z.uuid(),
-  days: z.coerce.number('Type a whole number of days.').int('Type a whole number of days.').min(0).max(365),
+  standing: z.enum(STANDINGS, 'Choose what holds for this student.').optional(),
+  days: z.coerce
+    .number('Type a whole number of days.')
+    .int('Type a whole number of days.')
+    .min(0, 'Type 0 or more days.')
+    .max(365, 'Type at most 365 days.')
+    .optional(),
 });
 
 export const startRedoInput = z.object({ sittingId: id, studentId: z.uuid() });

@@ -43,6 +43,8 @@ export interface SittingView {
   published: boolean;
   publications: { number: number; publishedAt: string }[];
   students: SittingStudentView[];
+  today: string;
+  timeZone: string;
   /** Readings that a tablet has numbered and that have not arrived, by whose tablet it is. */
   notArrived: { name: string; readings: number }[];
 }
@@ -82,6 +84,8 @@ export const readSitting = defineVerb({
         publishedAt: publishedAt.toISOString(),
       })),
       students: shown.map((row, index) => asStudent(row, shown[index + 1])),
+      today: sitting.today,
+      timeZone: sitting.timeZone,
       notArrived: byName(missing),
     };
   },

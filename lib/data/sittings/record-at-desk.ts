@@ -11,8 +11,7 @@ import { asCellEvent } from '@/lib/sync/server/stored-event';
 import { rebuildSheets } from '../rounds/rebuild-sheets';
 import { deskDeviceId } from './desk-device';
 
-interface DeskEntry {
-  attemptId: string;
+export interface DeskEntry {
   what: '@standing' | '@days-late';
   value: CellValue;
   /** What an untouched cell stands for: to record that again changes nothing. */
@@ -20,44 +19,48 @@ interface DeskEntry {
 }
 
 /**
- * Appends what a teacher decides at the desk as the bench would: an event that replaces every head of its cell, with
- * the sheets rebuilt in the same transaction. Null when there is no such attempt; `changed` is false when the cell
- * already says this. `studentId` tells whom it is about.
+ * Appends what a teacher decides at the desk as the bench would: events that each replace every head of their cell,
+ * with the sheets rebuilt in the same transaction. Null when there is no such attempt; `changed` is false when the
+ * cells already say all of it. `studentId` tells whom it is about.
  */
 export async function recordAtDesk(
   tx: Transaction,
   actor: Actor,
   sitting: SittingRow,
-  entry: DeskEntry,
+  attemptId: string,
+  entries: readonly DeskEntry[],
 ): Promise<{ studentId: string; changed: boolean } | null> {
   const { schoolId, personId } = actor;
-  const { attemptId, value } = entry;
   const [attempt] = await lockAttempts(tx, schoolId, sitting.sittingId, [attemptId]);
   if (!attempt) return null;
-  const cell = { lineId: '', ordinal: 0, what: entry.what };
-  const events = (await selectEventsOf(tx, schoolId, [attemptId])).map(asCellEvent);
-  const state = deriveCells(events, 'bench').get(cellKey(cell));
-  const now = state ? state.value : entry.untouched;
-  if (now !== null && valueKey(now) === valueKey(value))
-    return { studentId: attempt.studentId, changed: false };
+  const { studentId } = attempt;
+  const cells = deriveCells((await selectEventsOf(tx, schoolId, [attemptId])).map(asCellEvent), 'bench');
+  const news = entries.flatMap(({ what, value, untouched }) => {
+    const cell = { lineId: '', ordinal: 0, what };
+    const state = cells.get(cellKey(cell));
+    const now = state ? state.value : untouched;
+    if (now !== null && valueKey(now) === valueKey(value)) return [];
+    return [{ ...cell, value, supersedes: state?.heads.map(({ id }) => id) ?? [] }];
+  });
+  if (news.length === 0) return { studentId, changed: false };
   const deviceId = deskDeviceId(schoolId, personId);
-  await insertEvents(tx, [
-    {
+  const first = await nextSequence(tx, schoolId, deviceId);
+  await insertEvents(
+    tx,
+    news.map((event, index) => ({
       schoolId,
       id: randomUUID(),
       sittingId: sitting.sittingId,
       attemptId,
-      side: 'bench',
-      ...cell,
-      value,
-      supersedes: state?.heads.map(({ id }) => id) ?? [],
+      side: 'bench' as const,
+      ...event,
       deviceId,
-      sequence: await nextSequence(tx, schoolId, deviceId),
+      sequence: first + index,
       capturedAt: new Date(),
       authorId: personId,
       senderId: personId,
-    },
-  ]);
+    })),
+  );
   await rebuildSheets(tx, schoolId, [attemptId]);
-  return { studentId: attempt.studentId, changed: true };
+  return { studentId, changed: true };
 }

@@ -7,7 +7,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { exportGrades, exportSizes } from '@/lib/data/gradebook/export-files';
 import { readGradebook } from '@/lib/data/gradebook/read-gradebook';
 import { sendAgain } from '@/lib/data/gradebook/send-again';
-import { changeStanding } from '@/lib/data/sittings/change-standing';
+import { changeAttempt } from '@/lib/data/sittings/change-attempt';
 import { previewPublication } from '@/lib/data/sittings/preview-publication';
 import { publishSitting } from '@/lib/data/sittings/publish-sitting';
 import { scoreAttempt } from '@/lib/scoring';
@@ -61,7 +61,7 @@ async function publishedClass(): Promise<RoundStage> {
   await makeAttempt(school, sittingId, personId);
   await lockPrediction(students[0], sittingId, attempts[0], practical.rubric, SHORT);
   await markPieces(teacher, sittingId, attempts[0], practical.rubric, SHORT);
-  await changeStanding(teacher, { sittingId, attemptId: attempts[1], standing: 'absent' });
+  await changeAttempt(teacher, { sittingId, attemptId: attempts[1], standing: 'absent' });
   value(await publish(stage));
   return stage;
 }
@@ -158,7 +158,7 @@ describe('exportGrades', () => {
     await markPieces(teacher, sittingId, attempts[0], practical.rubric);
     value(await publish(stage));
     const before = value(await exportGrades(teacher, { sectionId })).text;
-    await changeStanding(teacher, { sittingId, attemptId: attempts[0], standing: 'zero' });
+    await changeAttempt(teacher, { sittingId, attemptId: attempts[0], standing: 'zero' });
     expect(value(await exportGrades(teacher, { sectionId })).text).toBe(before);
     value(await publish(stage));
     expect(table(value(await exportGrades(teacher, { sectionId })).text)[0]).toMatchObject({

@@ -3,7 +3,7 @@ import type { Actor } from '@/lib/auth/actor';
 import { explanationSchema, gradebookSchema } from '@/lib/contracts/gradebook';
 import { explainCell } from '@/lib/data/gradebook/explain-cell';
 import { readGradebook } from '@/lib/data/gradebook/read-gradebook';
-import { changeStanding } from '@/lib/data/sittings/change-standing';
+import { changeAttempt } from '@/lib/data/sittings/change-attempt';
 import { previewPublication } from '@/lib/data/sittings/preview-publication';
 import { publishSitting } from '@/lib/data/sittings/publish-sitting';
 import { startRedo } from '@/lib/data/sittings/start-redo';
@@ -59,7 +59,7 @@ describe('readGradebook', () => {
     const round = await stageRound();
     const { teacher, sittingId, attempts, practical } = round;
     await markPieces(teacher, sittingId, attempts[0], practical.rubric, SHORT);
-    await changeStanding(teacher, { sittingId, attemptId: attempts[1], standing: 'zero' });
+    await changeAttempt(teacher, { sittingId, attemptId: attempts[1], standing: 'zero' });
     await publish(round);
     const book = await bookOf(round);
     expect(
@@ -69,7 +69,7 @@ describe('readGradebook', () => {
       ['zero', 0, true, 0],
     ]);
     expect(book.sittings[0]?.publication).toMatchObject({ number: 1, changedSince: 0 });
-    await changeStanding(teacher, { sittingId, attemptId: attempts[1], standing: 'excused' });
+    await changeAttempt(teacher, { sittingId, attemptId: attempts[1], standing: 'excused' });
     const after = await bookOf(round);
     expect(after.students[1]?.cells[0]).toMatchObject({ status: 'zero', score: 0, changed: true });
     expect(after.sittings[0]?.publication).toMatchObject({ number: 1, changedSince: 1 });

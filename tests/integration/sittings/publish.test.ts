@@ -1,7 +1,7 @@
 import { beforeAll, describe, expect, it } from 'vitest';
 import type { Actor } from '@/lib/auth/actor';
 import { readResult } from '@/lib/data/own/read-result';
-import { changeStanding } from '@/lib/data/sittings/change-standing';
+import { changeAttempt } from '@/lib/data/sittings/change-attempt';
 import { previewPublication } from '@/lib/data/sittings/preview-publication';
 import { publishSitting } from '@/lib/data/sittings/publish-sitting';
 import { scoreAttempt } from '@/lib/scoring';
@@ -81,8 +81,8 @@ describe('publishSitting', () => {
       conflicts: [],
       changed: null,
     });
-    await changeStanding(teacher, { sittingId, attemptId: attempts[0], standing: 'zero' });
-    await changeStanding(teacher, { sittingId, attemptId: attempts[1], standing: 'absent' });
+    await changeAttempt(teacher, { sittingId, attemptId: attempts[0], standing: 'zero' });
+    await changeAttempt(teacher, { sittingId, attemptId: attempts[1], standing: 'absent' });
     expect(value(await previewPublication(teacher, { sittingId }))).toMatchObject({
       zero: 1,
       absent: [{ givenName: 'Ben' }],
@@ -110,8 +110,8 @@ describe('publishSitting', () => {
 
   it('gives a zero as the number 0, and absent and excused without one', async () => {
     const { teacher, sittingId, attempts, students } = await stageRound();
-    await changeStanding(teacher, { sittingId, attemptId: attempts[0], standing: 'zero' });
-    await changeStanding(teacher, { sittingId, attemptId: attempts[1], standing: 'excused' });
+    await changeAttempt(teacher, { sittingId, attemptId: attempts[0], standing: 'zero' });
+    await changeAttempt(teacher, { sittingId, attemptId: attempts[1], standing: 'excused' });
     value(await publish(teacher, sittingId));
     expect(value(await readResult(students[0], { sittingId }))).toMatchObject({ status: 'zero', score: 0 });
     expect(value(await readResult(students[1], { sittingId }))).toMatchObject({
@@ -204,7 +204,7 @@ describe('publishSitting', () => {
   it('sends back whoever looked before something changed', async () => {
     const { teacher, sittingId, attempts } = await readClass();
     const { seen } = value(await previewPublication(teacher, { sittingId }));
-    await changeStanding(teacher, { sittingId, attemptId: attempts[1], standing: 'absent' });
+    await changeAttempt(teacher, { sittingId, attemptId: attempts[1], standing: 'absent' });
     expect(code(await publishSitting(teacher, { sittingId, withoutUnread: false, seen }))).toBe('stale');
     expect(fieldsOf(await publishSitting(teacher, { sittingId, withoutUnread: false, seen: 'x' }))).toEqual([
       'seen',

@@ -1,8 +1,7 @@
 import { beforeAll, describe, expect, it } from 'vitest';
 import type { Actor } from '@/lib/auth/actor';
-import { changeDaysLate } from '@/lib/data/sittings/change-days-late';
+import { changeAttempt } from '@/lib/data/sittings/change-attempt';
 import { changeDue } from '@/lib/data/sittings/change-due';
-import { changeStanding } from '@/lib/data/sittings/change-standing';
 import { listSittings } from '@/lib/data/sittings/list-sittings';
 import { openSitting } from '@/lib/data/sittings/open-sitting';
 import { readOpenChoices } from '@/lib/data/sittings/read-open-choices';
@@ -147,14 +146,14 @@ describe('readSitting', () => {
   });
 });
 
-describe('changeStanding and changeDaysLate', () => {
-  it('keep an event like the bench’s own, that replaces the one before', async () => {
+describe('changeAttempt', () => {
+  it('keeps events like the bench’s own, each replacing the one before', async () => {
     const { teacher, sittingId, attempts, school } = await stageRound();
     const at = { sittingId, attemptId: attempts[0] };
-    expect(value(await changeStanding(teacher, { ...at, standing: 'absent' }))).toEqual({ changed: true });
-    expect(value(await changeStanding(teacher, { ...at, standing: 'absent' }))).toEqual({ changed: false });
-    expect(value(await changeStanding(teacher, { ...at, standing: 'excused' }))).toEqual({ changed: true });
-    expect(value(await changeDaysLate(teacher, { ...at, days: '2' }))).toEqual({ changed: true });
+    expect(value(await changeAttempt(teacher, { ...at, standing: 'absent' }))).toEqual({ changed: true });
+    expect(value(await changeAttempt(teacher, { ...at, standing: 'absent' }))).toEqual({ changed: false });
+    expect(value(await changeAttempt(teacher, { ...at, standing: 'excused' }))).toEqual({ changed: true });
+    expect(value(await changeAttempt(teacher, { ...at, days: '2' }))).toEqual({ changed: true });
     expect(value(await readSitting(teacher, { sittingId })).students[0]).toMatchObject({
       standing: 'excused',
       daysLate: 2,
@@ -171,7 +170,7 @@ describe('changeStanding and changeDaysLate', () => {
     expect((await logOf(school)).filter(({ action }) => action === 'sitting.change')).toHaveLength(3);
   });
 
-  it('settle two standings that stand against each other', async () => {
+  it('settles two standings that stand against each other', async () => {
     const { teacher, aide, sittingId, attempts } = await stageRound();
     const cell = { lineId: '', ordinal: 0, what: '@standing' };
     const plain = { cell, typed: null, unit: null, instrument: null };
@@ -182,30 +181,28 @@ describe('changeStanding and changeDaysLate', () => {
       eventOf(aide, attempts[0], { ...plain, value: { kind: 'standing', standing: 'expected' } }),
     ]);
     expect(value(await readSitting(teacher, { sittingId })).students[0]?.conflicts).toBe(1);
-    value(await changeStanding(teacher, { sittingId, attemptId: attempts[0], standing: 'absent' }));
+    value(await changeAttempt(teacher, { sittingId, attemptId: attempts[0], standing: 'absent' }));
     expect(value(await readSitting(teacher, { sittingId })).students[0]).toMatchObject({
       standing: 'absent',
       conflicts: 0,
     });
   });
 
-  it('refuse what is none, other people, and attempts of another sitting', async () => {
+  it('refuses what is none, other people, and attempts of another sitting', async () => {
     const { sittingId, attempts, teacher, aide } = stage;
     const at = { sittingId, attemptId: attempts[0] };
     const other = await stageRound();
-    expect(fieldsOf(await changeStanding(teacher, { ...at, standing: 'ill' }))).toEqual(['standing']);
-    expect(fieldsOf(await changeDaysLate(teacher, { ...at, days: '-1' }))).toEqual(['days']);
+    expect(fieldsOf(await changeAttempt(teacher, { ...at, standing: 'ill' }))).toEqual(['standing']);
+    expect(fieldsOf(await changeAttempt(teacher, { ...at, days: '-1' }))).toEqual(['days']);
     expect(
-      code(await changeStanding(teacher, { sittingId, attemptId: other.attempts[0], standing: 'zero' })),
+      code(await changeAttempt(teacher, { sittingId, attemptId: other.attempts[0], standing: 'zero' })),
     ).toBe('not_found');
-    for (const verb of [changeStanding, changeDaysLate]) {
-      expect(code(await verb(stranger, { ...at, standing: 'zero', days: 1 }))).toBe('not_found');
-      expect(code(await verb(aide, { ...at, standing: 'zero', days: 1 }))).toBe('forbidden');
-      expect(code(await verb(head, { ...at, standing: 'zero', days: 1 }))).toBe('forbidden');
-      expect(await whileLogFails(() => verb(teacher, { ...at, standing: 'zero', days: 1 }))).toBeInstanceOf(
-        Error,
-      );
-    }
+    expect(code(await changeAttempt(stranger, { ...at, standing: 'zero', days: 1 }))).toBe('not_found');
+    expect(code(await changeAttempt(aide, { ...at, standing: 'zero', days: 1 }))).toBe('forbidden');
+    expect(code(await changeAttempt(head, { ...at, standing: 'zero', days: 1 }))).toBe('forbidden');
+    expect(
+      await whileLogFails(() => changeAttempt(teacher, { ...at, standing: 'zero', days: 1 })),
+    ).toBeInstanceOf(Error);
     expect(await storedEvents(attempts[0])).toEqual([]);
     expect(value(await readSitting(teacher, { sittingId })).students[0]).toMatchObject({
       standing: 'expected',
