@@ -51,14 +51,17 @@ export function BandField({ size, suffix, label, showLabel, isLength, placeholde
           }}
           onBlur={() => setFocused(null)}
           className={classNames(
-            'tnum block min-h-9 w-full min-w-0 border-b border-rule bg-plate px-2 pt-1 pb-1 text-lead placeholder:text-label placeholder:text-ink-2',
-            'hover:border-ink focus:border-b-edge focus:border-act focus:pb-[2px]',
+            'tnum block h-9 w-full min-w-0 border-b border-rule bg-plate px-2 py-0 text-lead leading-6 placeholder:text-label placeholder:text-ink-2',
+            'hover:border-ink focus:border-b-edge focus:border-act',
             parts && 'text-transparent',
             errors.length > 0 && 'border-b-outline border-refuse bg-refuse-wash',
           )}
         />
         {parts ? (
-          <span aria-hidden className="pointer-events-none absolute inset-0 px-2 pt-1.5 text-lead leading-6">
+          <span
+            aria-hidden
+            className="pointer-events-none absolute inset-0 flex items-center border-b border-transparent px-2 text-lead leading-none"
+          >
             <Fraction parts={parts} />
           </span>
         ) : null}

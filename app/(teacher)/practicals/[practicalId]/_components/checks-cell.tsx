@@ -22,7 +22,7 @@ export function ChecksCell({ lineId, checks }: { lineId: string | null; checks: 
       aria-label={`checks, ${name}: ${text}`}
       onClick={() => select({ kind: 'checks', lineId })}
       className={classNames(
-        'block h-9 w-full truncate border-b border-transparent px-1 text-left leading-6 hover:border-ink',
+        'block min-h-9 w-full border-b border-transparent px-1 text-left leading-6 hover:border-ink lg:h-9 lg:truncate',
         checks === null ? 'text-label text-ink-2' : 'narrow border-rule text-text',
         selected && 'border-b-edge border-act bg-plate',
       )}

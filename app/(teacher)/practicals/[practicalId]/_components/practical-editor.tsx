@@ -67,7 +67,7 @@ export function PracticalEditor({ view }: { view: PracticalView }) {
           </>
         }
         aside={
-          <div className="grid gap-8">
+          <div className="grid content-start gap-8 md:grid-cols-[minmax(0,26rem)_minmax(0,20rem)] xl:grid-cols-1">
             <WhatItGives />
             <AsideNotes view={view} />
           </div>

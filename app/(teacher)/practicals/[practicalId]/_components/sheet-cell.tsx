@@ -20,8 +20,6 @@ interface SheetCellProps {
   onPaste?: (event: ClipboardEvent<HTMLInputElement>) => void;
 }
 
-const TEXT = 'px-1 text-lead leading-6';
-
 /** A cell of the sheet: a line to write on. What was typed stays as it is; at rest a size is set as a fraction. */
 export function SheetCell(props: SheetCellProps) {
   const { path, label, isLength = false, placeholder, strong, className, ...handlers } = props;
@@ -54,7 +52,7 @@ export function SheetCell(props: SheetCellProps) {
         className={classNames(
           'tnum block h-9 w-full min-w-0 border-b border-rule bg-transparent py-0 placeholder:text-label placeholder:text-ink-2',
           'hover:border-ink focus:border-b-edge focus:border-act focus:bg-plate',
-          TEXT,
+          'px-1 text-lead leading-6',
           strong && 'font-[640]',
           parts && 'text-transparent',
           found && !refused && 'border-b-edge border-ink bg-plate',
@@ -67,7 +65,7 @@ export function SheetCell(props: SheetCellProps) {
           aria-hidden
           className={classNames(
             'pointer-events-none absolute inset-0 flex items-center overflow-hidden border-b border-transparent',
-            TEXT,
+            'px-1 text-lead leading-6',
             strong && 'font-[640]',
           )}
         >

@@ -96,6 +96,11 @@ interface PriceOnRuleProps {
   label: string;
 }
 
+/** Every second graduation is numbered on a phone; an odd span keeps the outermost number off the paper's edge. */
+function oddSpan(span: number): number {
+  return span % 2 === 0 ? span - 1 : span;
+}
+
 /** Where there is room for them, the band edges stand on the rule as knives. */
 function PriceOnRule({ rule, axis, target, label }: PriceOnRuleProps) {
   const { desk, unit } = useEditor();
@@ -112,7 +117,7 @@ function PriceOnRule({ rule, axis, target, label }: PriceOnRuleProps) {
         <span>over: {over} +</span>
       </div>
       <div className="@min-[560px]:hidden">
-        <RuleFace {...face} variant="phone" />
+        <RuleFace {...face} span={oddSpan(face.span)} variant="phone" />
       </div>
       <div className="hidden @min-[560px]:block @min-[920px]:hidden">
         <RuleFace {...face} variant="card" />
