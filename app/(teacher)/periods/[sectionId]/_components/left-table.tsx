@@ -1,0 +1,44 @@
+import Link from 'next/link';
+import { Cell, HeadCell, RowHead, Table, TableBody, TableHead } from '@/components/table/table';
+import type { RosterStudentView, RosterView } from '@/lib/data/sections/read-roster';
+import { sayName, saySection, sayShortDay } from '../../_components/words';
+
+interface LeftTableProps {
+  section: RosterView;
+  students: readonly RosterStudentView[];
+}
+
+/** Who was in the section, folded away; what they made is kept, and they can be brought back. */
+export function LeftTable({ section, students }: LeftTableProps) {
+  return (
+    <details className="mt-6">
+      <summary className="inline-flex min-h-11 items-center gap-2 font-[620]">
+        {students.length === 1 ? 'one has left' : `${students.length} have left`}
+      </summary>
+      <Table caption={`who has left ${saySection(section)}, by name`} className="max-w-[58rem]">
+        <TableHead>
+          <tr>
+            <HeadCell>student</HeadCell>
+            <HeadCell>ID</HeadCell>
+            <HeadCell>since</HeadCell>
+            <HeadCell>left</HeadCell>
+          </tr>
+        </TableHead>
+        <TableBody>
+          {students.map((student) => (
+            <tr key={student.studentId}>
+              <RowHead>
+                <Link className="link" href={`/periods/${section.sectionId}/students/${student.studentId}`}>
+                  {sayName(student)}
+                </Link>
+              </RowHead>
+              <Cell>{student.localId}</Cell>
+              <Cell>{sayShortDay(student.joinedOn, section.today)}</Cell>
+              <Cell>{student.leftOn ? sayShortDay(student.leftOn, section.today) : 'the school'}</Cell>
+            </tr>
+          ))}
+        </TableBody>
+      </Table>
+    </details>
+  );
+}
