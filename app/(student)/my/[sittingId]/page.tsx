@@ -1,5 +1,5 @@
 import type { Metadata } from 'next';
-import { PhoneActions } from '@/components/shell/phone-shell';
+import { PhoneActions } from '@/components/shell/phone-actions';
 import { LinkButton } from '@/components/ui/link-button';
 import type { TaskStage } from '@/lib/data/own/list-tasks';
 import { readTask } from '@/lib/data/own/read-task';

@@ -2,7 +2,7 @@
 
 import Link from 'next/link';
 import { PartDrawing } from '@/components/part/part-drawing';
-import { PhoneActions } from '@/components/shell/phone-shell';
+import { PhoneActions } from '@/components/shell/phone-actions';
 import type { OwnTaskView } from '@/lib/data/own/read-task';
 import { listOpen } from '@/lib/practicals/own-record';
 import type { OwnSession, OwnView } from '@/lib/sync/client/own-session';
