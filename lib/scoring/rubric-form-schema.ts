@@ -1,6 +1,7 @@
 import { z } from 'zod';
+import { recordById } from './record-by-id-schema';
 import { PRESET_IDS } from './rubric-form';
-import { idSchema, lineSchema, rubricSchema, sizeRuleSchema } from './schemas';
+import { lineSchema, rubricSchema, sizeRuleSchema } from './schemas';
 
 const { floor, roundTo, readTo, margin, grossLimit, ceiling, late, unit, basis, start, outOf, workChecks } =
   rubricSchema.shape;
@@ -74,7 +75,7 @@ export const rubricFormSchema = z
     ceiling,
     presets: z.array(z.enum(PRESET_IDS)),
     defaults: lineDefaultsSchema,
-    exceptions: z.record(idSchema, lineExceptionSchema),
+    exceptions: recordById(lineExceptionSchema),
     workChecks,
     policies: z.strictObject({ late, redo: redoPolicySchema, prediction: predictionPolicySchema }),
   })

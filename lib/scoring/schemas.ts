@@ -1,7 +1,9 @@
 import { z } from 'zod';
 import { MAX_LENGTH } from '@/lib/length';
+import { idSchema, recordById } from './record-by-id-schema';
 
-const ID = /^[a-z0-9][a-z0-9_-]{0,63}$/;
+export { idSchema };
+
 const NOT_A_CHECK = ['thickness', 'width', 'length', 'piece', 'held'];
 const MOST_POINTS = 100_000;
 const MOST_TOTAL = 1_000_000;
@@ -30,9 +32,6 @@ const positiveLength = wholeLength.min(1, 'a length is more than 0');
 const points = whole('an amount of points, in hundredths,', 0, MOST_POINTS);
 const totalPoints = whole('a total, in hundredths of a point,', 0, MOST_TOTAL);
 const percent = (what: string) => whole(what, 0, 100);
-
-const notAnId = 'an id has 1 to 64 small letters, digits, - or _, and begins with a letter or a digit';
-export const idSchema = z.string().regex(ID, notAnId);
 
 /** The first value that stands in the list twice. */
 function findRepeated(values: readonly string[]): string | undefined {
@@ -160,21 +159,6 @@ export const rubricSchema = z
     path: ['start'],
     message: 'a starting score is given when the basis is start, and only then',
   });
-
-/** A record by id. Zod passes over a key named __proto__; here it is an unknown key like any other. */
-function recordById<Value extends z.ZodType>(value: Value) {
-  return z
-    .unknown()
-    .refine((input) => typeof input !== 'object' || input === null || !Object.hasOwn(input, '__proto__'), {
-      message: 'unknown key __proto__',
-      abort: true,
-    })
-    .pipe(
-      z.record(idSchema, value, {
-        error: ({ code }) => (code === 'invalid_key' ? `unknown key: ${notAnId}` : undefined),
-      }),
-    );
-}
 
 const levelsSchema = recordById(whole('a level', 0, 9));
 

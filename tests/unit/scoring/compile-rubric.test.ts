@@ -200,3 +200,29 @@ describe('a compiled rubric', () => {
     expect(one).toEqual(other);
   });
 });
+
+describe('a form that comes from outside', () => {
+  const parse = (json: string) =>
+    rubricFormSchema.safeParse(JSON.parse(json)).error?.issues.map(({ message }) => message);
+  const json = (changes: object) => JSON.stringify({ ...defaultRubricForm('in'), ...changes });
+
+  it.each([
+    ['an unknown key', json({ colour: 'blue' }), 'Unrecognized key: "colour"'],
+    ['another version of the format', json({ format: 2 }), 'Invalid input: expected 1'],
+    ['an exception for what is no id', json({ exceptions: { Base: {} } }), 'unknown key: an id has 1 to 64'],
+    [
+      'an exception that knows more',
+      json({ exceptions: { base: { colour: 1 } } }),
+      'Unrecognized key: "colour"',
+    ],
+    [
+      'an exception for __proto__',
+      json({}).replace('"exceptions":{', '"exceptions":{"__proto__":{}'),
+      'unknown key __proto__',
+    ],
+    ['a start without the basis', json({ start: 100 }), 'a starting score is given when'],
+    ['a preset nobody knows', json({ presets: ['half-price'] }), 'Invalid option'],
+  ])('is refused with %s', (_, text, message) => {
+    expect(parse(text)).toEqual([expect.stringContaining(message)]);
+  });
+});
