@@ -58,7 +58,7 @@ export function judgeOwnReading(context: OwnReadingContext, ticks: Length, typed
     };
   }
   if (isNear(context, ticks)) return { verdict: 'fits' };
-  const asks = `${said(ticks)} is far from the ${said(target)} asked for. ${WHERE[axis]}${unitHint(context, typed)}`;
+  const asks = `${said(ticks)} is far from ${said(target)}. ${WHERE[axis]}${unitHint(context, typed)}`;
   return { verdict: 'far', asks };
 }
 

@@ -11,12 +11,14 @@ import type { Cell, CellValue } from '../cells';
 import { receiptOf } from '../receipt';
 import type { OutboxState } from './outbox';
 import type { OwnAttempt, OwnStore } from './own-store';
-import type { Counts, Parked } from './round-store';
+import type { Parked } from './round-store';
 
 /** Everything the measuring screen shows of the record, replaced as a whole on every change. */
 export interface OwnView {
   record: OwnRecord;
-  counts: Counts;
+  /** Entries known to be on a disk, here or at the server; and those of them that have not arrived. */
+  kept: number;
+  unsent: number;
   sending: OutboxState;
   parked: readonly Parked[];
   /** What this device could not write down. */
@@ -52,14 +54,15 @@ export class OwnSession {
     this.events = byId(events);
     this.view = {
       record: ownRecordOf(events),
-      counts: { kept: 0, sent: 0 },
+      kept: events.length,
+      unsent: 0,
       sending: { state: 'idle' },
       parked: [],
       failure: null,
     };
     this.closers = [
       store.onEvents((more) => this.take(more)),
-      store.onCounts((counts) => this.change({ counts })),
+      store.onUnsent((unsent) => this.change({ unsent })),
       store.onSending((sending) => this.change({ sending })),
       store.onParked((parked) => this.park(parked)),
     ];
@@ -137,7 +140,7 @@ export class OwnSession {
 
   private replace(events: ReadonlyMap<string, OwnEvent>): void {
     this.events = events;
-    this.change({ record: ownRecordOf(this.standing()) });
+    this.change({ record: ownRecordOf(this.standing()), kept: events.size });
   }
 
   private change(change: Partial<OwnView>): void {

@@ -5,7 +5,7 @@ import type { DeviceStore, OutboxRow, ReadingRow } from './device-store';
 import { deviceStore } from './device-store';
 import { keepOnDevice } from './keep-on-device';
 import { Outbox, type OutboxState, type OutboxWorld } from './outbox';
-import type { Counts, Parked } from './round-store';
+import type { Parked } from './round-store';
 import { benchEvent } from './stored-round';
 
 const CHANNEL = 'trymark-own';
@@ -61,11 +61,9 @@ export class OwnStore {
     return () => this.eventListeners.delete(listener);
   }
 
-  onCounts(listener: (counts: Counts) => void): () => void {
-    return this.live(async () => {
-      const sent = (await this.sentRows()).filter(({ mine }) => mine === 1).length;
-      return { kept: sent + (await this.unsentRows()).length, sent };
-    }, listener);
+  /** How many entries wait here for the server, those that it refused among them. */
+  onUnsent(listener: (count: number) => void): () => void {
+    return this.live(async () => (await this.unsentRows()).length, listener);
   }
 
   /** What the server would not take, each with its reason. */

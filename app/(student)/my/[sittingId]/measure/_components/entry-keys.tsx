@@ -29,7 +29,7 @@ export function EntryKeys({ measuring, unit }: { measuring: MeasuringState; unit
           onClick={() => (key === 'keep' ? void measuring.keep() : measuring.key(key))}
           aria-label={key === 'unit' ? `unit, now ${measuring.unit}` : (SPOKEN[key] ?? key)}
           className={classNames(
-            'flex min-h-12 touch-manipulation flex-col items-center justify-center border-r border-b border-ink select-none focus-visible:relative focus-visible:z-1 active:bg-ink active:text-sheet',
+            'flex min-h-11 touch-manipulation flex-col items-center justify-center border-r border-b border-ink select-none focus-visible:relative focus-visible:z-1 active:bg-ink active:text-sheet',
             key === 'keep' ? 'bg-act text-on-act' : 'bg-plate',
             key === 'keep' && unit === 'mm' && 'col-span-2',
           )}
@@ -51,7 +51,7 @@ function KeyFace({ text, unit }: { text: string; unit: Unit }) {
       </span>
     );
   }
-  if (text === 'keep') return <span className="text-key">keep</span>;
+  if (text === 'keep') return <span className="text-[21px] font-[680]">keep</span>;
   if (text === 'rub') return <span className="narrow text-lead font-[600]">rub out</span>;
   if (text === '.') return <span className="text-[30px] leading-none font-[680]">.</span>;
   if (text === 'unit') {

@@ -5,28 +5,34 @@ import { Button } from '@/components/ui/button';
 import { Refusal } from '@/components/ui/refusal';
 import type { OwnSession, OwnView } from '@/lib/sync/client/own-session';
 
-/** How many entries this device has kept and the server has, and what stands in the way. */
-export function KeptLine({ view, session }: { view: OwnView; session: OwnSession }) {
-  const { counts, failure } = view;
+/** How many entries are kept, how many of them the server has, and what holds up the rest. */
+export function KeptLine({ view }: { view: OwnView }) {
+  return (
+    <p className="tnum flex gap-2 text-label" role="status">
+      <span>
+        kept <strong data-testid="kept">{view.kept}</strong>
+      </span>
+      <span>
+        sent <strong data-testid="sent">{Math.max(0, view.kept - view.unsent)}</strong>
+      </span>
+      <span className="text-ink-2">{wordsFor(view)}</span>
+    </p>
+  );
+}
+
+/** What could not be written down, and what the server would not take. */
+export function KeptTrouble({ view, session }: { view: OwnView; session: OwnSession }) {
+  const { failure } = view;
   return (
     <>
-      <p className="tnum flex gap-3 text-label" role="status">
-        <span>
-          kept <strong data-testid="kept">{counts.kept}</strong>
-        </span>
-        <span>
-          sent <strong data-testid="sent">{counts.sent}</strong>
-        </span>
-        <span className="text-ink-2">{wordsFor(view)}</span>
-      </p>
       {failure ? <Refusal title={failure} className="mt-2" /> : null}
       <NotTaken view={view} session={session} />
     </>
   );
 }
 
-function wordsFor({ counts, sending, parked }: OwnView) {
-  if (counts.kept - parked.length <= counts.sent) return counts.kept === 0 ? '' : 'all sent';
+function wordsFor({ kept, unsent, sending, parked }: OwnView) {
+  if (unsent <= parked.length) return kept === 0 ? '' : 'all sent';
   if (sending.state === 'halted') {
     return sending.why === 'sign-in' ? (
       <Link href="/sign-in" className="link">

@@ -1,13 +1,13 @@
 'use client';
 
-import Link from 'next/link';
 import { PartDrawing } from '@/components/part/part-drawing';
 import { PhoneActions } from '@/components/shell/phone-actions';
+import { LinkButton } from '@/components/ui/link-button';
 import type { OwnTaskView } from '@/lib/data/own/read-task';
 import { listOpen } from '@/lib/practicals/own-record';
 import type { OwnSession, OwnView } from '@/lib/sync/client/own-session';
 import { EntryKeys } from './entry-keys';
-import { KeptLine } from './kept-line';
+import { KeptLine, KeptTrouble } from './kept-line';
 import { LockKey } from './lock-key';
 import { ReadingField } from './reading-field';
 import { SizeMap } from './size-map';
@@ -31,11 +31,9 @@ export function MeasureBoard({ session, view, task }: MeasureBoardProps) {
     <>
       <div className="flex items-baseline justify-between gap-4">
         <h1 className="font-title text-[1.5rem] leading-8 font-[620]">{task.task.title}</h1>
-        <Link href={`/my/${task.sittingId}`} className="link -my-2 inline-flex min-h-11 items-center">
-          the task
-        </Link>
+        <KeptLine view={view} />
       </div>
-      <KeptLine view={view} session={session} />
+      <KeptTrouble view={view} session={session} />
       <div className="mt-2 grid grid-cols-[minmax(0,1fr)] gap-x-6 pb-8 sm:grid-cols-2">
         <div>
           <SizeMap rubric={rubric} record={view.record} spot={spot} onPoint={measuring.point} />
@@ -48,7 +46,7 @@ export function MeasureBoard({ session, view, task }: MeasureBoardProps) {
                 note
                 label={place.label}
                 width={500}
-                height={300}
+                height={250}
               />
             </div>
           ) : null}
@@ -66,6 +64,7 @@ export function MeasureBoard({ session, view, task }: MeasureBoardProps) {
         )}
       </div>
       <PhoneActions>
+        <LinkButton href={`/my/${task.sittingId}`}>the task</LinkButton>
         <WhatIsLeft rubric={rubric} left={left} onPoint={measuring.point} />
         <LockKey left={left.length} record={view.record} onLock={() => session.lock()} />
       </PhoneActions>

@@ -5,7 +5,7 @@ import { TaskHead } from '@/app/(student)/my/_components/task-head';
 import { EmptyState } from '@/components/ui/empty-state';
 import type { OwnTaskView } from '@/lib/data/own/read-task';
 import type { OwnSession } from '@/lib/sync/client/own-session';
-import { KeptLine } from './kept-line';
+import { KeptLine, KeptTrouble } from './kept-line';
 import { LockedSheet } from './locked-sheet';
 import { MeasureBoard } from './measure-board';
 
@@ -18,14 +18,10 @@ export function MeasureSheet({ session, task }: { session: OwnSession; task: Own
   return (
     <>
       <TaskHead {...task} stage={over ? task.stage : 'locked'} title={task.task.title} />
-      <KeptLine view={view} session={session} />
+      <KeptLine view={view} />
+      <KeptTrouble view={view} session={session} />
       {lock ? (
-        <LockedSheet
-          lock={lock}
-          record={view.record}
-          rubric={task.rubric}
-          sent={view.counts.sent === view.counts.kept}
-        />
+        <LockedSheet lock={lock} record={view.record} rubric={task.rubric} sent={view.unsent === 0} />
       ) : (
         <EmptyState title="Own readings are closed">
           The results are out, and you had not locked your readings by then. What you recorded is kept.

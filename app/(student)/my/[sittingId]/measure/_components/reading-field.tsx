@@ -46,7 +46,7 @@ export function ReadingField({ measuring, record, unit }: ReadingFieldProps) {
           {ownKeyboard ? 'these keys' : 'keyboard'}
         </Button>
       </div>
-      <div className="flex items-center border-b-edge border-act bg-plate px-3">
+      <div className="flex items-center border-b-edge border-act bg-plate px-3 has-focus-visible:outline-3 has-focus-visible:outline-act">
         <input
           ref={input}
           id={id}
@@ -59,7 +59,7 @@ export function ReadingField({ measuring, record, unit }: ReadingFieldProps) {
           maxLength={64}
           aria-describedby={`${id}-told`}
           aria-invalid={told?.kind === 'refused' || undefined}
-          className="narrow h-14 min-w-0 flex-1 bg-transparent text-[34px] font-[620] outline-none"
+          className="narrow h-13 min-w-0 flex-1 bg-transparent text-[34px] font-[620] outline-none"
         />
         <span className="text-lead text-ink-2">{measuring.unit}</span>
       </div>

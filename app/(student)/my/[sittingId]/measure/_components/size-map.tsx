@@ -38,7 +38,7 @@ export function SizeMap({ rubric, record, spot, onPoint }: SizeMapProps) {
                 colSpan={line.quantity}
                 scope="colgroup"
                 className={classNames(
-                  'narrow h-7 truncate text-label font-[480]',
+                  'narrow overflow-hidden px-0.5 pb-0.5 align-bottom text-label leading-4 font-[480] text-ellipsis',
                   line.id === spot?.lineId ? 'font-[680] text-act' : 'text-ink-2',
                 )}
               >
@@ -74,7 +74,7 @@ export function SizeMap({ rubric, record, spot, onPoint }: SizeMapProps) {
                       aria-label={`${label}, ${axis}: ${MARK_WORDS[mark]}`}
                       onClick={() => onPoint(at)}
                       className={classNames(
-                        'relative flex h-8 w-full touch-manipulation items-center justify-center border border-rule bg-plate focus-visible:z-1',
+                        'relative flex h-7 w-full touch-manipulation items-center justify-center border border-rule bg-plate focus-visible:z-1',
                         here && 'z-1 bg-act-wash outline-3 -outline-offset-2 outline-act',
                       )}
                     >

@@ -60,11 +60,10 @@ export function useMeasuring(session: OwnSession, view: OwnView, { rubric, task 
       blank: task.blank,
     };
     const outcome = readOwnEntry({ text, unit, instrument, cell: cellKey(cell), asked, context });
-    if (outcome.does === 'refuse')
-      return setTold({ kind: 'refused', text: `${outcome.reason} Nothing was recorded.` });
+    if (outcome.does === 'refuse') return setTold({ kind: 'refused', text: outcome.reason });
     if (outcome.does === 'ask') {
       setAsked({ cell: cellKey(cell), ticks: outcome.ticks });
-      return setTold({ kind: 'asked', text: `${outcome.asks} If that is what you read, keep it again.` });
+      return setTold({ kind: 'asked', text: `${outcome.asks} If you read that, keep it again.` });
     }
     const { ticks, source } = outcome;
     await enter(
