@@ -61,8 +61,8 @@ export const addStudentInput = z
 export const moveStudentInput = z.object({
   sectionId: z.uuid(),
   studentId: z.uuid(),
-  /** The last day in the section. */
-  leftOn: day('Choose the last day in this section.'),
+  /** The first day without them. */
+  leftOn: day('Choose the day they left.'),
 });
 
 export const bringBackInput = z.object({ sectionId: z.uuid(), studentId: z.uuid() });
@@ -75,7 +75,13 @@ const rosterText = z.strictObject({
     .string('Paste names, or choose a file.')
     .max(MAX_TEXT, 'This is far more than a roster. Paste the names of one section.'),
   layout: z
-    .strictObject({ header: z.boolean(), columns: z.array(z.enum(ROSTER_COLUMNS)).min(1).max(60) })
+    .strictObject({
+      header: z.boolean(),
+      columns: z
+        .array(z.enum(ROSTER_COLUMNS))
+        .min(1)
+        .max(60, 'These are more than 60 columns. Keep the ID and the names.'),
+    })
     .optional(),
 });
 
