@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { TICKS_PER_INCH } from '@/lib/length';
-import type { Check, CutList, LineException, RubricForm } from '@/lib/scoring';
+import type { Check, CutList, LineException, PresetId, RubricForm } from '@/lib/scoring';
 import { sizeRuleArb } from './scoring-arbitraries';
 
 const pointsArb = fc.oneof(fc.integer({ min: 0, max: 2000 }), fc.constantFrom(0, 50, 100, 900));
@@ -75,7 +75,7 @@ export function formArb({ lines }: CutList): fc.Arbitrary<RubricForm> {
       margin: fc.oneof(fc.constant(0), lengthArb),
       grossLimit: fc.option(lengthArb),
       ceiling: fc.integer({ min: 100, max: 200 }),
-      presets: fc.constant([]),
+      presets: fc.constant<PresetId[]>([]),
       defaults: defaultsArb,
       exceptions: exceptionsArb,
       workChecks: checksArb,
