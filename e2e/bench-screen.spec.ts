@@ -25,7 +25,7 @@ interface Box {
 }
 
 function boxesOf(page: Page): Promise<Box[]> {
-  return page.locator('button:visible').evaluateAll((buttons) =>
+  return page.locator('main button:visible').evaluateAll((buttons) =>
     buttons.map((button) => {
       const { left, top, right, bottom } = button.getBoundingClientRect();
       const name = button.getAttribute('aria-label') ?? button.textContent ?? '';

@@ -271,3 +271,27 @@ test('a practice round runs on the same bench and sends nothing', async ({ page 
   await page.reload();
   await expect(page.getByTestId('kept')).toHaveText('0');
 });
+
+test.describe('the endpoint', () => {
+  test.use({ expectedErrors: /status of 4(03|12|22)/ });
+
+  test('refuses another version of the protocol whole, and what no page of its own sent', async ({
+    page,
+  }) => {
+    await tablet.open();
+    const url = `/api/sittings/${stage.sittingId}/events`;
+    const statusOf = (protocol: number) =>
+      page.evaluate(
+        async ([address, version]) => {
+          const body = JSON.stringify({ protocol: version, deviceId: crypto.randomUUID(), events: [] });
+          const headers = { 'content-type': 'application/json' };
+          return (await fetch(String(address), { method: 'POST', headers, body })).status;
+        },
+        [url, protocol],
+      );
+    expect(await statusOf(99)).toBe(412);
+    expect(await statusOf(1)).toBe(422);
+    const foreign = await page.request.post(url, { data: { protocol: 1 } });
+    expect(foreign.status()).toBe(403);
+  });
+});

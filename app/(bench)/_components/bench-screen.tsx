@@ -64,10 +64,7 @@ export function BenchScreen({ session, lock: storedLock, practice, leaveTo }: Be
     view,
     session,
     bundle: session.bundle,
-    press: (action) => {
-      session.press(action);
-      if (panel !== null) setPanel(null);
-    },
+    press: session.press,
     settings,
     change,
     panel,

@@ -20,7 +20,7 @@ export function SetUpPanel() {
         </BenchKey>
       </div>
       <Segmented
-        label="light"
+        label="how the sheet is lit"
         showLabel
         size="bench"
         options={LIGHTS.map((value) => ({ value, label: LIGHT_NAMES[value] }))}

@@ -48,7 +48,8 @@ export class BenchSession {
     this.from = loaded.from;
     const { rubric, students, may } = bundle;
     const plan = { rubric, students, personId, mayFinish: may.finish, maySettle: may.settle };
-    const state = startRound(plan, events, place, pressesOf(rubric, presses));
+    const opened = startRound(plan, events, place, pressesOf(rubric, presses));
+    const state = { ...opened, elsewhere: bundle.inHand.others.map(({ attemptId }) => attemptId) };
     this.view = {
       state,
       counts: { kept: 0, sent: 0 },

@@ -1,6 +1,6 @@
 import { liveQuery } from 'dexie';
 import { z } from 'zod';
-import type { InHandView } from '@/lib/contracts/rounds';
+import type { InHandView, RoundBundle } from '@/lib/contracts/rounds';
 import type { Place } from '@/lib/round/start-round';
 import type { BenchEvent } from '@/lib/round/types';
 import { browserWorld } from './browser-world';
@@ -68,7 +68,7 @@ export class DeviceRound implements RoundStore {
       await storeBundle(store, personId, fetched.value);
       this.benchEvents = fetched.value.inHand.benchEvents;
     }
-    const bundle = fetched.ok ? fetched.value : before;
+    const bundle = fetched.ok ? await this.withoutOwnHand(fetched.value) : before;
     if (!bundle || (!fetched.ok && fetched.why === 'not-found')) {
       return { ok: false, why: fetched.ok ? 'not-found' : fetched.why };
     }
@@ -173,6 +173,13 @@ export class DeviceRound implements RoundStore {
     this.outbox.stop();
     this.channel.close();
     void postInHandQuietly(this.store, this.sittingId);
+  }
+
+  /** What this device said of itself before a reload is no news to it. */
+  private async withoutOwnHand(bundle: RoundBundle): Promise<RoundBundle> {
+    const own = await readDeviceId(this.store);
+    const others = bundle.inHand.others.filter(({ deviceId }) => deviceId !== own);
+    return { ...bundle, inHand: { ...bundle.inHand, others } };
   }
 
   private get placeKey(): string {
