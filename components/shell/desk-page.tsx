@@ -13,26 +13,41 @@ interface DeskPageProps {
   actions?: ReactNode;
   /** The narrow column at the right; on a phone it follows the content. */
   aside?: ReactNode;
+  /** The title line runs on above the narrow column: for pages with both steps and buttons. */
+  wideHead?: boolean;
   titleBlock?: readonly TitleBlockCell[];
   children: ReactNode;
 }
 
 /** The inside of a desk sheet: title line, content, the column beside it, the title block in the corner. */
-export function DeskPage({ title, note, tabs, actions, aside, titleBlock, children }: DeskPageProps) {
+export function DeskPage(props: DeskPageProps) {
+  const { title, note, tabs, actions, aside, wideHead = false, titleBlock, children } = props;
+  const head = (
+    <div
+      className={classNames(
+        'mb-4 flex flex-wrap items-center gap-x-8 gap-y-3',
+        wideHead && aside && 'xl:col-span-2',
+      )}
+    >
+      <PageTitle className="min-w-0">{title}</PageTitle>
+      {note ? <p className="text-label text-ink-2">{note}</p> : null}
+      {tabs}
+      {actions ? (
+        <div className="flex flex-wrap items-center gap-2 md:ml-auto print:hidden">{actions}</div>
+      ) : null}
+    </div>
+  );
   return (
     <div
       className={classNames(
         'grid flex-1 grid-cols-[minmax(0,1fr)] gap-x-8',
         aside ? 'xl:grid-cols-[minmax(0,1fr)_20rem]' : '',
+        wideHead && 'grid-rows-[auto_auto_1fr] xl:grid-rows-[auto_1fr]',
       )}
     >
+      {wideHead ? head : null}
       <div className="min-w-0">
-        <div className="mb-4 flex flex-wrap items-center gap-x-8 gap-y-3">
-          <PageTitle className="min-w-0">{title}</PageTitle>
-          {note ? <p className="text-label text-ink-2">{note}</p> : null}
-          {tabs}
-          {actions ? <div className="flex flex-wrap gap-2 md:ml-auto print:hidden">{actions}</div> : null}
-        </div>
+        {wideHead ? null : head}
         {children}
       </div>
       {aside || titleBlock ? (

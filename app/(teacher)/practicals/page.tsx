@@ -28,7 +28,7 @@ export default async function PracticalsPage({ searchParams }: PracticalsPagePro
         </LinkButton>
       }
     >
-      <div className="grid gap-10">
+      <div className="grid grid-cols-[minmax(0,1fr)] gap-10">
         {own.length > 0 ? (
           <div>
             <PracticalTable practicals={own} archived={archived} />

@@ -45,7 +45,7 @@ export function DifferenceTable({ view }: { view: VersionsComparison }) {
 function RowTable({ parts, view, caption }: { parts: Part[]; view: VersionsComparison; caption: string }) {
   return (
     <div className="overflow-x-auto">
-      <table className="tnum mt-2 w-full text-left">
+      <table className="tnum mt-2 w-full max-w-[40rem] text-left">
         <caption className="sr-only">{caption}</caption>
         <thead className="border-b-outline border-ink">
           <tr className="text-small text-ink-2">

@@ -32,17 +32,19 @@ export function RubricGroup({ group, about }: { group: ComparableRubrics; about:
       <Table caption={`rubrics of ${title}`}>
         <TableHead>
           <tr>
-            {alone ? null : <HeadCell className="w-12">compare</HeadCell>}
-            <HeadCell>teacher</HeadCell>
-            <HeadCell>rubric</HeadCell>
+            <HeadCell className="w-20">
+              {alone ? <span className="sr-only">compare</span> : 'compare'}
+            </HeadCell>
+            <HeadCell className="w-[32%]">teacher</HeadCell>
+            <HeadCell className="w-[28%]">rubric</HeadCell>
             <HeadCell>used in</HeadCell>
           </tr>
         </TableHead>
         <TableBody>
           {rubrics.map((rubric) => (
             <tr key={rubric.versionId}>
-              {alone ? null : (
-                <Cell>
+              <Cell className="align-middle">
+                {alone ? null : (
                   <input
                     type="checkbox"
                     name="versions"
@@ -52,14 +54,14 @@ export function RubricGroup({ group, about }: { group: ComparableRubrics; about:
                     onChange={(event) => tick(rubric.versionId, event.target.checked)}
                     className="choice-check block size-6 cursor-pointer appearance-none border-outline border-ink bg-plate checked:border-act checked:bg-act"
                   />
-                </Cell>
-              )}
-              <RowHead>{rubric.ownerName}</RowHead>
-              <Cell className="whitespace-nowrap">
+                )}
+              </Cell>
+              <RowHead className="align-middle">{rubric.ownerName}</RowHead>
+              <Cell className="align-middle">
                 version {rubric.number}
                 {rubric.isNewest ? '' : ', since replaced'}
               </Cell>
-              <Cell>{usedIn(rubric)}</Cell>
+              <Cell className="align-middle">{usedIn(rubric)}</Cell>
             </tr>
           ))}
         </TableBody>

@@ -19,11 +19,13 @@ export function PracticalTable({
       <TableHead>
         <tr>
           <HeadCell>practical</HeadCell>
-          <HeadCell>unit</HeadCell>
-          <HeadCell>cut list</HeadCell>
-          <HeadCell>published</HeadCell>
-          <HeadCell align="right">sittings</HeadCell>
-          <HeadCell>typed last</HeadCell>
+          <HeadCell className="max-md:hidden">unit</HeadCell>
+          <HeadCell className="max-md:hidden">cut list</HeadCell>
+          <HeadCell className="max-md:hidden">published</HeadCell>
+          <HeadCell align="right" className="max-md:hidden">
+            sittings
+          </HeadCell>
+          <HeadCell className="max-md:hidden">typed last</HeadCell>
           <HeadCell>
             <span className="sr-only">what you can do</span>
           </HeadCell>
@@ -39,22 +41,30 @@ export function PracticalTable({
               >
                 {practical.title}
               </Link>
+              <span className="block text-small font-[440] text-ink-2 md:hidden">
+                {sayPieces(practical.lines, practical.pieces)};{' '}
+                {practical.version ? `version ${practical.version.number}` : 'not published yet'}
+              </span>
             </RowHead>
-            <Cell>{practical.unit === 'in' ? 'inches' : 'mm'}</Cell>
-            <Cell className="whitespace-nowrap">{sayPieces(practical.lines, practical.pieces)}</Cell>
-            <Cell className="whitespace-nowrap">
+            <Cell className="max-md:hidden">{practical.unit === 'in' ? 'inches' : 'mm'}</Cell>
+            <Cell className="whitespace-nowrap max-md:hidden">
+              {sayPieces(practical.lines, practical.pieces)}
+            </Cell>
+            <Cell className="whitespace-nowrap max-md:hidden">
               {practical.version ? (
                 `version ${practical.version.number}`
               ) : (
                 <span className="text-ink-2">not yet</span>
               )}
             </Cell>
-            <Cell align="right">{practical.sittings}</Cell>
-            <Cell className="whitespace-nowrap">
+            <Cell align="right" className="max-md:hidden">
+              {practical.sittings}
+            </Cell>
+            <Cell className="whitespace-nowrap max-md:hidden">
               <LocalTime at={practical.savedAt} style="day" />
             </Cell>
             <Cell>
-              <div className="flex justify-end gap-2">
+              <div className="flex justify-end gap-2 whitespace-nowrap">
                 <PressForm
                   action={copyPracticalAction}
                   fields={{ practicalId: practical.practicalId }}

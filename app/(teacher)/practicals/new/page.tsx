@@ -12,7 +12,7 @@ export default async function NewPracticalPage() {
   const { own } = pageValue(await listPracticals(await pageActor(), {}));
   return (
     <DeskPage title="New practical">
-      <div className="grid gap-10">
+      <div className="grid grid-cols-[minmax(0,1fr)] gap-10">
         <section aria-labelledby="empty-heading">
           <Heading id="empty-heading" className="mb-3">
             From nothing

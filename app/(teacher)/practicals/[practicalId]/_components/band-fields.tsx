@@ -24,7 +24,7 @@ export function BandFields({ size, axis, off: [under, over] }: BandFieldsProps) 
   const { rule } = size;
   return (
     <div className="mt-4">
-      <div className="grid gap-x-12 gap-y-6 md:grid-cols-[repeat(2,minmax(0,24rem))]">
+      <div className="grid gap-x-12 gap-y-6 md:grid-cols-[repeat(2,minmax(0,1fr))] lg:grid-cols-[repeat(2,minmax(0,21rem))_15rem]">
         {rule.mirrored ? (
           <SideFields side="over" title={`over and under: ${over} and ${under}`} {...{ size, axis }} />
         ) : (

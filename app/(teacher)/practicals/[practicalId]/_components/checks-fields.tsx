@@ -25,7 +25,7 @@ export function ChecksFields({ base, checks, listIn, emptyText }: ChecksFieldsPr
       if (list) work(list);
     });
   return (
-    <div>
+    <div className="@container">
       {checks.length === 0 ? <p className="text-ink-2">{emptyText}</p> : null}
       <ol className="grid gap-6">
         {checks.map((check, index) => (
@@ -70,7 +70,7 @@ function CheckFields({ base, check, index, change }: CheckFieldsProps) {
       if (found) work(found);
     });
   return (
-    <div className="grid gap-x-6 gap-y-3 md:grid-cols-[14rem_minmax(0,1fr)_14rem]">
+    <div className="grid gap-x-6 gap-y-3 @min-[44rem]:grid-cols-[13rem_minmax(0,1fr)_13rem]">
       <div>
         <DraftField path={`${base}.label`} label="what is checked" />
         <Button
@@ -85,7 +85,7 @@ function CheckFields({ base, check, index, change }: CheckFieldsProps) {
       <fieldset className="min-w-0">
         <legend className="sr-only">levels of {name}</legend>
         {[...check.levels.keys()].map((place) => (
-          <div key={place} className="grid grid-cols-[minmax(0,1fr)_6rem_3rem] items-end gap-x-3">
+          <div key={place} className="grid grid-cols-[minmax(0,1fr)_7rem_2.5rem] items-end gap-x-3">
             <DraftField path={`${base}.levels.${place}.label`} label={place === 0 ? 'passes as' : 'or is'} />
             {place === 0 ? (
               <p className="py-2 text-text text-ink-2">loses nothing</p>

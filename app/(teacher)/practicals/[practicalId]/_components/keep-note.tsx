@@ -6,7 +6,7 @@ import type { KeepState } from './draft-keeper';
 /** Where what is typed stands. */
 export function KeepNote({ keep }: { keep: KeepState }) {
   return (
-    <span role="status">
+    <p role="status" className="mr-2 max-w-[40ch] text-label text-ink-2">
       {keep.kind === 'kept' ? (
         <>
           kept <LocalTime at={keep.at} />
@@ -15,6 +15,6 @@ export function KeepNote({ keep }: { keep: KeepState }) {
       {keep.kind === 'keeping' ? 'keeping …' : null}
       {keep.kind === 'waiting' ? `not kept yet. ${keep.message}` : null}
       {keep.kind === 'stale' ? 'changed in another place' : null}
-    </span>
+    </p>
   );
 }

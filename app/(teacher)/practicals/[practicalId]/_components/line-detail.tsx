@@ -58,7 +58,7 @@ export function LineDetail({ lineId, sheet }: { lineId: string; sheet: Sheet }) 
           </Button>
         </ButtonRow>
       </div>
-      <div className="grid items-start gap-x-12 gap-y-6 md:grid-cols-[minmax(0,26rem)_minmax(0,22rem)]">
+      <div className="grid items-start gap-x-12 gap-y-6 md:grid-cols-[minmax(0,26rem)_minmax(0,27rem)]">
         {size ? (
           <PartDrawing size={size} unit={unit} label={name} />
         ) : (

@@ -49,9 +49,10 @@ export function PracticalEditor({ view }: { view: PracticalView }) {
       <DeskPage
         title={desk.draft.title.trim() || view.title}
         tabs={<Steps current={step} wrong={editor.wrong} onStep={setStep} />}
-        note={<KeepNote keep={desk.keep} />}
+        wideHead
         actions={
           <>
+            <KeepNote keep={desk.keep} />
             {view.latest ? (
               <>
                 <LinkButton href={`/practicals/${view.practicalId}/practice`}>practice round</LinkButton>

@@ -17,13 +17,12 @@ const DOUBLES: [id: PresetId, dear: 'under' | 'over', label: string][] = [
 interface PresetKeysProps {
   size: SizeRuleDesk;
   read: SizeRule | null;
-  disabled: boolean;
 }
 
 /** Ready-made prices for this size. Pressed again, a doubled side costs what the other one does. */
-export function PresetKeys({ size, read, disabled }: PresetKeysProps) {
+export function PresetKeys({ size, read }: PresetKeysProps) {
   const { desk, unit } = useEditor();
-  const notYet = disabled ? 'price it by itself first' : read ? null : 'the bands cannot be read yet';
+  const notYet = read ? null : 'the bands cannot be read yet';
 
   function toggle(id: PresetId, dear: 'under' | 'over', pressed: boolean) {
     const doubled = read && doubleSide(read, dear, unit);
@@ -36,7 +35,7 @@ export function PresetKeys({ size, read, disabled }: PresetKeysProps) {
   }
 
   return (
-    <div className="flex flex-wrap items-center gap-x-3 gap-y-1">
+    <div className="flex flex-wrap items-center gap-x-3 gap-y-1 lg:ml-auto">
       <span className="text-label text-ink-2">presets</span>
       <ButtonRow joined label="presets">
         {DOUBLES.map(([id, dear, label]) => {
@@ -55,7 +54,7 @@ export function PresetKeys({ size, read, disabled }: PresetKeysProps) {
             </Button>
           );
         })}
-        <RateDialog size={size} notYet={disabled ? 'price it by itself first' : null} />
+        <RateDialog size={size} />
       </ButtonRow>
     </div>
   );

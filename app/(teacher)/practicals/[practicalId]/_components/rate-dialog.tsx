@@ -42,7 +42,7 @@ function readRate(typed: Typed, unit: Unit): { rule: SizeRule } | { errors: Rate
 }
 
 /** So many points for every step begun past the free distance, written out as bands. */
-export function RateDialog({ size, notYet }: { size: SizeRuleDesk; notYet: string | null }) {
+export function RateDialog({ size }: { size: SizeRuleDesk }) {
   const { desk, unit } = useEditor();
   const [open, setOpen] = useState(false);
   const [typed, setTyped] = useState<Typed>(FIRST[unit]);
@@ -70,7 +70,7 @@ export function RateDialog({ size, notYet }: { size: SizeRuleDesk; notYet: strin
 
   return (
     <>
-      <Button size="small" className="min-h-9" notYet={notYet} onClick={() => setOpen(true)}>
+      <Button size="small" className="min-h-9" onClick={() => setOpen(true)}>
         rate per step
       </Button>
       <Dialog

@@ -1,5 +1,6 @@
 'use client';
 
+import { classNames } from '@/components/ui/class-names';
 import { SelectField } from '@/components/ui/select-field';
 import { Heading } from '@/components/ui/titles';
 import { ChecksFields } from './checks-fields';
@@ -85,7 +86,7 @@ export function RulesStep() {
         <Heading id="prediction-heading">Prediction</Heading>
         <PredictionFields />
       </section>
-      <section aria-labelledby="work-heading" className={GROUP}>
+      <section aria-labelledby="work-heading" className={classNames(GROUP, 'lg:col-span-2')}>
         <Heading id="work-heading">Checks of the whole work</Heading>
         <ChecksFields
           base="workChecks"

@@ -48,9 +48,7 @@ export function SizeEditor({ lineId, axis }: { lineId: string | null; axis: Axis
         ) : (
           <Owner size={size} />
         )}
-        <div className="lg:ml-auto">
-          <PresetKeys size={size} read={read} disabled={!size.isOwn} />
-        </div>
+        {size.isOwn ? <PresetKeys size={size} read={read} /> : null}
       </div>
       {read ? (
         <PriceOnRule rule={read} axis={axis} target={target} label={`${name}, ${axis}`} />

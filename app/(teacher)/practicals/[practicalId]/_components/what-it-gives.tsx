@@ -63,7 +63,7 @@ function Examples({ rubric, latest, number, selection }: ExamplesProps) {
               attempt
             </th>
             {latest ? (
-              <th scope="col" className="px-2 py-1.5 text-right font-[480]">
+              <th scope="col" className="px-2 py-1.5 text-right font-[480] whitespace-nowrap">
                 version {number}
               </th>
             ) : null}
