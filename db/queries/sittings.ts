@@ -16,7 +16,7 @@ import {
   sittings,
   terms,
 } from '@/db/schema';
-import { schoolToday } from './sections';
+import { inSectionToday, schoolToday } from './sections';
 
 const teacherIds = sql<string[]>`array(
   select staff.person_id from ${sectionStaff} staff
@@ -207,6 +207,93 @@ export function selectAttempts(tx: Transaction, schoolId: string, sittingIds: re
 }
 
 export type AttemptRow = Awaited<ReturnType<typeof selectAttempts>>[number];
+
+/** The sittings of the sections that a person teaches, the open ones first, by period. */
+export function selectSittingsOfTeacher(tx: Transaction, schoolId: string, personId: string) {
+  return tx
+    .select({
+      sittingId: sittings.id,
+      sectionId: sections.id,
+      title: practicals.title,
+      sectionName: sections.name,
+      period: sections.period,
+      versionNumber: rubricVersions.number,
+      dueOn: sittings.dueOn,
+      state: sittings.state,
+      timeZone: schools.timeZone,
+    })
+    .from(sittings)
+    .innerJoin(sections, and(eq(sections.schoolId, sittings.schoolId), eq(sections.id, sittings.sectionId)))
+    .innerJoin(schools, eq(schools.id, sittings.schoolId))
+    .innerJoin(
+      practicals,
+      and(eq(practicals.schoolId, sittings.schoolId), eq(practicals.id, sittings.practicalId)),
+    )
+    .innerJoin(
+      rubricVersions,
+      and(eq(rubricVersions.schoolId, sittings.schoolId), eq(rubricVersions.id, sittings.rubricVersionId)),
+    )
+    .where(
+      and(
+        eq(sittings.schoolId, schoolId),
+        isNull(sections.archivedAt),
+        sql`${personId}::uuid = any(${teacherIds})`,
+      ),
+    )
+    .orderBy(
+      asc(sittings.state),
+      sql`substring(${sections.period} from '^[0-9]+')::numeric nulls last`,
+      asc(sections.period),
+      asc(sections.name),
+      desc(sittings.openedAt),
+    );
+}
+
+/** How far each sitting has come, by the latest attempt of everyone who is in its section today. */
+export async function selectProgress(tx: Transaction, schoolId: string, sittingIds: readonly string[]) {
+  if (sittingIds.length === 0) return [];
+  const current = tx
+    .selectDistinctOn([attempts.sittingId, attempts.studentId], {
+      sittingId: attempts.sittingId,
+      attemptId: attempts.id,
+      standing: attempts.standing,
+    })
+    .from(attempts)
+    .innerJoin(sittings, and(eq(sittings.schoolId, attempts.schoolId), eq(sittings.id, attempts.sittingId)))
+    .innerJoin(schools, eq(schools.id, attempts.schoolId))
+    .innerJoin(
+      enrollments,
+      and(
+        eq(enrollments.schoolId, attempts.schoolId),
+        eq(enrollments.sectionId, sittings.sectionId),
+        eq(enrollments.studentId, attempts.studentId),
+        inSectionToday,
+      ),
+    )
+    .where(and(eq(attempts.schoolId, schoolId), inArray(attempts.sittingId, [...sittingIds])))
+    .orderBy(asc(attempts.sittingId), asc(attempts.studentId), desc(attempts.number))
+    .as('current');
+  const expected = sql`${current.standing} = 'expected'`;
+  return tx
+    .select({
+      sittingId: current.sittingId,
+      away: sql<number>`(count(*) filter (where ${current.standing} in ('absent', 'excused')))::int`,
+      read: sql<number>`(count(*) filter (where ${current.standing} = 'zero' or (${expected} and ${scoreSheets.complete})))::int`,
+      begun: sql<number>`(count(*) filter (where ${expected} and not ${scoreSheets.complete} and ${scoreSheets.measuredAt} is not null))::int`,
+      conflicts: sql<number>`coalesce(sum(${scoreSheets.conflicts}), 0)::int`,
+      students: sql<number>`count(*)::int`,
+    })
+    .from(current)
+    .leftJoin(
+      scoreSheets,
+      and(
+        eq(scoreSheets.schoolId, schoolId),
+        eq(scoreSheets.attemptId, current.attemptId),
+        eq(scoreSheets.side, 'bench'),
+      ),
+    )
+    .groupBy(current.sittingId);
+}
 
 /** The lock cells of a sitting's own sides, with what the server noted about them. */
 export function selectLockEvents(tx: Transaction, schoolId: string, sittingId: string) {

@@ -1,11 +1,11 @@
 import 'server-only';
 import { z } from 'zod';
-import { selectRounds } from '@/db/queries/rounds';
-import { selectPublications } from '@/db/queries/sittings';
+import { selectProgress, selectPublications, selectSittingsOfTeacher } from '@/db/queries/sittings';
 import { defineVerb } from '../verb';
 
 export interface SittingListView {
   sittingId: string;
+  sectionId: string;
   title: string;
   sectionName: string;
   period: string;
@@ -13,30 +13,37 @@ export interface SittingListView {
   dueOn: string | null;
   published: boolean;
   publishedAt: string | null;
+  timeZone: string;
+  /** In the section today, each with the latest attempt. */
   students: number;
-  finished: number;
+  /** Read to the end, or decided to be a zero. */
+  read: number;
   begun: number;
-  absent: number;
+  /** Absent or excused. */
+  away: number;
   conflicts: number;
 }
 
-/** The sittings of a teacher's sections, those still open first. */
+const NONE = { students: 0, read: 0, begun: 0, away: 0, conflicts: 0 };
+
+/** The sittings of a teacher's sections, those still open first, by period. */
 export const listSittings = defineVerb({
   action: 'sitting.list',
   input: z.strictObject({}),
   async run({ actor, tx }): Promise<SittingListView[]> {
-    const duty = actor.role === 'aide' ? 'aide' : 'teacher';
-    const rows = await selectRounds(tx, actor.schoolId, actor.personId, duty);
+    const { schoolId, personId } = actor;
+    const rows = await selectSittingsOfTeacher(tx, schoolId, personId);
     const ids = rows.map(({ sittingId }) => sittingId);
-    const publications = ids.length > 0 ? await selectPublications(tx, actor.schoolId, ids) : [];
-    return rows
-      .map(({ state, openedAt: _, ...row }) => ({
-        ...row,
-        published: state === 'published',
-        publishedAt:
-          publications.find(({ sittingId }) => sittingId === row.sittingId)?.publishedAt.toISOString() ??
-          null,
-      }))
-      .sort((a, b) => Number(a.published) - Number(b.published));
+    const publications = ids.length > 0 ? await selectPublications(tx, schoolId, ids) : [];
+    const progress = new Map(
+      (await selectProgress(tx, schoolId, ids)).map(({ sittingId, ...counts }) => [sittingId, counts]),
+    );
+    return rows.map(({ state, ...row }) => ({
+      ...row,
+      published: state === 'published',
+      publishedAt:
+        publications.find(({ sittingId }) => sittingId === row.sittingId)?.publishedAt.toISOString() ?? null,
+      ...(progress.get(row.sittingId) ?? NONE),
+    }));
   },
 });

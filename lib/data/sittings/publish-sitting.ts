@@ -20,6 +20,7 @@ import {
 import { sittingSubject } from './sitting-subject';
 
 export interface PublishedView {
+  sectionId: string;
   number: number;
   scored: number;
   notRead: number;
@@ -63,14 +64,14 @@ export const publishSitting = defineVerb({
       results.map((result) => ({ schoolId, publicationId, ...asTold(result) })),
     );
     await updateSitting(tx, schoolId, sittingId, { state: 'published' });
-    const view = { number, changed, ...count(results) };
+    const counts = { number, changed, ...count(results) };
     const { withoutUnread, lateLocks } = input;
     await log({
       subjectKind: 'sitting',
       subjectId: sittingId,
-      details: { ...view, publicationId, rubricVersionId, withoutUnread, lateLocks: lateLocks ?? null },
+      details: { ...counts, publicationId, rubricVersionId, withoutUnread, lateLocks: lateLocks ?? null },
     });
-    return view;
+    return { sectionId: sitting.sectionId, ...counts };
   },
 });
 

@@ -58,7 +58,7 @@ describe('openSitting', () => {
     expect((await logOf(school)).filter(({ action }) => action === 'sitting.open')).toHaveLength(1);
     expect(value(await listSittings(teacher, {})).find((row) => row.sittingId === sittingId)).toMatchObject({
       students: 3,
-      finished: 0,
+      read: 0,
     });
   });
 
@@ -121,6 +121,21 @@ describe('readSitting', () => {
       ['Ana', 'read'],
       ['Ben', 'begun'],
     ]);
+  });
+
+  it('counts each student once on the list, by the latest attempt, and nobody who has left', async () => {
+    const { teacher, sittingId, attempts, practical, students, sectionId } = await stageRound();
+    await markPieces(teacher, sittingId, attempts[0], practical.rubric);
+    await markPieces(teacher, sittingId, attempts[1], practical.rubric);
+    const listed = async () =>
+      value(await listSittings(teacher, {})).find((row) => row.sittingId === sittingId);
+    expect(await listed()).toMatchObject({ students: 2, read: 2, begun: 0, away: 0, conflicts: 0 });
+    value(await startRedo(teacher, { sittingId, studentId: students[0].personId }));
+    expect(await listed()).toMatchObject({ students: 2, read: 1 });
+    await ownerSql()`
+      update enrollments set left_on = current_date - 1
+      where section_id = ${sectionId} and student_id = ${students[1].personId}`;
+    expect(await listed()).toMatchObject({ students: 1, read: 0 });
   });
 
   it('tells whose tablet has numbered readings that have not arrived', async () => {

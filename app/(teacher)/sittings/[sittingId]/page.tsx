@@ -1,0 +1,82 @@
+import type { Metadata } from 'next';
+import { actorInRole } from '@/app/account/_components/actor-in-role';
+import { DeskPage } from '@/components/shell/desk-page';
+import { EmptyState } from '@/components/ui/empty-state';
+import { LinkButton } from '@/components/ui/link-button';
+import { Notice } from '@/components/ui/notice';
+import { readSitting, type SittingView } from '@/lib/data/sittings/read-sitting';
+import { pageValue } from '@/lib/transport/page';
+import { count, sayPeriod } from '../../_components/names';
+import { StudentTable } from './_components/student-table';
+import { sittingTitleBlock } from './_components/title-block-of';
+
+export const metadata: Metadata = { title: 'Sitting' };
+
+export default async function SittingPage({ params }: PageProps<'/sittings/[sittingId]'>) {
+  const { sittingId } = await params;
+  const sitting = pageValue(await readSitting(await actorInRole('teacher'), { sittingId }));
+  const { title, sectionName, period, versionNumber, students, published } = sitting;
+  return (
+    <DeskPage
+      title={title}
+      note={`${sectionName}, ${sayPeriod(period)}, rubric ${versionNumber}`}
+      actions={
+        <>
+          <LinkButton href={`/gradebook/${sitting.sectionId}`}>gradebook</LinkButton>
+          <LinkButton kind={published ? 'plain' : 'act'} href={`/round/${sittingId}`}>
+            to the bench
+          </LinkButton>
+          <LinkButton href={`/sittings/${sittingId}/publish`}>
+            {published ? 'publish again' : 'publish'}
+          </LinkButton>
+        </>
+      }
+      titleBlock={sittingTitleBlock(sitting)}
+    >
+      <div className="grid gap-6">
+        <Findings sitting={sitting} />
+        {students.length === 0 ? (
+          <EmptyState
+            title="Nobody in this period yet"
+            action={
+              <LinkButton kind="act" href={`/periods/${sitting.sectionId}/import`}>
+                paste names
+              </LinkButton>
+            }
+          >
+            Paste the names of {sayPeriod(period)}. Whoever is on its roster gets an attempt here.
+          </EmptyState>
+        ) : (
+          <StudentTable sitting={sitting} />
+        )}
+      </div>
+    </DeskPage>
+  );
+}
+
+/** What a teacher should know before relying on the list. */
+function Findings({ sitting: { sittingId, students, notArrived } }: { sitting: SittingView }) {
+  const conflicts = students.reduce((sum, student) => sum + student.conflicts, 0);
+  return (
+    <>
+      {conflicts > 0 ? (
+        <Notice
+          title={`${count(conflicts, 'size has', 'sizes have')} two readings.`}
+          action={
+            <a className="link" href={`/round/${sittingId}`}>
+              Choose at the bench
+            </a>
+          }
+        >
+          Two people measured the same piece, and the readings differ. Both are kept until you choose.
+        </Notice>
+      ) : null}
+      {notArrived.map(({ name, readings }) => (
+        <Notice key={name} title={`${count(readings, 'reading', 'readings')} of ${name} not here yet.`}>
+          A tablet has numbered them and still keeps them. They come by themselves when that person opens the
+          round on it with a network.
+        </Notice>
+      ))}
+    </>
+  );
+}

@@ -1,0 +1,92 @@
+'use client';
+
+import { getFormProps, getInputProps, getSelectProps, useForm } from '@conform-to/react';
+import { parseWithZod } from '@conform-to/zod/v4';
+import { useActionState } from 'react';
+import { FormRefusal } from '@/components/account/form-refusal';
+import { keepTyped } from '@/components/ui/keep-typed';
+import { LinkButton } from '@/components/ui/link-button';
+import { SelectField } from '@/components/ui/select-field';
+import { SubmitButton } from '@/components/ui/submit-button';
+import { TextField } from '@/components/ui/text-field';
+import { openSittingInput } from '@/lib/contracts/sittings';
+import type { OpenChoicesView, VersionChoice } from '@/lib/data/sittings/read-open-choices';
+import { count, sayPeriod } from '../../../_components/names';
+import { openSittingAction } from '../../actions';
+
+interface OpenFormProps {
+  sections: OpenChoicesView['sections'];
+  chosen: string | null;
+}
+
+/** Which period gets which version, by when. What a section has already is not offered to it. */
+export function OpenForm({ sections, chosen }: OpenFormProps) {
+  const [lastResult, action] = useActionState(openSittingAction, undefined);
+  const first =
+    sections.find(({ sectionId }) => sectionId === chosen) ??
+    (sections.length === 1 ? sections[0] : undefined);
+  const [form, fields] = useForm({
+    id: 'sitting',
+    lastResult,
+    defaultValue: { sectionId: first?.sectionId, versionId: first?.versions[0]?.versionId },
+    onValidate: ({ formData }) => parseWithZod(formData, { schema: openSittingInput }),
+  });
+  const section = sections.find(({ sectionId }) => sectionId === fields.sectionId.value);
+  return (
+    <form {...getFormProps(form)} action={action} onReset={keepTyped} className="grid max-w-[34rem] gap-4">
+      <FormRefusal errors={form.errors} />
+      <SelectField
+        label="period"
+        placeholder="choose a period"
+        options={sections.map(({ sectionId, name, period, studentCount }) => ({
+          value: sectionId,
+          label: `${sayPeriod(period)}, ${name}, ${count(studentCount, 'student', 'students')}`,
+        }))}
+        {...getSelectProps(fields.sectionId)}
+        key={fields.sectionId.key}
+        error={fields.sectionId.errors}
+      />
+      <SelectField
+        label="practical"
+        hint="The latest rubric of each stands first. The sitting keeps the one you choose."
+        placeholder={section ? 'choose a practical' : 'choose a period first'}
+        options={(section?.versions ?? []).map((version) => ({
+          value: version.versionId,
+          label: sayVersion(version),
+        }))}
+        {...getSelectProps(fields.versionId)}
+        key={`${fields.versionId.key}-${section?.sectionId}`}
+        error={fields.versionId.errors}
+      />
+      {section && section.versions.length === 0 ? (
+        <p className="text-label">
+          This period has every published practical of its department already.{' '}
+          <a className="link" href="/practicals">
+            Publish another one
+          </a>{' '}
+          first.
+        </p>
+      ) : null}
+      <TextField
+        label="due"
+        optional
+        {...getInputProps(fields.dueOn, { type: 'date' })}
+        key={fields.dueOn.key}
+        error={fields.dueOn.errors}
+        className="max-w-60"
+      />
+      <p className="max-w-[56ch] text-label text-ink-2">
+        Everyone in the period gets an attempt, also those who join while the sitting is open.
+      </p>
+      <div className="mt-2 flex flex-wrap gap-2">
+        <SubmitButton pendingLabel="opening it">open the sitting</SubmitButton>
+        <LinkButton href="/sittings">leave it</LinkButton>
+      </div>
+    </form>
+  );
+}
+
+function sayVersion({ title, number, latest, ownerName }: VersionChoice): string {
+  const rubric = latest ? `rubric ${number}` : `rubric ${number}, an older one`;
+  return `${title}, ${rubric}${ownerName ? `, by ${ownerName}` : ''}`;
+}
