@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react';
 import { NavLinks } from '@/components/ui/nav-links';
 import { PageTitle } from '@/components/ui/titles';
 import type { TaskStage } from '@/lib/data/own/list-tasks';
@@ -11,6 +12,8 @@ interface TaskHeadProps {
   attemptNumber: number;
   dueOn?: string | null;
   stage: TaskStage;
+  /** Beside the title: the score. */
+  aside?: ReactNode;
 }
 
 /** The name of the practical and where it was given; its sheets below, those that there are. */
@@ -22,6 +25,7 @@ export function TaskHead({
   attemptNumber,
   dueOn,
   stage,
+  aside,
 }: TaskHeadProps) {
   const home = `/my/${sittingId}`;
   const items = [
@@ -31,16 +35,21 @@ export function TaskHead({
   ];
   return (
     <header>
-      <PageTitle>{title}</PageTitle>
-      <p className="mt-1 text-label text-ink-2">
-        {sectionName}, period {period}
-        {attemptNumber > 1 ? `, attempt ${attemptNumber}` : ''}
-        {dueOn ? (
-          <>
-            , due <DayText day={dueOn} />
-          </>
-        ) : null}
-      </p>
+      <div className="flex items-start justify-between gap-4">
+        <div className="min-w-0">
+          <PageTitle>{title}</PageTitle>
+          <p className="mt-1 text-label text-ink-2">
+            {sectionName}, period {period}
+            {attemptNumber > 1 ? `, attempt ${attemptNumber}` : ''}
+            {dueOn ? (
+              <>
+                , due <DayText day={dueOn} />
+              </>
+            ) : null}
+          </p>
+        </div>
+        {aside}
+      </div>
       <NavLinks label="sheets of this practical" items={items} className="mt-1" />
     </header>
   );
