@@ -81,7 +81,7 @@ export const findSymmetric: ReviewRule = (rubric) =>
   eachSize(rubric, ({ over, under, beyondOver, beyondUnder, cap }) => {
     const changes = priceChanges(under, beyondUnder, cap);
     if (changes === '' || changes !== priceChanges(over, beyondOver, cap)) return null;
-    return 'over and under lose alike. If short should cost more than long, since wood cannot be put back, make under dearer.';
+    return 'over and under lose alike. If too small should cost more, since wood cannot be put back, make under dearer.';
   });
 
 export const findGrossInBand: ReviewRule = (rubric) =>
