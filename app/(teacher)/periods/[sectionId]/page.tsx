@@ -28,7 +28,7 @@ export default async function RosterPage({ params }: RosterPageProps) {
   return (
     <DeskPage
       title={section.name}
-      note={`${sayPeriod(section.period)}, ${sayStudents(here.length)}`}
+      note={`${tabs.length > 1 ? '' : `${sayPeriod(section.period)}, `}${sayStudents(here.length)}, ${section.termName}`}
       tabs={tabs.length > 1 ? <NavLinks label="periods of this term" items={tabs} /> : undefined}
       actions={here.length > 0 ? <RosterActions section={section} here={here} /> : undefined}
       titleBlock={rosterTitleBlock(section, here)}

@@ -12,8 +12,10 @@ interface LeftTableProps {
 export function LeftTable({ section, students }: LeftTableProps) {
   return (
     <details className="mt-6">
-      <summary className="inline-flex min-h-11 items-center gap-2 font-[620]">
-        {students.length === 1 ? 'one has left' : `${students.length} have left`}
+      <summary className="mb-2 py-2 marker:text-ink-2">
+        <span className="link font-[620]">
+          {students.length === 1 ? 'one has left' : `${students.length} have left`}
+        </span>
       </summary>
       <Table caption={`who has left ${saySection(section)}, by name`} className="max-w-[58rem]">
         <TableHead>

@@ -36,7 +36,7 @@ export function SectionForm({ choices }: { choices: SectionChoicesView }) {
       <div className="grid gap-4 sm:grid-cols-[minmax(0,1fr)_9rem]">
         <TextField
           label="section"
-          hint="As your school calls it: Woods 2."
+          hint={fields.name.errors ? undefined : 'As your school calls it: Woods 2.'}
           {...getInputProps(fields.name, { type: 'text' })}
           key={fields.name.key}
           autoComplete="off"
@@ -44,7 +44,7 @@ export function SectionForm({ choices }: { choices: SectionChoicesView }) {
         />
         <TextField
           label="period"
-          hint="Such as 3."
+          hint={fields.period.errors ? undefined : 'Such as 3.'}
           {...getInputProps(fields.period, { type: 'text' })}
           key={fields.period.key}
           autoComplete="off"

@@ -36,9 +36,8 @@ export function ColumnChoice({ state, looked: { roster, preview } }: ColumnChoic
     setColumns(columns.map((column, at) => (at === index ? columnOf(chosen) : column)));
   return (
     <details open={!layout.sure} className="max-w-[64rem]">
-      <summary className="inline-flex min-h-11 flex-wrap items-center gap-x-2 font-[620]">
-        columns
-        <span className="font-[480] text-ink-2">{read}</span>
+      <summary className="py-2 marker:text-ink-2">
+        <span className="link font-[620]">columns</span> read as {read}
       </summary>
       <div className="mt-2 grid gap-3">
         {state.refused['roster.layout'] ? <Refusal title={state.refused['roster.layout']} /> : null}

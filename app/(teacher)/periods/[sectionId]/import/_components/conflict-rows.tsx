@@ -24,34 +24,58 @@ export function ConflictRows({ rows, choices, refused, choose }: ConflictRowsPro
         {count(rows.length, 'one row needs your word', 'rows need your word')}
       </Heading>
       {rows.map((row) => (
-        <fieldset
+        <ConflictRow
           key={row.line}
-          aria-describedby={refused[`choices.${row.line}`] ? `choice-${row.line}-error` : undefined}
-          className="grid gap-x-8 border-b border-hair py-3 md:grid-cols-[minmax(0,1fr)_minmax(0,1fr)]"
-        >
-          <legend className="float-left w-full font-[520] md:w-[calc(50%-1rem)]">
-            <span className="tnum mr-3 text-ink-2">line {row.line}</span>
-            {sayConflict(row)}
-          </legend>
-          <div className="md:col-start-2">
-            {row.choices.map((choice) => (
-              <RadioField
-                key={choice}
-                name={`choice-${row.line}`}
-                label={sayChoice(row, choice)}
-                checked={choices[row.line] === choice}
-                onChange={() => choose(row.line, choice)}
-              />
-            ))}
-            {refused[`choices.${row.line}`]?.map((message) => (
-              <p key={message} id={`choice-${row.line}-error`} className="text-label font-[580] text-refuse">
-                {message}
-              </p>
-            ))}
-          </div>
-        </fieldset>
+          row={row}
+          chosen={choices[row.line]}
+          refused={refused[`choices.${row.line}`]}
+          choose={(choice) => choose(row.line, choice)}
+        />
       ))}
     </section>
+  );
+}
+
+interface ConflictRowProps {
+  row: RosterRowView;
+  chosen: RosterChoice | undefined;
+  refused: string[] | undefined;
+  choose: (choice: RosterChoice) => void;
+}
+
+function ConflictRow({ row, chosen, refused, choose }: ConflictRowProps) {
+  const id = `conflict-${row.line}`;
+  return (
+    <fieldset
+      aria-describedby={refused ? `${id}-said ${id}-error` : `${id}-said`}
+      className="border-b border-hair py-3"
+    >
+      <legend className="sr-only">line {row.line}</legend>
+      <div className="grid gap-x-12 gap-y-2 md:grid-cols-2">
+        <div className="grid grid-cols-[4rem_minmax(0,1fr)] content-start py-2">
+          <span className="tnum text-ink-2">line {row.line}</span>
+          <p id={`${id}-said`} className="font-[520]">
+            {sayConflict(row)}
+          </p>
+        </div>
+        <div>
+          {row.choices.map((choice) => (
+            <RadioField
+              key={choice}
+              name={id}
+              label={sayChoice(row, choice)}
+              checked={chosen === choice}
+              onChange={() => choose(choice)}
+            />
+          ))}
+          {refused ? (
+            <p id={`${id}-error`} className="text-label font-[580] text-refuse">
+              {refused.join(' ')}
+            </p>
+          ) : null}
+        </div>
+      </div>
+    </fieldset>
   );
 }
 

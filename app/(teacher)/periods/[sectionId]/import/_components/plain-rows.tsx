@@ -16,8 +16,10 @@ export function PlainRows({ groups: { coming, unchanged } }: { groups: RowGroups
       ) : null}
       {unchanged.length > 0 ? (
         <details>
-          <summary className="inline-flex min-h-11 items-center font-[620]">
-            {count(unchanged.length, 'one is', 'are')} on the roster already
+          <summary className="py-2 marker:text-ink-2">
+            <span className="link font-[620]">
+              {count(unchanged.length, 'one is', 'are')} on the roster already
+            </span>
           </summary>
           <RowTable rows={unchanged} caption="on the roster already" />
         </details>

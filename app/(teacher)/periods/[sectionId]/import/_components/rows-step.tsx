@@ -31,13 +31,9 @@ export function RowsStep({ state, looked }: RowsStepProps) {
   const sure = preview.layout.sure;
   const lookAgain = () => state.lookAtText(roster);
   return (
-    <div className="grid gap-8">
+    <div className="grid gap-6">
       <header className="grid gap-2">
-        <Verdict role="status">
-          {sure
-            ? sayGroups(groups)
-            : 'Which column holds what? Your word is needed before the rows are read.'}
-        </Verdict>
+        <Verdict role="status">{sure ? sayGroups(groups) : 'Say which column holds what.'}</Verdict>
         <p className="text-label text-ink-2">
           {fileName ? `From ${fileName}. ` : ''}
           {note ? `${note} ` : ''}Nothing is written yet.

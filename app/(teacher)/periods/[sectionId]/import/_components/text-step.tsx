@@ -10,12 +10,7 @@ import type { RosterImportState } from './use-roster-import';
 
 const HINTS = {
   names: 'One name a line: “Abara, Chidi” or “Chidi Abara”.',
-  csv: 'One student a row. A first row that names the columns helps; without one you are asked.',
-};
-
-const EXAMPLES = {
-  names: 'Abara, Chidi\nAguilar, Renata',
-  csv: 'ID;family name;given name\n00417;Abara;Chidi',
+  csv: 'One student a row, such as “00417;Abara;Chidi”. A first row may name the columns; without one you are asked.',
 };
 
 interface TextStepProps {
@@ -54,7 +49,6 @@ export function TextStep({ state, madeIdRule }: TextStepProps) {
           name="text"
           rows={12}
           spellCheck={false}
-          placeholder={EXAMPLES[kind]}
           value={text}
           onChange={(event) => state.setText(event.currentTarget.value)}
           hint={`${HINTS[kind]} ${madeIdRule}`}
