@@ -41,8 +41,6 @@ const roundStudentSchema = z.strictObject({
   familyName: z.string(),
 });
 
-export type RoundStudent = z.infer<typeof roundStudentSchema>;
-
 /** A stored event with the device that made it: what a round is rebuilt from. */
 export const storedEventSchema = readingEventSchema.extend({ deviceId: uuid });
 

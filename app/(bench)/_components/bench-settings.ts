@@ -1,10 +1,8 @@
 import { z } from 'zod';
 
 export const ENTRIES = ['rule', 'keypad', 'caliper'] as const;
-export type Entry = (typeof ENTRIES)[number];
 
 export const LIGHTS = ['auto', 'light', 'dark', 'glare'] as const;
-export type Light = (typeof LIGHTS)[number];
 
 export const IDLE_MINUTES = [2, 5, 10, 20, 60] as const;
 

@@ -63,7 +63,7 @@ function Side({ event }: { event: BenchEvent }) {
 /** Missing on one tablet, measured on the other. */
 function PieceSides({ cell, events }: { cell: Cell; events: readonly BenchEvent[] }) {
   const { view, press } = useBench();
-  const { maySettle, rubric } = view.state.plan;
+  const { maySettle } = view.state.plan;
   const sizes = events.filter(({ value }) => value.kind !== 'state');
   const states = events.filter(({ value }) => value.kind === 'state' || value.kind === 'cleared');
   const [measured] = sizes;
@@ -93,17 +93,7 @@ function PieceSides({ cell, events }: { cell: Cell; events: readonly BenchEvent[
           className={className}
         >
           <span className="narrow text-[28px] leading-8 font-[640]">
-            here,{' '}
-            {sizes.map((event, index) => (
-              <span key={event.id}>
-                {index > 0 ? ' × ' : ''}
-                {event.value.kind === 'value' ? (
-                  <LengthText ticks={event.value.ticks} unit={rubric.unit} />
-                ) : (
-                  event.value.kind
-                )}
-              </span>
-            ))}
+            here, <MeasuredSizes events={sizes} />
           </span>
           <Source event={measured} />
         </button>
@@ -111,6 +101,18 @@ function PieceSides({ cell, events }: { cell: Cell; events: readonly BenchEvent[
       <span className="sr-only">{cell.what}</span>
     </>
   );
+}
+
+function MeasuredSizes({ events }: { events: readonly BenchEvent[] }) {
+  const { view } = useBench();
+  const { unit } = view.state.plan.rubric;
+  if (events.every(({ value }) => value.kind === 'gauged')) return 'gauged';
+  return events.map(({ id, value }, index) => (
+    <span key={id}>
+      {index > 0 ? ' × ' : ''}
+      {value.kind === 'value' ? <LengthText ticks={value.ticks} unit={unit} /> : value.kind}
+    </span>
+  ));
 }
 
 function Source({ event }: { event: BenchEvent }) {

@@ -11,7 +11,7 @@ import { useUnsentFile } from './use-unsent-file';
 
 /** What this tablet has kept, what the server has, what it refused, and the unsent readings as a file. */
 export function KeptPanel() {
-  const { view, open, practice } = useBench();
+  const { view, session, open, practice } = useBench();
   const { counts, sending, parked, failure } = view;
   const waiting = counts.kept - counts.sent - parked.length;
   return (
@@ -32,9 +32,12 @@ export function KeptPanel() {
         </BenchKey>
       </div>
       {failure ? (
-        <p role="alert" className="border-l-edge border-refuse pl-3 text-lead text-refuse">
-          {failure}
-        </p>
+        <div role="alert" className="border-l-edge border-refuse pl-3 text-lead text-refuse">
+          <p>{failure}</p>
+          <Button className="mt-2" onClick={session.forgetFailure}>
+            I have seen it
+          </Button>
+        </div>
       ) : null}
       {parked.length > 0 ? <Refused parked={parked} /> : null}
       {practice ? null : <UnsentFile />}

@@ -9,11 +9,14 @@ import { findPiece } from '@/lib/round/pieces';
 import type { RoundState, Said } from '@/lib/round/types';
 import { useBench } from './bench-context';
 
+const NOT_KEPT = 'Not kept: this tablet could not write. Look under “kept”.';
+
 /** What the last press did, in one line, and aloud to a screen reader. */
 export function SaidLine() {
   const { view } = useBench();
-  const { said, plan } = view.state;
+  const { plan } = view.state;
   const { unit } = plan.rubric;
+  const said: Said | null = view.failure === null ? view.state.said : { kind: 'refused', text: NOT_KEPT };
   return (
     <>
       <p
@@ -46,7 +49,7 @@ function Shown({ said, unit }: { said: Said; unit: Unit }) {
     case 'doubt':
       return (
         <>
-          <LengthText ticks={said.ticks} unit={unit} /> is past the gross limit. The same again keeps it.
+          <LengthText ticks={said.ticks} unit={unit} />: past the gross limit, press again
         </>
       );
     case 'zero':

@@ -33,7 +33,9 @@ export function TargetPanel() {
   const crowded = free < NOTE_WIDTH;
   return (
     <section aria-label="the size to read" className="relative flex min-w-0 flex-1 flex-col lg:block">
-      {crowded ? <Hold axis={axis} ticks={target} unit={rubric.unit} /> : null}
+      {crowded && width - number.width > HOLD_WIDTH ? (
+        <Hold axis={axis} ticks={target} unit={rubric.unit} />
+      ) : null}
       <div className="max-lg:hidden lg:absolute lg:top-0 lg:left-2" style={{ width: drawn }}>
         <PartDrawing
           size={place.line.target}
@@ -67,18 +69,21 @@ export function TargetPanel() {
   );
 }
 
-/** Where to hold the instrument, in a corner of its own. */
+/** Where to hold the instrument, beside the number; where there is no room for it the drawing alone shows it. */
 function Hold({ axis, ticks, unit }: { axis: Axis; ticks: number; unit: Unit }) {
-  const lines = howToHold(axis, instrumentFor(ticks, unit));
+  const [first, second] = howToHold(axis, instrumentFor(ticks, unit));
   return (
-    <p aria-hidden="true" className="absolute bottom-0 left-2 text-label text-ink-2 max-lg:hidden">
-      {lines.join(' ')}
+    <p aria-hidden="true" className="absolute top-10 left-2 text-label text-ink-2 max-lg:hidden">
+      {first}
+      <br />
+      {second}
     </p>
   );
 }
 
 const MOST_COLUMNS = 9;
 const NOTE_WIDTH = 190;
+const HOLD_WIDTH = 185;
 const HEADING_LETTER = 12.2;
 const WIDEST_DRAWING = 560;
 const WIDEST_NUMBER = 460;
