@@ -31,7 +31,7 @@ export default async function RosterPage({ params }: RosterPageProps) {
       note={`${tabs.length > 1 ? '' : `${sayPeriod(section.period)}, `}${sayStudents(here.length)}, ${section.termName}`}
       tabs={tabs.length > 1 ? <NavLinks label="periods of this term" items={tabs} /> : undefined}
       actions={here.length > 0 ? <RosterActions section={section} here={here} /> : undefined}
-      titleBlock={rosterTitleBlock(section, here)}
+      titleBlock={here.length > 0 ? rosterTitleBlock(section, here) : undefined}
     >
       {here.length > 0 ? (
         <RosterTable section={section} students={here} />

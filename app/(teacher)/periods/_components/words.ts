@@ -9,6 +9,7 @@ export function sayPeriod(period: string): string {
 }
 
 export function sayStudents(count: number): string {
+  if (count === 0) return 'no students';
   return count === 1 ? 'one student' : `${count} students`;
 }
 

@@ -4,14 +4,15 @@ import { sayName } from '../../../_components/words';
 import { count, type RowGroups } from './row-groups';
 
 /** The rows that ask nothing: who comes in, and, folded away, who is there already. */
-export function PlainRows({ groups: { coming, unchanged } }: { groups: RowGroups }) {
+export function PlainRows({ groups: { coming, unchanged, conflicts, problems } }: { groups: RowGroups }) {
+  const alone = conflicts.length + problems.length === 0;
   return (
     <>
       {coming.length > 0 ? (
         <RowTable
           rows={coming}
           caption={count(coming.length, 'one student comes in', 'students come in')}
-          showCaption
+          showCaption={!alone}
         />
       ) : null}
       {unchanged.length > 0 ? (

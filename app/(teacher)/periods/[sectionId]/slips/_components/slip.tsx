@@ -11,10 +11,13 @@ interface SlipProps {
 export function Slip({ slip, place, schoolCode, signInAt }: SlipProps) {
   const { givenName, familyName, localId, words } = slip;
   return (
-    <li className="flex min-h-[48mm] break-inside-avoid flex-col border-r border-b border-dashed border-rule p-4 print:border-ink">
+    <li className="flex min-h-[46mm] break-inside-avoid flex-col border-r border-b border-dashed border-rule p-4 print:border-ink print:py-2">
       <p className="text-lead font-[660]">{[givenName, familyName].filter(Boolean).join(' ')}</p>
       <p className="text-small text-ink-2">{place}</p>
-      <p className="my-2 border-y border-ink py-1.5 font-title text-[1.375rem] leading-7 font-[580]">
+      <p
+        data-testid="words"
+        className="my-2 border-y border-ink py-1.5 font-title text-[1.375rem] leading-7 font-[580]"
+      >
         {words}
       </p>
       <dl className="tnum mt-auto grid grid-cols-[auto_minmax(0,1fr)] gap-x-3 text-label">
