@@ -10,8 +10,9 @@ import { KeptAndSent } from './kept-and-sent';
 import { useWide } from './use-wide';
 
 function sizeOfName(name: string, crowded: boolean): string {
-  if (!crowded || name.length <= 17) return 'text-[31px]';
-  return name.length <= 22 ? 'text-[25px]' : 'text-[20px]';
+  const short = crowded ? 17 : 22;
+  if (name.length <= short) return 'text-[31px]';
+  return name.length <= short + 5 ? 'text-[25px]' : 'text-[20px]';
 }
 
 /** The head of the bench: whose pieces these are, the ways to enter a reading, and what has been kept. */

@@ -38,10 +38,10 @@ export class PracticeRound implements RoundStore {
   }
 
   async savePlace(): Promise<void> {}
-  onEvents = () => () => {};
-  onParked = () => () => {};
-  onSending = () => () => {};
-  onInHand = () => () => {};
+  onEvents: RoundStore['onEvents'] = () => () => {};
+  onParked: RoundStore['onParked'] = () => () => {};
+  onSending: RoundStore['onSending'] = () => () => {};
+  onInHand: RoundStore['onInHand'] = () => () => {};
   takeInHand(): void {}
   async retryParked(): Promise<void> {}
   async dropParked(): Promise<void> {}
