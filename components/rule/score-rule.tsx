@@ -15,7 +15,9 @@ interface ScoreRuleProps {
 
 const WIDTH = 358;
 const EDGE = 32;
-const FOOT = 78;
+const BODY = 46;
+/** Room for a second row of words where both figures' would stand on one side. */
+const LIFT = 22;
 const PAD = 18;
 const SHORTEST = 25;
 
@@ -42,6 +44,12 @@ export function ScoreRule({
   const marks = Array.from({ length: to - from + 1 }, (_, index) => from + index);
   const thin = to - from > 40;
   const benchFirst = bench !== null && (own === null || bench <= own);
+  const [benchText, ownText] = [textOf(benchLabel, bench), textOf(ownLabel, own)];
+  const collide =
+    bench !== null &&
+    own !== null &&
+    isLeft(place(bench / 100), benchFirst, benchText) === isLeft(place(own / 100), !benchFirst, ownText);
+  const edge = EDGE + (collide ? LIFT : 0);
   const words = [
     bench === null ? null : `${benchLabel} ${pointsAsText(bench)}`,
     own === null ? null : `${ownLabel} ${pointsAsText(own)}`,
@@ -49,49 +57,46 @@ export function ScoreRule({
   ];
   return (
     <svg
-      viewBox={`0 0 ${WIDTH} ${FOOT + 2}`}
+      viewBox={`0 0 ${WIDTH} ${edge + BODY + 2}`}
       role="img"
       aria-label={words.filter(Boolean).join(', ')}
       className={classNames('block h-auto w-full', className)}
     >
       <rect
         x={1}
-        y={EDGE}
+        y={edge}
         width={WIDTH - 2}
-        height={FOOT - EDGE}
+        height={BODY}
         className="fill-plate stroke-ink [stroke-width:var(--pen-outline)]"
       />
-      <path d={`M0 ${EDGE}H${WIDTH}`} className="stroke-ink [stroke-width:var(--pen-edge)]" />
+      <path d={`M0 ${edge}H${WIDTH}`} className="stroke-ink [stroke-width:var(--pen-edge)]" />
       {marks.map((mark) => (
-        <ScoreMark key={mark} mark={mark} x={place(mark)} thin={thin} />
+        <ScoreMark key={mark} mark={mark} x={place(mark)} thin={thin} edge={edge} />
       ))}
       {bench === null ? null : (
-        <Figure
-          kind="bench"
-          x={place(bench / 100)}
-          before={benchFirst}
-          text={`${benchLabel} ${pointsAsText(bench)}`}
-        />
+        <Figure kind="bench" x={place(bench / 100)} before={benchFirst} text={benchText} edge={edge} />
       )}
       {own === null ? null : (
         <Figure
           kind="own"
           x={place(own / 100)}
           before={!benchFirst && bench !== null}
-          text={`${ownLabel} ${pointsAsText(own)}`}
+          text={ownText}
+          edge={edge}
+          lifted={collide}
         />
       )}
     </svg>
   );
 }
 
-function ScoreMark({ mark, x, thin }: { mark: number; x: number; thin: boolean }) {
+function ScoreMark({ mark, x, thin, edge }: { mark: number; x: number; thin: boolean; edge: number }) {
   const [ten, five] = [mark % 10 === 0, mark % 5 === 0];
   if (thin && !five) return null;
   return (
     <>
       <path
-        d={`M${x} ${EDGE}v${ten ? 20 : five ? 16 : 9}`}
+        d={`M${x} ${edge}v${ten ? 20 : five ? 16 : 9}`}
         className={classNames(
           'stroke-ink',
           five ? '[stroke-width:var(--pen-outline)]' : '[stroke-width:var(--pen-inside)]',
@@ -100,7 +105,7 @@ function ScoreMark({ mark, x, thin }: { mark: number; x: number; thin: boolean }
       {(thin ? ten : five) ? (
         <text
           x={x}
-          y={FOOT - 7}
+          y={edge + BODY - 7}
           fontSize={18}
           className={classNames('tnum fill-ink [text-anchor:middle]', ten ? 'font-[660]' : 'font-[440]')}
         >
@@ -111,26 +116,35 @@ function ScoreMark({ mark, x, thin }: { mark: number; x: number; thin: boolean }
   );
 }
 
-/** A label that would run off the paper turns to the other side. */
-function Figure({
-  kind,
-  x,
-  before,
-  text,
-}: {
+function textOf(label: string, points: Points | null): string {
+  return points === null ? '' : `${label} ${pointsAsText(points)}`;
+}
+
+/** Whether a label stands left of its pointer: it turns to the other side where it would run off the paper. */
+function isLeft(x: number, before: boolean, text: string): boolean {
+  const room = text.length * 8.2 + 20;
+  return before ? x - room > 0 : x + room > WIDTH;
+}
+
+interface FigureProps {
   kind: 'bench' | 'own';
   x: number;
   before: boolean;
   text: string;
-}) {
-  const room = text.length * 8.2 + 20;
-  const left = before ? x - room > 0 : x + room > WIDTH;
+  edge: number;
+  /** Written in the row above the other's. */
+  lifted?: boolean;
+}
+
+function Figure({ kind, x, before, text, edge, lifted = false }: FigureProps) {
+  const left = isLeft(x, before, text);
+  const aside = lifted ? -9 : 15;
   return (
     <>
-      <CrowsFoot kind={kind} x={x} y={EDGE - 2} size={19} />
+      <CrowsFoot kind={kind} x={x} y={edge - 2} size={19} />
       <text
-        x={left ? x - 15 : x + 15}
-        y={EDGE - 8}
+        x={left ? x - aside : x + aside}
+        y={edge - 8 - (lifted ? LIFT : 0)}
         fontSize={16}
         className={classNames(
           'fill-ink',

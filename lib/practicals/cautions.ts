@@ -1,6 +1,9 @@
-/** Said before every list of cautions: the product never calls a cut safe. */
-export const CAUTION_PREFACE =
-  'The machine’s manual, your school’s rules, local codes and a qualified instructor come first. These are the usual cautions, not a lesson.';
+/** Said wherever a cut is spoken of: the product never calls one safe. */
+export const COMES_FIRST =
+  'The machine’s manual, your school’s rules, local codes and a qualified instructor come first.';
+
+/** Said before every list of cautions. */
+export const CAUTION_PREFACE = `${COMES_FIRST} These are the usual cautions, not a lesson.`;
 
 /** Common practice in school shops; the figures are each school's own to set. */
 export const CAUTIONS: readonly string[] = [

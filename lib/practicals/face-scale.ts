@@ -28,7 +28,7 @@ export function faceScale(
   const steps = STEPS[rubric.unit].filter((step) => fine || step >= PLAIN[rubric.unit]);
   const graduation =
     steps.find((step) => Math.ceil(last / step) + 1 <= MOST_EACH_SIDE) ?? steps.at(-1) ?? PLAIN[rubric.unit];
-  const reach = Math.max(last + graduation, ...also.map(Math.abs));
+  const reach = Math.max(last, ...also.map(Math.abs)) + graduation;
   const span = Math.min(MOST_EACH_SIDE, Math.max(FEWEST_EACH_SIDE, Math.ceil(reach / graduation)));
   return { graduation, span };
 }

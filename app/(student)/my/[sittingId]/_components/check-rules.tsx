@@ -10,7 +10,7 @@ export function CheckRules({ rubric }: { rubric: Rubric }) {
         <CheckRule key={`${where}/${check.id}`} rubric={rubric} check={check} where={where} />
       ))}
       {rubric.workChecks.map((check) => (
-        <CheckRule key={check.id} rubric={rubric} check={check} where="looked at once, for the whole work" />
+        <CheckRule key={check.id} rubric={rubric} check={check} where="Looked at once, for the whole work" />
       ))}
     </>
   );
@@ -25,7 +25,7 @@ function CheckRule({ rubric, check, where }: { rubric: Rubric; check: Check; whe
         {where}.{' '}
         {costly.map(({ label, lose }) => (
           <span key={label}>
-            {label}: loses <PointsInBoth rubric={rubric} points={lose} />.{' '}
+            “{label}” loses <PointsInBoth rubric={rubric} points={lose} />.{' '}
           </span>
         ))}
         {costly.length === 0 ? 'It costs nothing.' : null}
@@ -34,7 +34,7 @@ function CheckRule({ rubric, check, where }: { rubric: Rubric; check: Check; whe
   );
 }
 
-/** Each check once, with the parts it is looked at on. */
+/** Each check once, with the parts it is Looked at on. */
 function checkGroups(rubric: Rubric): { check: Check; where: string }[] {
   const groups = new Map<string, { check: Check; labels: string[] }>();
   for (const { label, checks } of rubric.lines) {
@@ -49,7 +49,7 @@ function checkGroups(rubric: Rubric): { check: Check; where: string }[] {
     check,
     where:
       labels.length === rubric.lines.length
-        ? 'looked at on every piece'
-        : `looked at on ${labels.join(', ')}`,
+        ? 'Looked at on every piece'
+        : `Looked at on ${labels.join(', ')}`,
   }));
 }

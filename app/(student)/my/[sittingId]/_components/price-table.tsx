@@ -53,7 +53,7 @@ export function PriceTable({ rubric, rule }: PriceTableProps) {
       <p className="mt-2 text-label text-ink-2">
         {example ? (
           <>
-            <PointsInBoth rubric={rubric} points={Math.max(example.under, example.over)} />.{' '}
+            <PointsInBoth rubric={rubric} points={Math.max(example.under, example.over)} sentence />.{' '}
           </>
         ) : null}
         {rubric.margin > 0 ? (

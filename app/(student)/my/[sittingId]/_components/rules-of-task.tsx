@@ -18,7 +18,7 @@ export function RulesOfTask({ rubric, policies }: RulesOfTaskProps) {
   return (
     <section>
       <Heading className="border-b-outline border-ink pb-1">Besides the sizes</Heading>
-      <dl className="[&>dd]:max-w-[62ch] [&>dd]:border-b [&>dd]:border-hair [&>dd]:pb-3 [&>dt]:pt-3 [&>dt]:font-[660]">
+      <dl className="[&>dd]:max-w-[62ch] [&>dd]:pb-3 [&>dt]:border-hair [&>dt]:pt-3 [&>dt]:font-[660] [&>dt:not(:first-child)]:border-t">
         <CheckRules rubric={rubric} />
         <dt>a missing piece</dt>
         <dd>

@@ -8,7 +8,7 @@ import type { OwnSession, OwnView } from '@/lib/sync/client/own-session';
 /** How many entries are kept, how many of them the server has, and what holds up the rest. */
 export function KeptLine({ view }: { view: OwnView }) {
   return (
-    <p className="tnum flex gap-2 text-label" role="status">
+    <p className="tnum mt-2 flex gap-2 text-label" role="status">
       <span>
         kept <strong data-testid="kept">{view.kept}</strong>
       </span>

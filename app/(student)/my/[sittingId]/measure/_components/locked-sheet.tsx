@@ -15,10 +15,12 @@ interface LockedSheetProps {
   record: OwnRecord;
   rubric: Rubric;
   sent: boolean;
+  /** The results are out. */
+  over: boolean;
 }
 
 /** The receipt of a lock, large enough to be read off the screen, and what the own readings would score. */
-export function LockedSheet({ lock, record, rubric, sent }: LockedSheetProps) {
+export function LockedSheet({ lock, record, rubric, sent, over }: LockedSheetProps) {
   const sheet = predictedSheet(rubric, record);
   const explanation = explainScore(rubric, sheet, 0);
   const unreadable = record.derived.unreadable.length;
@@ -48,8 +50,8 @@ export function LockedSheet({ lock, record, rubric, sent }: LockedSheetProps) {
             <Heading>Your predicted score</Heading>
             <p className="max-w-[40ch] text-label text-ink-2">
               {pointsAsText(explanation.kept.ofTotal)} before rounding, by your own readings
-              {unreadable > 0 ? `; ${unreadable} you couldn’t read cost nothing here` : ''}. The bench has not
-              measured yet.
+              {unreadable > 0 ? `; ${unreadable} you couldn’t read cost nothing here` : ''}.
+              {over ? '' : ' The bench has not measured yet.'}
             </p>
           </div>
           <p className="tnum text-score leading-none font-[680]" data-testid="predicted">

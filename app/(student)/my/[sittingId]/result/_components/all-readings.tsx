@@ -9,7 +9,7 @@ export function AllReadings({ rubric, pairs }: { rubric: Rubric; pairs: readonly
   return (
     <details>
       <summary className="min-h-11 cursor-pointer border-b-outline border-ink py-2 text-heading">
-        All readings, yours beside the bench’s
+        All readings side by side
       </summary>
       <Table caption="all readings">
         <TableHead>

@@ -1,5 +1,5 @@
 import { LengthText } from '@/components/ui/fraction';
-import { CAUTION_PREFACE } from '@/lib/practicals/cautions';
+import { COMES_FIRST } from '@/lib/practicals/cautions';
 import { FEWEST_LENGTHS, type LengthPattern } from '@/lib/practicals/length-pattern';
 import type { Rubric } from '@/lib/scoring';
 
@@ -36,7 +36,7 @@ export function PatternNote({ pattern, rubric }: { pattern: LengthPattern; rubri
   const words = inWords(count);
   return (
     <div className="border-y border-ink py-3">
-      <p className="text-heading text-balance">
+      <p className="text-heading">
         {words.charAt(0).toUpperCase()}
         {words.slice(1)} of {inWords(of)} lengths are {leans}
         {byAtLeast ? (
@@ -54,7 +54,7 @@ export function PatternNote({ pattern, rubric }: { pattern: LengthPattern; rubri
           It is said when at least {inWords(FEWEST_LENGTHS)} lengths were read by number and at least four of
           five of them are off to the same side by more than the reading margin (
           <LengthText ticks={rubric.margin} unit={rubric.unit} withUnit />
-          ). Here {short} of {of} are short and {long} long. {CAUTION_PREFACE}
+          ). Here {short} of {of} are short and {long} long. {COMES_FIRST}
         </p>
       </details>
     </div>
