@@ -12,11 +12,36 @@ import { makeHand, makePieces } from './wood';
 
 const ATTEMPT = { lineId: '', ordinal: 0 };
 
+const UNSENT = 7;
+
 /**
  * The disorder of real life, in the sittings where it happened. Takes the events of a tidy round and gives back those
  * of the round as it was.
  */
 export async function addDisorder(
+  tx: Transaction,
+  random: Random,
+  school: SeededSchool,
+  sitting: SeededSitting,
+  events: SeedEvent[],
+): Promise<SeedEvent[]> {
+  const all = numberAnew(await disorder(tx, random, school, sitting, events));
+  return sitting.plan.state === 'under way' ? leaveUnsent(tx, random, school, sitting, all) : all;
+}
+
+/** Numbers each device's events without gaps: a gap would say that readings have not arrived. */
+function numberAnew(events: SeedEvent[]): SeedEvent[] {
+  const used = new Map<string, number>();
+  return [...events]
+    .sort((a, b) => a.sequence - b.sequence)
+    .map((event) => {
+      const sequence = (used.get(event.deviceId) ?? 0) + 1;
+      used.set(event.deviceId, sequence);
+      return { ...event, sequence };
+    });
+}
+
+async function disorder(
   tx: Transaction,
   random: Random,
   school: SeededSchool,
@@ -40,7 +65,6 @@ export async function addDisorder(
     case 'cf5 desk-caddy-okonjo':
       return twoGraders(random, school, sitting, zeroError(random, sitting, events));
     case 'cf3 stair-tower':
-      await leaveUnsent(tx, random, school, sitting);
       return replaceBy(events, sitting.attempts[2], (attempt) => standing(teacher(), attempt, 'absent'));
     default:
       return events;
@@ -234,19 +258,25 @@ async function redo(
   return [...events, ...again];
 }
 
-/** A tablet that went into the cupboard with readings on it: it has a student in hand and has not been heard of since. */
+/** A tablet that went into the cupboard with readings on it: numbers it has used have not arrived. */
 async function leaveUnsent(
   tx: Transaction,
   random: Random,
   school: SeededSchool,
   sitting: SeededSitting,
-): Promise<void> {
-  const attempt = sitting.attempts[16];
+  events: SeedEvent[],
+): Promise<SeedEvent[]> {
+  const attempt = sitting.attempts[14];
+  const [line] = sitting.version.rubric.lines;
   const aide = school.staff.get('pell');
-  if (!attempt || !aide) throw new Error('no tablet to forget');
+  if (!attempt || !line || !aide) throw new Error('no tablet to forget');
   const since = new Date(morningOf(sitting.plan.day).getTime() + 50 * 60_000);
+  const recorder = new Recorder(random, random.uuid(), aide, 'bench', since);
+  const cell = { lineId: line.id, ordinal: 1, what: 'thickness' };
+  const arrived = recorder.record(attempt.id, cell, { kind: 'gauged' });
   await tx.insert(inHand).values({
-    ...{ schoolId: school.id, sittingId: sitting.id, deviceId: random.uuid(), personId: aide },
+    ...{ schoolId: school.id, sittingId: sitting.id, deviceId: arrived.deviceId, personId: aide },
     ...{ attemptId: attempt.id, since, seenAt: since },
   });
+  return [...events, { ...arrived, sequence: arrived.sequence + UNSENT }];
 }

@@ -56,11 +56,6 @@ export class Recorder {
       authorId,
     };
   }
-
-  /** Numbers that this device has used for readings that never arrived. */
-  skip(count: number): void {
-    this.sequence += count;
-  }
 }
 
 export interface Reader {
