@@ -16,6 +16,17 @@ export type Screen = { role: ScreenRole; name: string; status?: number } & (
   | { go: (page: Page) => Promise<void> }
 );
 
+/** Opens the first of today's rounds, with a way of entry where one is named. */
+async function openBench(page: Page, entry?: 'keypad' | 'caliper'): Promise<void> {
+  await page.goto('/round');
+  await page
+    .getByRole('link', { name: /^(begin|go on)/ })
+    .first()
+    .click();
+  await page.locator('[data-cell]').first().waitFor();
+  if (entry) await page.getByRole('button', { name: entry, exact: true }).click();
+}
+
 export const SCREENS: Screen[] = [
   { role: 'public', name: 'sign-in', path: '/sign-in' },
   {
@@ -56,4 +67,17 @@ export const SCREENS: Screen[] = [
   { role: 'admin', name: 'account', path: '/account' },
   { role: 'student', name: 'account', path: '/account' },
   { role: 'head', name: 'roles', path: '/account/role' },
+  { role: 'teacher', name: 'rounds', path: '/round' },
+  { role: 'aide', name: 'rounds', path: '/round' },
+  { role: 'teacher', name: 'bench-rule', go: (page) => openBench(page) },
+  { role: 'teacher', name: 'bench-keypad', go: (page) => openBench(page, 'keypad') },
+  { role: 'teacher', name: 'bench-caliper', go: (page) => openBench(page, 'caliper') },
+  {
+    role: 'teacher',
+    name: 'bench-students',
+    go: async (page) => {
+      await openBench(page);
+      await page.getByRole('button', { name: /^student/ }).click();
+    },
+  },
 ];
