@@ -1,7 +1,7 @@
 import 'server-only';
 import { createHash } from 'node:crypto';
 import type { Transaction } from '@/db/client';
-import { insertMissingAttempts } from '@/db/queries/rounds';
+import { insertMissingAttempts, lockAttempts } from '@/db/queries/rounds';
 import {
   type AttemptRow,
   type PublicationRow,
@@ -46,6 +46,8 @@ export async function gatherResults(tx: Transaction, sitting: SittingRow): Promi
   const { schoolId, sittingId, sectionId } = sitting;
   if (sitting.state === 'open') await insertMissingAttempts(tx, schoolId, sittingId, sectionId);
   const ids = (await selectAttempts(tx, schoolId, [sittingId])).map(({ attemptId }) => attemptId);
+  // A reading that is being kept meanwhile is waited for, so that no sheet is written without it.
+  if (ids.length > 0) await lockAttempts(tx, schoolId, sittingId, ids);
   await rebuildSheets(tx, schoolId, ids);
   const late = await lateLocks(tx, sitting);
   const latest = await loadLatest(tx, sitting);
