@@ -10,11 +10,11 @@ import { emptyDraft } from '@/lib/practicals/empty-draft';
 const titled = (title: string) => emptyDraft('in', title);
 
 /** A server that answers as it is told, or keeps everything under the next revision. */
-function makeDesk(answers: (SaveReply | 'gone')[] = []) {
+function makeDesk(answers: (SaveReply | 'gone')[] = [], opened = 1) {
   const saves: { revision: number; title: string }[] = [];
   const states: KeepState['kind'][] = [];
   let copy: LocalCopy | null = null;
-  const keeper = new DraftKeeper(1, {
+  const keeper = new DraftKeeper(opened, {
     async save(revision, content): Promise<SaveReply> {
       saves.push({ revision, title: content.title });
       const answer = answers.shift();
@@ -113,16 +113,48 @@ describe('after a reload', () => {
 
   it('sends what this device kept, when nothing else was kept since', async () => {
     const { keeper, saves } = makeDesk();
-    keeper.bringBack({ revision: 1, content: titled('typed before') }, opened);
+    keeper.bringBack({ revision: 1, content: titled('typed before'), sent: null }, opened);
     await vi.advanceTimersByTimeAsync(1_000);
     expect(saves).toEqual([{ revision: 1, title: 'typed before' }]);
   });
 
   it('asks first, when something else was', async () => {
     const { keeper, saves, states } = makeDesk();
-    keeper.bringBack({ revision: 1, content: titled('typed before') }, { ...opened, revision: 4 });
+    keeper.bringBack(
+      { revision: 1, content: titled('typed before'), sent: null },
+      { ...opened, revision: 4 },
+    );
     await vi.advanceTimersByTimeAsync(60_000);
     expect(saves).toEqual([]);
     expect(states).toEqual(['stale']);
+  });
+
+  it('knows its own draft again when a save arrived whose answer it never heard', async () => {
+    const arrived = { ...opened, content: titled('typed before'), revision: 2 };
+    const all = makeDesk([], 2);
+    all.keeper.bringBack(
+      { revision: 1, content: titled('typed before'), sent: titled('typed before') },
+      arrived,
+    );
+    await vi.advanceTimersByTimeAsync(60_000);
+    expect([all.saves, all.states, all.copy()]).toEqual([[], ['kept'], null]);
+
+    const half = makeDesk([], 2);
+    half.keeper.bringBack(
+      { revision: 2, content: titled('and more'), sent: titled('typed before') },
+      arrived,
+    );
+    await vi.advanceTimersByTimeAsync(1_000);
+    expect(half.saves).toEqual([{ revision: 2, title: 'and more' }]);
+  });
+
+  it('takes a stale answer that holds what it sent for the answer it missed', async () => {
+    const there = { content: titled('Box'), revision: 2, at: '2026-12-01T10:40:00Z' };
+    const { keeper, saves, states } = makeDesk(['gone', { kind: 'stale', message: 'changed', there }]);
+    keeper.change(titled('Box'));
+    await vi.advanceTimersByTimeAsync(10_000);
+    expect(states.at(-1)).toBe('kept');
+    expect(saves).toHaveLength(2);
+    expect(keeper.keptRevision).toBe(2);
   });
 });

@@ -30,7 +30,7 @@ export function PressForm({
       {Object.entries(fields).map(([name, value]) => (
         <input key={name} type="hidden" name={name} value={value} />
       ))}
-      <SubmitButton kind={kind} size={size} aria-label={fullLabel}>
+      <SubmitButton kind={kind} size={size} aria-label={fullLabel} className="whitespace-nowrap">
         {label}
       </SubmitButton>
       {reply ? (

@@ -60,7 +60,7 @@ export function BandField({ size, suffix, label, showLabel, isLength, placeholde
         {parts ? (
           <span
             aria-hidden
-            className="pointer-events-none absolute inset-0 flex items-center border-b border-transparent px-2 text-lead leading-none"
+            className="pointer-events-none absolute inset-0 block overflow-hidden px-2 text-lead leading-[35px] whitespace-nowrap"
           >
             <Fraction parts={parts} />
           </span>

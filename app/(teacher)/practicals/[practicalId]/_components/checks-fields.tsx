@@ -70,16 +70,17 @@ function CheckFields({ base, check, index, change }: CheckFieldsProps) {
       if (found) work(found);
     });
   return (
-    <div className="grid gap-x-6 gap-y-3 @min-[44rem]:grid-cols-[13rem_minmax(0,1fr)_13rem]">
+    <div className="grid gap-x-6 gap-y-3 @min-[44rem]:grid-cols-[15rem_minmax(0,1fr)_15rem]">
       <div>
         <DraftField path={`${base}.label`} label="what is checked" />
         <Button
           kind="quiet"
           size="small"
           className="px-0"
+          aria-label={`take out ${name}`}
           onClick={() => change((list) => void list.splice(index, 1))}
         >
-          take out {name}
+          take out
         </Button>
       </div>
       <fieldset className="min-w-0">

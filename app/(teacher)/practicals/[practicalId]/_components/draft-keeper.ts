@@ -1,4 +1,4 @@
-import type { PracticalDraft } from '@/lib/practicals/draft';
+import { type PracticalDraft, practicalDraftSchema } from '@/lib/practicals/draft';
 
 export interface KeptDraft {
   content: PracticalDraft;
@@ -18,10 +18,11 @@ export type KeepState =
   | { kind: 'waiting'; message: string }
   | { kind: 'stale'; message: string; there: KeptDraft };
 
-/** What was typed on this device and the server has not confirmed. */
+/** What was typed on this device and the server has not confirmed; `sent` went out, and may have arrived unheard. */
 export interface LocalCopy {
   revision: number;
   content: PracticalDraft;
+  sent: PracticalDraft | null;
 }
 
 export interface LocalStore {
@@ -41,6 +42,12 @@ const LONGEST_RETRY = 30_000;
 const MOVED_ON = 'This practical was changed in another place since you typed here.';
 const NOT_REACHED = 'The server does not answer. What you typed is on this device and is sent when it does.';
 
+/** Whether two drafts say the same; a database gives keys back in its own order. */
+function isSameDraft(a: PracticalDraft, b: PracticalDraft): boolean {
+  const inOrder = (draft: PracticalDraft) => JSON.stringify(practicalDraftSchema.parse(draft));
+  return a === b || inOrder(a) === inOrder(b);
+}
+
 /**
  * Keeps a draft while it is typed: on the device at once, on the server after each pause, one save at a time. A save
  * that fails for a moment is repeated with growing waits; one that is stale waits for a person to choose.
@@ -51,6 +58,7 @@ export class DraftKeeper {
   private running: Promise<void> | null = null;
   private retry = FIRST_RETRY;
   private stale = false;
+  private sent: PracticalDraft | null = null;
 
   constructor(
     private revision: number,
@@ -64,13 +72,18 @@ export class DraftKeeper {
 
   change(draft: PracticalDraft): void {
     this.latest = draft;
-    this.to.store.put({ revision: this.revision, content: draft });
+    this.store();
     if (!this.stale) this.schedule(PAUSE);
   }
 
   /** Goes on with what this device kept, unless the server has moved on from what that was typed into. */
   bringBack(copy: LocalCopy, opened: KeptDraft): void {
-    if (copy.revision === opened.revision) {
+    if (isSameDraft(copy.content, opened.content)) {
+      this.take(opened);
+      return;
+    }
+    const arrived = copy.sent !== null && isSameDraft(copy.sent, opened.content);
+    if (copy.revision === opened.revision || arrived) {
       this.change(copy.content);
       return;
     }
@@ -90,6 +103,7 @@ export class DraftKeeper {
   /** Keeps the draft over what was kept in another place. */
   settle(draft: PracticalDraft, revision: number): void {
     this.stale = false;
+    this.sent = null;
     this.revision = revision;
     this.change(draft);
   }
@@ -98,6 +112,7 @@ export class DraftKeeper {
   take(there: KeptDraft): void {
     this.stale = false;
     this.latest = null;
+    this.sent = null;
     this.revision = there.revision;
     this.to.store.clear();
     this.to.onState({ kind: 'kept', at: there.at });
@@ -105,6 +120,11 @@ export class DraftKeeper {
 
   stop(): void {
     this.cancel();
+  }
+
+  private store(): void {
+    const { revision, latest, sent } = this;
+    if (latest) this.to.store.put({ revision, content: latest, sent });
   }
 
   private cancel(): void {
@@ -129,11 +149,14 @@ export class DraftKeeper {
     const sent = this.latest;
     if (!sent) return;
     this.cancel();
+    this.sent = sent;
+    this.store();
     this.to.onState({ kind: 'keeping' });
     const reply = await this.to
       .save(this.revision, sent)
       .catch((): SaveReply => ({ kind: 'refused', message: NOT_REACHED, temporary: true }));
     if (reply.kind === 'kept') this.onKept(sent, reply);
+    else if (reply.kind === 'stale' && isSameDraft(sent, reply.there.content)) this.onKept(sent, reply.there);
     else if (reply.kind === 'stale') {
       this.stale = true;
       this.to.onState(reply);
@@ -147,11 +170,12 @@ export class DraftKeeper {
   private onKept(sent: PracticalDraft, { revision, at }: { revision: number; at: string }): void {
     this.revision = revision;
     this.retry = FIRST_RETRY;
+    this.sent = null;
     if (this.latest === sent) {
       this.latest = null;
       this.to.store.clear();
     } else if (this.latest) {
-      this.to.store.put({ revision, content: this.latest });
+      this.store();
     }
     this.to.onState({ kind: 'kept', at });
   }

@@ -2,7 +2,11 @@ import { z } from 'zod';
 import { practicalDraftSchema } from '@/lib/practicals/draft';
 import type { LocalCopy, LocalStore } from './draft-keeper';
 
-const copySchema = z.strictObject({ revision: z.int().min(1), content: practicalDraftSchema });
+const copySchema = z.strictObject({
+  revision: z.int().min(1),
+  content: practicalDraftSchema,
+  sent: practicalDraftSchema.nullable(),
+});
 
 const keyOf = (practicalId: string) => `trymark.draft.${practicalId}`;
 

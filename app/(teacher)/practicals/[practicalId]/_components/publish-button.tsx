@@ -111,7 +111,7 @@ function Ask({ practicalId, number, revision, parsed, latest, onClose, onPublish
           <h3 className="font-[640]">What changes since version {latest.number}</h3>
           <ul className="mt-1 list-disc pl-5">
             {changesSince(latest, parsed).map((phrase) => (
-              <li key={JSON.stringify(phrase)}>
+              <li key={JSON.stringify(phrase)} className="first-letter:uppercase">
                 <PhraseText phrase={phrase} unit={parsed.task.unit} />
               </li>
             ))}
