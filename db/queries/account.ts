@@ -1,4 +1,4 @@
-import { and, asc, eq, gt, inArray, isNull, ne, or, sql } from 'drizzle-orm';
+import { and, asc, eq, gte, inArray, isNull, ne, or, sql } from 'drizzle-orm';
 import type { Database, Transaction } from '@/db/client';
 import {
   credentials,
@@ -14,6 +14,7 @@ import {
   tokens,
 } from '@/db/schema';
 import type { Role } from '@/lib/auth/roles';
+import { inSectionToday, schoolToday, teacherIds } from './sections';
 
 type Reader = Database | Transaction;
 type LinkKind = (typeof tokens.$inferSelect)['kind'];
@@ -110,8 +111,6 @@ export async function deleteSessions(tx: Transaction, schoolId: string, personId
   await tx.delete(sessions).where(and(eq(sessions.schoolId, schoolId), eq(sessions.userId, personId)));
 }
 
-const enrolledNow = or(isNull(enrollments.leftOn), gt(enrollments.leftOn, sql`current_date`));
-
 /** A student of the school, with the roles they hold and the teachers of the sections they are in now. */
 export async function selectStudent(tx: Transaction, schoolId: string, studentId: string) {
   const owner = await selectOwner(tx, schoolId, studentId);
@@ -119,15 +118,17 @@ export async function selectStudent(tx: Transaction, schoolId: string, studentId
   const teachers = await tx
     .selectDistinct({ personId: sectionStaff.personId })
     .from(enrollments)
+    .innerJoin(schools, eq(schools.id, enrollments.schoolId))
     .innerJoin(
       sectionStaff,
       and(
         eq(sectionStaff.schoolId, enrollments.schoolId),
         eq(sectionStaff.sectionId, enrollments.sectionId),
         eq(sectionStaff.duty, 'teacher'),
+        or(isNull(sectionStaff.toDay), gte(sectionStaff.toDay, schoolToday)),
       ),
     )
-    .where(and(eq(enrollments.schoolId, schoolId), eq(enrollments.studentId, studentId), enrolledNow));
+    .where(and(eq(enrollments.schoolId, schoolId), eq(enrollments.studentId, studentId), inSectionToday));
   return { ...owner, teacherIds: teachers.map(({ personId }) => personId) };
 }
 
@@ -142,9 +143,7 @@ export async function selectSectionForSlips(tx: Transaction, schoolId: string, s
       period: sections.period,
       schoolName: schools.name,
       schoolCode: schools.code,
-      teacherIds: sql<string[]>`array(
-        select staff.person_id from ${sectionStaff} staff
-        where staff.school_id = ${sections.schoolId} and staff.section_id = ${sections.id} and staff.duty = 'teacher')`,
+      teacherIds,
     })
     .from(sections)
     .innerJoin(schools, eq(schools.id, sections.schoolId))
@@ -176,12 +175,13 @@ export function selectWithoutPassphrase(tx: Transaction, schoolId: string, secti
       localId: people.localId,
     })
     .from(enrollments)
+    .innerJoin(schools, eq(schools.id, enrollments.schoolId))
     .innerJoin(people, and(eq(people.schoolId, enrollments.schoolId), eq(people.id, enrollments.studentId)))
     .where(
       and(
         eq(enrollments.schoolId, schoolId),
         eq(enrollments.sectionId, sectionId),
-        enrolledNow,
+        inSectionToday,
         isNull(people.leftAt),
         sql`${people.id} not in ${known}`,
         sql`not exists ${isStaff}`,

@@ -15,6 +15,7 @@ import {
   sections,
   sittings,
 } from '@/db/schema';
+import { inSectionToday, schoolToday } from './sections';
 
 /** A sitting with all that permission and recording depend on. */
 export async function selectRound(tx: Transaction, schoolId: string, sittingId: string) {
@@ -44,17 +45,14 @@ export async function selectRound(tx: Transaction, schoolId: string, sittingId: 
   return row;
 }
 
-/** Today by the school's own clock. */
-const today = sql`(now() at time zone ${schools.timeZone})::date`;
-
 /** Who works in the section; an aide's days have come (`begun`) and may be over (`ended`). */
 export function selectStaff(tx: Transaction, schoolId: string, sectionId: string) {
   return tx
     .select({
       personId: sectionStaff.personId,
       duty: sectionStaff.duty,
-      begun: sql<boolean>`${sectionStaff.fromDay} is null or ${sectionStaff.fromDay} <= ${today}`,
-      ended: sql<boolean>`${sectionStaff.toDay} is not null and ${sectionStaff.toDay} < ${today}`,
+      begun: sql<boolean>`${sectionStaff.fromDay} is null or ${sectionStaff.fromDay} <= ${schoolToday}`,
+      ended: sql<boolean>`${sectionStaff.toDay} is not null and ${sectionStaff.toDay} < ${schoolToday}`,
     })
     .from(sectionStaff)
     .innerJoin(schools, eq(schools.id, sectionStaff.schoolId))
@@ -143,7 +141,7 @@ export async function insertMissingAttempts(
     select e.school_id, ${sittingId}, e.student_id, 1
     from ${enrollments} e join ${schools} on schools.id = e.school_id
     where e.school_id = ${schoolId} and e.section_id = ${sectionId}
-      and (e.left_on is null or e.left_on >= ${today})
+      and (e.left_on is null or e.left_on > ${schoolToday})
     on conflict (school_id, sitting_id, student_id, number) do nothing`);
 }
 
@@ -176,7 +174,7 @@ export function selectRoundStudents(tx: Transaction, schoolId: string, sittingId
         eq(enrollments.schoolId, schoolId),
         eq(enrollments.sectionId, sectionId),
         eq(enrollments.studentId, latest.studentId),
-        or(isNull(enrollments.leftOn), sql`${enrollments.leftOn} >= ${today}`),
+        inSectionToday,
       ),
     )
     .orderBy(sql`lower(${people.familyName})`, sql`lower(${people.givenName})`, asc(people.id));
@@ -306,12 +304,7 @@ export function selectRounds(tx: Transaction, schoolId: string, personId: string
     .select({ sectionId: enrollments.sectionId, students: count().as('students') })
     .from(enrollments)
     .innerJoin(schools, eq(schools.id, enrollments.schoolId))
-    .where(
-      and(
-        eq(enrollments.schoolId, schoolId),
-        or(isNull(enrollments.leftOn), sql`${enrollments.leftOn} >= ${today}`),
-      ),
-    )
+    .where(and(eq(enrollments.schoolId, schoolId), inSectionToday))
     .groupBy(enrollments.sectionId)
     .as('enrolled');
   const progress = tx
@@ -371,8 +364,8 @@ export function selectRounds(tx: Transaction, schoolId: string, personId: string
         eq(sectionStaff.sectionId, sittings.sectionId),
         eq(sectionStaff.personId, personId),
         eq(sectionStaff.duty, duty),
-        or(isNull(sectionStaff.fromDay), sql`${sectionStaff.fromDay} <= ${today}`),
-        or(isNull(sectionStaff.toDay), sql`${sectionStaff.toDay} >= ${today}`),
+        or(isNull(sectionStaff.fromDay), sql`${sectionStaff.fromDay} <= ${schoolToday}`),
+        or(isNull(sectionStaff.toDay), sql`${sectionStaff.toDay} >= ${schoolToday}`),
       ),
     )
     .leftJoin(enrolled, eq(enrolled.sectionId, sections.id))

@@ -2,6 +2,7 @@ import { and, asc, count, desc, eq, isNull, sql } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
 import { departments, people, personRoles, schools, sectionStaff, sections, terms } from '@/db/schema';
 import type { Role } from '@/lib/auth/roles';
+import { schoolToday } from './sections';
 
 export async function isSchoolCodeTaken(tx: Transaction, code: string): Promise<boolean> {
   const [row] = await tx.select({ id: schools.id }).from(schools).where(eq(schools.code, code));
@@ -56,7 +57,7 @@ export async function selectSchool(tx: Transaction, schoolId: string) {
       name: schools.name,
       timeZone: schools.timeZone,
       unit: schools.unit,
-      today: sql<string>`(now() at time zone ${schools.timeZone})::date::text`,
+      today: sql<string>`${schoolToday}::text`,
     })
     .from(schools)
     .where(eq(schools.id, schoolId));
@@ -91,12 +92,13 @@ export function selectSectionsOverview(tx: Transaction, schoolId: string) {
       studentCount: sql<number>`(
         select count(*)::int from enrollments joined
         where joined.school_id = ${sections.schoolId} and joined.section_id = ${sections.id}
-          and (joined.left_on is null or joined.left_on > current_date))`,
+          and (joined.left_on is null or joined.left_on > ${schoolToday}))`,
       sittingCount: sql<number>`(
         select count(*)::int from sittings given
         where given.school_id = ${sections.schoolId} and given.section_id = ${sections.id})`,
     })
     .from(sections)
+    .innerJoin(schools, eq(schools.id, sections.schoolId))
     .innerJoin(terms, and(eq(terms.schoolId, sections.schoolId), eq(terms.id, sections.termId)))
     .innerJoin(
       departments,

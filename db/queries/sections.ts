@@ -20,7 +20,8 @@ export const schoolToday = sql`(now() at time zone ${schools.timeZone})::date`;
 /** In the section today: the day somebody leaves on is the first without them. */
 export const inSectionToday = or(isNull(enrollments.leftOn), sql`${enrollments.leftOn} > ${schoolToday}`);
 
-const teacherIds = sql<string[]>`array(
+/** The teachers of a section, but those whose days there are over; where sections and schools are joined. */
+export const teacherIds = sql<string[]>`array(
   select staff.person_id from ${sectionStaff} staff
   where staff.school_id = ${sections.schoolId} and staff.section_id = ${sections.id} and staff.duty = 'teacher'
     and (staff.to_day is null or staff.to_day >= ${schoolToday}))`;

@@ -110,6 +110,15 @@ describe('new words at the bench', () => {
     expect(await lets(student.localId, OLD)).toBe(true);
   });
 
+  it('are not for a teacher whose days in the section are over, neither one nor for all', async () => {
+    const { student, sectionId } = await studentIn(OLD);
+    await sql`update section_staff set to_day = current_date - 2 where section_id = ${sectionId}`;
+    const refused = { problem: { code: 'not_found' } };
+    expect(await resetPassphrase(teacher, { studentId: student.personId })).toMatchObject(refused);
+    expect(await makePassphrases(teacher, { sectionId })).toMatchObject(refused);
+    expect(await lets(student.localId, OLD)).toBe(true);
+  });
+
   it('are not for anybody of another school', async () => {
     const { student } = await studentIn(OLD);
     const stranger = await makeActor(ardmore, 'admin');

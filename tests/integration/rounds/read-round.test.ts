@@ -77,6 +77,22 @@ describe('the bundle of a round', () => {
     expect(row?.count).toBe(1);
   });
 
+  test('the day a student leaves on, by the school’s clock, is the first without them; the day before is with them', async () => {
+    const { school, sectionId, students } = stage;
+    const late = await makeActor(school, 'student', { givenName: 'Zoe', familyName: 'Aalto' });
+    await enroll(school, sectionId, late.personId);
+    const leaves = (personId: string, days: number) => ownerSql()`
+      update enrollments set left_on = (now() at time zone 'America/Chicago')::date + ${days}::int
+      where student_id = ${personId}`;
+    await leaves(late.personId, 0);
+    await leaves(students[0].personId, 0);
+    await leaves(students[1].personId, 1);
+    expect((await bundleFor()).students.map(({ givenName }) => givenName)).toEqual(['Ben']);
+    expect(await listRounds(stage.teacher, {})).toMatchObject({ value: [{ students: 1 }] });
+    const made = await ownerSql()`select 1 from attempts where student_id = ${late.personId}`;
+    expect(made).toHaveLength(0);
+  });
+
   test('opening it is in the access log with the students it shows, once an hour and person', async () => {
     await bundleFor();
     await bundleFor();
