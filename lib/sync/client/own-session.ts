@@ -31,6 +31,12 @@ export interface OwnEntry {
   source?: OwnSource;
 }
 
+/** What a session needs of the store. */
+export type OwnShelf = Pick<
+  OwnStore,
+  'keep' | 'dropParked' | 'onEvents' | 'onUnsent' | 'onSending' | 'onParked'
+>;
+
 const browserMint: Mint = { id: () => crypto.randomUUID(), now: () => new Date().toISOString() };
 
 /**
@@ -47,7 +53,7 @@ export class OwnSession {
 
   constructor(
     private readonly of: OwnAttempt,
-    private readonly store: OwnStore,
+    private readonly store: OwnShelf,
     events: readonly OwnEvent[],
     private readonly mint: Mint = browserMint,
   ) {

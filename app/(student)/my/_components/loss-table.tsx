@@ -60,8 +60,8 @@ function Sums({ rubric, explanation }: { rubric: Rubric; explanation: ScoreExpla
       {floorGives > 0 ? (
         <Sum
           label="given back: the score has a floor"
-          points={-floorGives}
-          ofTotal={-floorGivesOfTotal}
+          points={floorGives}
+          ofTotal={floorGivesOfTotal}
           one={one}
         />
       ) : null}

@@ -21,7 +21,13 @@ export function MeasureSheet({ session, task }: { session: OwnSession; task: Own
       <KeptLine view={view} />
       <KeptTrouble view={view} session={session} />
       {lock ? (
-        <LockedSheet lock={lock} record={view.record} rubric={task.rubric} sent={view.unsent === 0} />
+        <LockedSheet
+          lock={lock}
+          record={view.record}
+          rubric={task.rubric}
+          sent={view.unsent === 0}
+          over={over}
+        />
       ) : (
         <EmptyState title="Own readings are closed">
           The results are out, and you had not locked your readings by then. What you recorded is kept.
