@@ -76,16 +76,16 @@ function refuseEvent(desk: Desk, event: ReadingEvent, recorded: readonly CellEve
   return refuseCell(desk.rubric, event.side, event.cell, event.value) ?? refuseByDuty(desk, event, recorded);
 }
 
-/** What only the teacher may record. */
+/** What only the teacher may record, replace or take back. */
 function refuseByDuty(desk: Desk, event: ReadingEvent, recorded: readonly CellEvent[]): string | null {
   if (event.side !== 'bench') return null;
-  if (!desk.sender.mayFinish && isTeachersOwn(event.value))
-    return 'Only the teacher of the section does that.';
-  if (desk.sender.maySettle || event.supersedes.length < 2) return null;
   const replaced = recorded.filter(
     ({ id, side, cell }) =>
       side === 'bench' && cellKey(cell) === cellKey(event.cell) && event.supersedes.includes(id),
   );
+  if (!desk.sender.mayFinish && [event, ...replaced].some(({ value }) => isTeachersOwn(value)))
+    return 'Only the teacher of the section does that.';
+  if (desk.sender.maySettle) return null;
   return new Set(replaced.map(({ value }) => valueKey(value))).size > 1
     ? 'Only the teacher of the section chooses between two readings.'
     : null;

@@ -175,6 +175,36 @@ describe('who may record', () => {
     expect(row?.standing).toBe('absent');
   });
 
+  test('an aide takes back nothing that the teacher alone may record', async () => {
+    const { teacher, aide, sittingId, attempts } = await fresh();
+    const at = (what: string) => ({
+      cell: { lineId: '', ordinal: 0, what },
+      typed: null,
+      unit: null,
+      instrument: null,
+    });
+    const decided = [
+      eventOf(teacher, attempts[0], { ...at('@finish'), value: { kind: 'finish', done: true } }),
+      eventOf(teacher, attempts[0], { ...at('@days-late'), value: { kind: 'days-late', days: 3 } }),
+      eventOf(teacher, attempts[0], { ...at('@standing'), value: { kind: 'standing', standing: 'zero' } }),
+    ];
+    await push(teacher, sittingId, decided);
+    const back = decided.map(({ id, cell }) =>
+      eventOf(aide, attempts[0], { ...at(cell.what), value: { kind: 'cleared' }, supersedes: [id] }),
+    );
+    const expected = eventOf(aide, attempts[0], {
+      ...at('@standing'),
+      value: { kind: 'standing', standing: 'expected' },
+      supersedes: [decided[2]?.id ?? ''],
+    });
+    expect(await outcomes(push(aide, sittingId, [...back, expected]))).toEqual(
+      Array(4).fill('refused: Only the teacher of the section does that.'),
+    );
+    const [row] = await ownerSql()`select standing, days_late from attempts where id = ${attempts[0]}`;
+    expect(row).toMatchObject({ standing: 'zero', days_late: 3 });
+    expect(await sheetOf(attempts[0])).toMatchObject({ finished: true, conflicts: 0 });
+  });
+
   test('an aide whose days are over delivers what was recorded, flagged; one never given the section does not', async () => {
     const { school, sectionId, sittingId, attempts } = await fresh();
     const former = await makeActor(school, 'aide');
