@@ -6,7 +6,7 @@ import { defineVerb } from '../verb';
 export const TERM_NAME_TAKEN = 'There is a term of this name already.';
 
 export const addTerm = defineVerb({
-  action: 'term.change',
+  action: 'term.add',
   input: addTermInput,
   async run({ actor, input, tx, authorize, refuseFields, log }): Promise<{ termId: string }> {
     authorize({ schoolId: actor.schoolId });

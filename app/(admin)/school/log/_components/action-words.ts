@@ -11,6 +11,7 @@ const WORDS: Record<string, string> = {
   'person.list': 'looked at people',
   'person.invite': 'invited',
   'person.change': 'changed roles or access',
+  'term.add': 'added a term',
   'term.change': 'changed a term',
   'log.read': 'read the access log',
   'section.create': 'made a section',
