@@ -9,6 +9,13 @@ export function sayDayOf(moment: string, timeZone: string, now: Date = new Date(
   return write(at, timeZone, at.getUTCFullYear() !== now.getUTCFullYear());
 }
 
+/** The same where there is little room: `9 Dec`. */
+export function sayShortDayOf(moment: string, timeZone: string): string {
+  return new Intl.DateTimeFormat('en-GB', { timeZone, day: 'numeric', month: 'short' }).format(
+    new Date(moment),
+  );
+}
+
 /** A moment by the school's own clock: `9 December, 14:05`. */
 export function sayMoment(moment: string, timeZone: string, now: Date = new Date()): string {
   const time = new Intl.DateTimeFormat('en-GB', { timeZone, hour: '2-digit', minute: '2-digit' });

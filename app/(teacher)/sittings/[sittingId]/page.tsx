@@ -7,6 +7,7 @@ import { Notice } from '@/components/ui/notice';
 import { readSitting, type SittingView } from '@/lib/data/sittings/read-sitting';
 import { pageValue } from '@/lib/transport/page';
 import { count, sayPeriod } from '../../_components/names';
+import { ChangeDue } from './_components/change-due';
 import { StudentTable } from './_components/student-table';
 import { sittingTitleBlock } from './_components/title-block-of';
 
@@ -20,6 +21,7 @@ export default async function SittingPage({ params }: PageProps<'/sittings/[sitt
     <DeskPage
       title={title}
       note={`${sectionName}, ${sayPeriod(period)}, rubric ${versionNumber}`}
+      tabs={<ChangeDue sittingId={sittingId} dueOn={sitting.dueOn} today={sitting.today} />}
       actions={
         <>
           <LinkButton href={`/gradebook/${sitting.sectionId}`}>gradebook</LinkButton>

@@ -33,7 +33,13 @@ export function ChangeAttempt({ sittingId, student }: ChangeAttemptProps) {
     student.standing === 'zero' || (student.standing === 'expected' && student.progress === 'read');
   return (
     <>
-      <Button size="small" onClick={() => setOpen(true)} aria-label={`change ${name}`}>
+      <Button
+        kind="quiet"
+        size="small"
+        className="px-0"
+        onClick={() => setOpen(true)}
+        aria-label={`change ${name}`}
+      >
         change
       </Button>
       <Dialog open={open} onOpenChange={setOpen} title={name}>

@@ -10,15 +10,9 @@ export function ProgressSign({ student }: { student: SittingStudentView }) {
     return <span className="border-b border-dashed border-ink-2">{STANDING[standing]}</span>;
   }
   const words =
-    progress === 'not read'
-      ? 'not read'
-      : progress === 'begun'
-        ? 'begun'
-        : finished
-          ? 'read, finished'
-          : 'read';
+    progress === 'not read' ? 'not read' : progress === 'begun' ? 'begun' : finished ? 'finished' : 'read';
   return (
-    <span className="inline-flex flex-wrap items-center gap-x-2">
+    <span className="inline-flex items-center gap-x-2 whitespace-nowrap">
       <svg
         aria-hidden
         viewBox="0 0 14 14"

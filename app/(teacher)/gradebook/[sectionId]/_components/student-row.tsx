@@ -1,0 +1,88 @@
+import { memo } from 'react';
+import { classNames } from '@/components/ui/class-names';
+import type { GradebookView } from '@/lib/contracts/gradebook';
+import { sayDay } from '../../../_components/days';
+import { rosterName } from '../../../_components/names';
+import { cellSaid, tenthsAsText } from './cell-words';
+import type { GradebookStudent } from './columns';
+import { GradeCell } from './grade-cell';
+import type { Selection } from './gradebook-table';
+import { placeOf, walkCells } from './walk-cells';
+
+interface StudentRowProps {
+  student: GradebookStudent;
+  book: GradebookView;
+  full: number;
+  selection: Selection | null;
+  onSelect: (selection: Selection) => void;
+  /** The row's place from the top, for the arrow keys. */
+  at: number;
+}
+
+export const StudentRow = memo(function StudentRow({
+  student,
+  book,
+  full,
+  selection,
+  onSelect,
+  at,
+}: StudentRowProps) {
+  const name = rosterName(student);
+  const since = lateStart(student, book);
+  return (
+    <tr className="h-11 md:h-[1.7rem]">
+      <th
+        scope="row"
+        className="sticky left-0 z-[1] max-w-28 bg-sheet pr-2 text-left text-label leading-4 font-[520] md:max-w-56 md:truncate md:text-text md:leading-[1.3125rem] md:whitespace-nowrap"
+      >
+        {name}
+        {student.leftOn ? <Aside>left {sayDay(student.leftOn, student.leftOn)}</Aside> : null}
+        {since && !student.leftOn ? <Aside>since {sayDay(since, since)}</Aside> : null}
+      </th>
+      <td className="px-2 text-label text-ink-2 max-md:hidden">{student.localId}</td>
+      {book.sittings.map(({ sittingId, title }, index) => {
+        const cell = student.cells[index] ?? null;
+        const isSelected = selection?.studentId === student.studentId && selection.sittingId === sittingId;
+        return (
+          <td key={sittingId} className="relative border-l border-rule p-0">
+            {cell ? (
+              <button
+                type="button"
+                data-place={placeOf(at, index)}
+                onKeyDown={walkCells}
+                aria-label={cellSaid(name, title, cell)}
+                aria-pressed={isSelected}
+                onClick={() => onSelect({ studentId: student.studentId, sittingId })}
+                className={classNames(
+                  'block h-full min-h-11 w-full px-1 hover:bg-act-wash md:min-h-[1.7rem]',
+                  isSelected && 'outline-3 -outline-offset-2 outline-act',
+                )}
+              >
+                <GradeCell cell={cell} full={full} />
+              </button>
+            ) : (
+              <GradeCell cell={null} full={full} />
+            )}
+          </td>
+        );
+      })}
+      <td className="border-l border-ink pl-2 text-right font-[660]">
+        {student.mean === null ? <span className="sr-only">none yet</span> : tenthsAsText(student.mean)}
+      </td>
+    </tr>
+  );
+});
+
+function Aside({ children }: { children: React.ReactNode }) {
+  return (
+    <span className="text-small font-[480] max-md:block md:ml-2 font-stretch-[88%] text-ink-2">
+      {children}
+    </span>
+  );
+}
+
+/** The day somebody joined, when that was after the section's first practical was given. */
+function lateStart({ joinedOn }: GradebookStudent, { sittings }: GradebookView): string | null {
+  const first = sittings[0]?.openedAt.slice(0, 10);
+  return joinedOn && first && joinedOn > first ? joinedOn : null;
+}
