@@ -16,8 +16,9 @@ const isLatest = sql`not exists (
   where later.school_id = ${attempts.schoolId} and later.sitting_id = ${attempts.sittingId}
     and later.student_id = ${attempts.studentId} and later.number > ${attempts.number})`;
 
-const hasResult = sql<boolean>`exists (
-  select from ${results} told join ${attempts} tried
+/** The number of the student's latest attempt at the sitting that a publication told of. */
+const toldAttempt = sql<number | null>`(
+  select max(tried.number) from ${results} told join ${attempts} tried
     on tried.school_id = told.school_id and tried.id = told.attempt_id
   where told.school_id = ${attempts.schoolId} and tried.sitting_id = ${attempts.sittingId}
     and tried.student_id = ${attempts.studentId})`;
@@ -34,7 +35,7 @@ const ofLatestAttempt = {
   title: practicals.title,
   sectionName: sections.name,
   period: sections.period,
-  hasResult,
+  toldAttempt,
   versionNumber: rubricVersions.number,
   task: rubricVersions.task,
   form: rubricVersions.form,

@@ -17,6 +17,8 @@ export interface OwnTaskRow {
   dueOn: string | null;
   attemptNumber: number;
   stage: TaskStage;
+  /** A further attempt is open beside the result of the one before. */
+  redo: boolean;
   /** Own sizes that a lock no longer waits for, of all. */
   sizes: { of: number; done: number };
 }
@@ -52,14 +54,15 @@ function taskRow(row: AttemptRow, events: readonly OwnEvent[]): OwnTaskRow {
     dueOn,
     attemptNumber,
     stage: stageOf(row, record.derived.lock !== null),
+    redo: row.toldAttempt !== null && row.toldAttempt < attemptNumber,
     sizes: countOwnSizes(rubricSchema.parse(row.rubric), record),
   };
 }
 
 export function stageOf(
-  row: { state: 'open' | 'published'; hasResult: boolean },
+  row: { state: 'open' | 'published'; toldAttempt: number | null },
   locked: boolean,
 ): TaskStage {
-  if (row.state === 'published') return row.hasResult ? 'published' : 'closed';
+  if (row.state === 'published') return row.toldAttempt !== null ? 'published' : 'closed';
   return locked ? 'locked' : 'to do';
 }

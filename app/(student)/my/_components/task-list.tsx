@@ -33,6 +33,11 @@ function TaskRow({ task }: { task: OwnTaskRow }) {
           due <DayText day={task.dueOn} />
         </p>
       ) : null}
+      {task.redo ? (
+        <p className="mt-1">
+          Attempt {task.attemptNumber} is open to you: cut again what lost points, and hand it in.
+        </p>
+      ) : null}
       {task.stage === 'to do' && task.sizes.done > 0 ? <Measured sizes={task.sizes} /> : null}
       {href ? (
         <Link
