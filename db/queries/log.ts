@@ -1,4 +1,4 @@
-import { aliasedTable, and, asc, count, desc, eq, sql } from 'drizzle-orm';
+import { aliasedTable, and, asc, count, desc, eq, gt, sql } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
 import { accessLog, people } from '@/db/schema';
 
@@ -76,4 +76,26 @@ export async function selectLogChoices(tx: Transaction, schoolId: string) {
     .where(ofSchool)
     .orderBy(asc(people.familyName), asc(people.givenName));
   return { actions: actions.map(({ action }) => action), who };
+}
+
+/** Whether the person's look at this subject was logged within the hour. */
+export async function wasViewLogged(
+  tx: Transaction,
+  schoolId: string,
+  { actorId, action, subjectId }: { actorId: string; action: string; subjectId: string },
+): Promise<boolean> {
+  const rows = await tx
+    .select({ id: accessLog.id })
+    .from(accessLog)
+    .where(
+      and(
+        eq(accessLog.schoolId, schoolId),
+        gt(accessLog.at, sql`now() - interval '1 hour'`),
+        eq(accessLog.actorId, actorId),
+        eq(accessLog.action, action),
+        eq(accessLog.subjectId, subjectId),
+      ),
+    )
+    .limit(1);
+  return rows.length > 0;
 }

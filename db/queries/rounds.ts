@@ -1,7 +1,6 @@
 import { and, asc, count, desc, eq, gt, inArray, isNotNull, isNull, ne, or, sql } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
 import {
-  accessLog,
   attempts,
   enrollments,
   inHand,
@@ -272,30 +271,6 @@ export async function deleteInHand(
     .where(
       and(eq(inHand.schoolId, schoolId), eq(inHand.sittingId, sittingId), eq(inHand.deviceId, deviceId)),
     );
-}
-
-/** Whether this person's view of this round was logged within the hour: a refresh goes on with the same view. */
-export async function wasViewLogged(
-  tx: Transaction,
-  schoolId: string,
-  actorId: string,
-  action: string,
-  sittingId: string,
-): Promise<boolean> {
-  const rows = await tx
-    .select({ id: accessLog.id })
-    .from(accessLog)
-    .where(
-      and(
-        eq(accessLog.schoolId, schoolId),
-        gt(accessLog.at, sql`now() - interval '1 hour'`),
-        eq(accessLog.actorId, actorId),
-        eq(accessLog.action, action),
-        eq(accessLog.subjectId, sittingId),
-      ),
-    )
-    .limit(1);
-  return rows.length > 0;
 }
 
 /** Open sittings of the sections in which the person works today in that duty, with how far each has come. */

@@ -1,6 +1,7 @@
 import 'server-only';
 import type { z } from 'zod';
 import type { Transaction } from '@/db/client';
+import { wasViewLogged } from '@/db/queries/log';
 import * as schema from '@/db/schema';
 import type { Actor } from '@/lib/auth/actor';
 import { type Action, may, mayEver, type Subject } from '@/lib/auth/policy';
@@ -36,6 +37,8 @@ export interface Context<Input> {
   refuseFields(fields: FieldErrors): never;
   /** Appends to the access log in the same transaction. */
   log(entry: LogEntry): Promise<void>;
+  /** The same for a look at records, once an hour: a refresh goes on with the same view. */
+  logView(entry: LogEntry & { subjectId: string }, action?: Action): Promise<void>;
 }
 
 interface Verb<Schema extends z.ZodType, View> {
@@ -98,6 +101,10 @@ function context<Input>(action: Action, actor: Actor, input: Input, tx: Transact
       throw new Refusal(invalid(fields).problem);
     },
     log: (entry) => appendLog(tx, actor, action, entry),
+    logView: async (entry, as = action) => {
+      const view = { actorId: actor.personId, action: as, subjectId: entry.subjectId };
+      if (!(await wasViewLogged(tx, actor.schoolId, view))) await appendLog(tx, actor, as, entry);
+    },
   };
 }
 

@@ -1,5 +1,4 @@
 import 'server-only';
-import { wasViewLogged } from '@/db/queries/rounds';
 import { selectSection } from '@/db/queries/sections';
 import { cellInput, type ExplanationView } from '@/lib/contracts/gradebook';
 import { judgementSchema, scoreSheetSchema } from '@/lib/contracts/results';
@@ -17,8 +16,8 @@ const NOTHING: Attempt = { pieces: [], work: {}, bonus: 0, daysLate: 0 };
 export const explainCell = defineVerb({
   action: 'gradebook.read',
   input: cellInput,
-  async run({ actor, input, tx, authorize, found, log }): Promise<ExplanationView> {
-    const { schoolId, personId } = actor;
+  async run({ actor, input, tx, authorize, found, logView }): Promise<ExplanationView> {
+    const { schoolId } = actor;
     const { sectionId, attemptId } = input;
     const section = found(await selectSection(tx, schoolId, sectionId));
     authorize(sectionSubject(section));
@@ -27,9 +26,7 @@ export const explainCell = defineVerb({
       sittings.find(({ attempts }) => attempts.some((row) => row.attemptId === attemptId)),
     );
     const row = found(sitting.attempts.find((each) => each.attemptId === attemptId));
-    if (!(await wasViewLogged(tx, schoolId, personId, 'gradebook.read', attemptId))) {
-      await log({ subjectKind: 'attempt', subjectId: attemptId, aboutPersonId: row.studentId });
-    }
+    await logView({ subjectKind: 'attempt', subjectId: attemptId, aboutPersonId: row.studentId });
     return explain(sitting, { row, result: sitting.latest?.results.get(attemptId) });
   },
 });

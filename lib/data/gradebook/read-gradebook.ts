@@ -1,6 +1,5 @@
 import 'server-only';
 import { selectFiles } from '@/db/queries/gradebook';
-import { wasViewLogged } from '@/db/queries/rounds';
 import { selectRoster, selectSection, selectSections } from '@/db/queries/sections';
 import { selectMissingNumbers } from '@/db/queries/sittings';
 import type { Actor } from '@/lib/auth/actor';
@@ -18,8 +17,8 @@ const FILES_SHOWN = 10;
 export const readGradebook = defineVerb({
   action: 'gradebook.read',
   input: gradebookInput,
-  async run({ actor, input, tx, authorize, found, log }): Promise<GradebookView> {
-    const { schoolId, personId } = actor;
+  async run({ actor, input, tx, authorize, found, logView }): Promise<GradebookView> {
+    const { schoolId } = actor;
     const { sectionId } = input;
     const section = found(await selectSection(tx, schoolId, sectionId));
     const subject = sectionSubject(section);
@@ -39,9 +38,7 @@ export const readGradebook = defineVerb({
     const siblings = (await selectSections(tx, schoolId, scopeOf(actor))).filter(
       ({ termId }) => termId === section.termId,
     );
-    if (!(await wasViewLogged(tx, schoolId, personId, 'gradebook.read', sectionId))) {
-      await log({ subjectKind: 'section', subjectId: sectionId, details: { sittings: sittings.length } });
-    }
+    await logView({ subjectKind: 'section', subjectId: sectionId, details: { sittings: sittings.length } });
     const roster = await selectRoster(tx, schoolId, sectionId);
     return {
       section: asSectionView(section),

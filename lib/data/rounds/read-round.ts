@@ -6,7 +6,6 @@ import {
   selectNames,
   selectRound,
   selectRoundStudents,
-  wasViewLogged,
 } from '@/db/queries/rounds';
 import { may } from '@/lib/auth/policy';
 import { type RoundBundle, sittingInput } from '@/lib/contracts/rounds';
@@ -24,7 +23,7 @@ import { roundSubject } from './round-subject';
 export const readRound = defineVerb({
   action: 'round.read',
   input: sittingInput,
-  async run({ actor, input, tx, found, authorize, log }): Promise<RoundBundle> {
+  async run({ actor, input, tx, found, authorize, logView }): Promise<RoundBundle> {
     const { schoolId } = actor;
     const round = found(await selectRound(tx, schoolId, input.sittingId));
     const { subject } = await roundSubject(tx, round);
@@ -36,13 +35,11 @@ export const readRound = defineVerb({
       schoolId,
       students.map(({ attemptId }) => attemptId),
     );
-    if (!(await wasViewLogged(tx, schoolId, actor.personId, 'round.read', round.sittingId))) {
-      await log({
-        subjectKind: 'sitting',
-        subjectId: round.sittingId,
-        details: { students: students.map(({ studentId }) => studentId) },
-      });
-    }
+    await logView({
+      subjectKind: 'sitting',
+      subjectId: round.sittingId,
+      details: { students: students.map(({ studentId }) => studentId) },
+    });
     return {
       sittingId: round.sittingId,
       published: round.state === 'published',

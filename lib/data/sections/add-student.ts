@@ -57,7 +57,15 @@ function refusal({ verdict, localId }: JudgedLine): Record<string, string[]> | n
     case 'unchanged':
       return { familyName: ['This student is on the roster already.'] };
     case 'name-conflict': {
-      const { familyName, givenName } = verdict.person;
+      const { familyName, givenName, mine } = verdict.person;
+      // The ID alone does not tell who a student of another teacher is.
+      if (!mine) {
+        return {
+          localId: [
+            `The ID ${localId} belongs to a student of another name. Check both against the school’s list.`,
+          ],
+        };
+      }
       return {
         localId: [
           `The ID ${localId} belongs to ${familyName}, ${givenName}. If that is who you mean, type the name so; otherwise check the ID.`,

@@ -1,5 +1,4 @@
 import 'server-only';
-import { wasViewLogged } from '@/db/queries/rounds';
 import { selectRoster, selectSection } from '@/db/queries/sections';
 import { sectionInput } from '@/lib/contracts/sections';
 import { defineVerb } from '../verb';
@@ -29,13 +28,15 @@ export interface RosterView extends SectionView {
 export const readSectionRoster = defineVerb({
   action: 'roster.read',
   input: sectionInput,
-  async run({ actor, input, tx, authorize, found, log }): Promise<RosterView> {
+  async run({ actor, input, tx, authorize, found, logView }): Promise<RosterView> {
     const section = found(await selectSection(tx, actor.schoolId, input.sectionId));
     authorize(sectionSubject(section));
     const rows = await selectRoster(tx, actor.schoolId, input.sectionId);
-    if (!(await wasViewLogged(tx, actor.schoolId, actor.personId, 'roster.read', input.sectionId))) {
-      await log({ subjectKind: 'section', subjectId: input.sectionId, details: { students: rows.length } });
-    }
+    await logView({
+      subjectKind: 'section',
+      subjectId: input.sectionId,
+      details: { students: rows.length },
+    });
     return {
       ...asSectionView(section),
       today: section.today,

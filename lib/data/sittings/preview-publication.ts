@@ -42,13 +42,21 @@ export interface PublicationPreview {
 export const previewPublication = defineVerb({
   action: 'sitting.publish',
   input: sittingIdInput,
-  async run({ actor, input, tx, authorize, found }): Promise<PublicationPreview> {
+  async run({ actor, input, tx, authorize, found, logView }): Promise<PublicationPreview> {
     const sitting = found(await selectSitting(tx, actor.schoolId, input.sittingId));
     authorize(sittingSubject(sitting));
     const gathered = await gatherResults(tx, sitting);
     const results = judgeAll(gathered, true);
     const without = judgeAll(gathered, false);
     const { latest, seen } = gathered;
+    await logView(
+      {
+        subjectKind: 'sitting',
+        subjectId: sitting.sittingId,
+        details: { students: gathered.attempts.length },
+      },
+      'sitting.read',
+    );
     const changed = Math.min(...[results, without].map((judged) => countChanges(sitting, latest, judged)));
     return {
       sittingId: sitting.sittingId,

@@ -1,5 +1,5 @@
 import 'server-only';
-import { insertMissingAttempts, wasViewLogged } from '@/db/queries/rounds';
+import { insertMissingAttempts } from '@/db/queries/rounds';
 import {
   type AttemptRow,
   selectAttempts,
@@ -53,8 +53,8 @@ export interface SittingView {
 export const readSitting = defineVerb({
   action: 'sitting.read',
   input: sittingIdInput,
-  async run({ actor, input, tx, authorize, found, log }): Promise<SittingView> {
-    const { schoolId, personId } = actor;
+  async run({ actor, input, tx, authorize, found, logView }): Promise<SittingView> {
+    const { schoolId } = actor;
     const { sittingId } = input;
     const sitting = found(await selectSitting(tx, schoolId, sittingId));
     authorize(sittingSubject(sitting));
@@ -62,9 +62,7 @@ export const readSitting = defineVerb({
     const rows = await selectAttempts(tx, schoolId, [sittingId]);
     const publications = await selectPublications(tx, schoolId, [sittingId]);
     const missing = await selectMissingNumbers(tx, schoolId, [sittingId]);
-    if (!(await wasViewLogged(tx, schoolId, personId, 'sitting.read', sittingId))) {
-      await log({ subjectKind: 'sitting', subjectId: sittingId, details: { students: rows.length } });
-    }
+    await logView({ subjectKind: 'sitting', subjectId: sittingId, details: { students: rows.length } });
     const { title, practicalId, sectionId, sectionName, period, termName, versionNumber, dueOn } = sitting;
     const shown = rows.filter((row) => row.here || row.recorded !== null || row.standing !== 'expected');
     return {

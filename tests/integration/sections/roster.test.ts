@@ -108,6 +108,20 @@ describe('importRoster', () => {
     expect(await peopleOf()).toBe(before);
   });
 
+  it('logs whom a preview shows who is not in the section', async () => {
+    const known = await makePerson(school, ['student'], { localId: '00502' });
+    const sectionId = await newSection();
+    const roster = { kind: 'csv' as const, text: 'ID,name\n00502,"Someone, Else"' };
+    expect(value(await previewRoster(teacher, { sectionId, roster })).rows).toMatchObject([
+      { known: { familyName: known.familyName } },
+    ]);
+    expect((await logOf(school)).at(-1)).toMatchObject({
+      action: 'roster.read',
+      actor_id: teacher.personId,
+      details: { shown: [known.personId] },
+    });
+  });
+
   it('shows a name conflict, waits for a decision, and lets nobody rename another teacher’s student', async () => {
     const known = await makePerson(school, ['student'], {
       localId: '00503',
@@ -237,11 +251,21 @@ describe('addStudent', () => {
     expect(result.ok ? [] : Object.keys(result.problem.fields ?? {})).toEqual([field]);
   });
 
-  it('names the student who already has the ID', async () => {
+  it('names the own student who already has the ID, and nobody else’s', async () => {
     const sectionId = await newSection();
-    await makePerson(school, ['student'], { localId: '00710', familyName: 'Silva', givenName: 'Rui' });
-    const result = await addStudent(teacher, { sectionId, familyName: 'Silver', localId: '00710' });
-    expect(result.ok ? '' : result.problem.message).toContain('Silva, Rui');
+    const rui = await makePerson(school, ['student'], {
+      localId: '00710',
+      familyName: 'Silva',
+      givenName: 'Rui',
+    });
+    const typed = { sectionId, familyName: 'Silver', localId: '00710' };
+    const asked = async () => {
+      const result = await addStudent(teacher, typed);
+      return result.ok ? '' : result.problem.message;
+    };
+    expect(await asked()).toMatch(/^The ID 00710 belongs to a student of another name/);
+    await newSection([rui.personId]);
+    expect(await asked()).toContain('Silva, Rui');
   });
 
   it('is the own teacher’s alone and leaves nothing behind when its last write fails', async () => {

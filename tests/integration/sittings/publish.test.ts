@@ -47,8 +47,9 @@ beforeAll(async () => {
 
 describe('publishSitting', () => {
   it('tells every student the engine’s own score of what was recorded', async () => {
-    const { teacher, sittingId, attempts, practical, students, school } = await readClass();
+    const { teacher, sittingId, attempts, practical, students, school, sectionId } = await readClass();
     expect(value(await publish(teacher, sittingId))).toEqual({
+      sectionId,
       number: 1,
       scored: 2,
       notRead: 0,
@@ -89,6 +90,15 @@ describe('publishSitting', () => {
       incomplete: [],
       unread: [],
     });
+  });
+
+  it('logs a look at what goes out as a look at the sitting, once an hour', async () => {
+    const { teacher, sittingId, school } = await stageRound();
+    value(await previewPublication(teacher, { sittingId }));
+    value(await previewPublication(teacher, { sittingId }));
+    expect(await logOf(school)).toMatchObject([
+      { action: 'sitting.read', actor_id: teacher.personId, details: { students: 2 } },
+    ]);
   });
 
   it('waits for the teacher’s word before anyone goes out as not read, and then gives no number', async () => {
