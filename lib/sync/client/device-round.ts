@@ -37,6 +37,7 @@ export class DeviceRound implements RoundStore {
   private saidAt = 0;
   private benchEvents = 0;
   private refreshing = false;
+  private asking = false;
 
   constructor(
     private readonly sittingId: string,
@@ -201,11 +202,17 @@ export class DeviceRound implements RoundStore {
     this.tellEvents(rows.flatMap((row) => (row ? [benchEvent(row)] : [])));
   }
 
+  /** One question at a time: a slow network is not asked again before it has answered. */
   private async askInHand(): Promise<void> {
-    if (document.visibilityState !== 'visible') return;
-    if (this.attemptInHand && Date.now() - this.saidAt > STILL_IN_HAND_MS) return this.sayInHand();
-    const fetched = await fetchInHand(this.sittingId, await readDeviceId(this.store));
-    if (fetched.ok) await this.heard(fetched.value);
+    if (this.asking || document.visibilityState !== 'visible') return;
+    this.asking = true;
+    try {
+      if (this.attemptInHand && Date.now() - this.saidAt > STILL_IN_HAND_MS) return await this.sayInHand();
+      const fetched = await fetchInHand(this.sittingId, await readDeviceId(this.store));
+      if (fetched.ok) await this.heard(fetched.value);
+    } finally {
+      this.asking = false;
+    }
   }
 
   private async sayInHand(): Promise<void> {
