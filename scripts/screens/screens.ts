@@ -27,6 +27,22 @@ async function openBench(page: Page, entry?: 'keypad' | 'caliper'): Promise<void
   if (entry) await page.getByRole('button', { name: entry, exact: true }).click();
 }
 
+/** Opens the practical that the student has at this stage, by the words of its next step. */
+async function openTask(
+  page: Page,
+  step: RegExp,
+  sheet: 'task' | 'measure' | 'result' | null,
+): Promise<void> {
+  await page.goto('/my');
+  await page.getByRole('link', { name: step }).first().click();
+  await page.waitForURL(/\/my\/.+/);
+  if (!sheet) return;
+  const address = page.url().replace(/\/(measure|result)$/, '');
+  await page.goto(sheet === 'task' ? address : `${address}/${sheet}`);
+}
+
+const TO_DO = /^(look at the task|go on measuring|lock your readings)/;
+
 export const SCREENS: Screen[] = [
   { role: 'public', name: 'sign-in', path: '/sign-in' },
   {
@@ -78,6 +94,25 @@ export const SCREENS: Screen[] = [
     go: async (page) => {
       await openBench(page);
       await page.getByRole('button', { name: /^student/ }).click();
+    },
+  },
+  { role: 'student', name: 'practicals', path: '/my' },
+  { role: 'student', name: 'task', go: (page) => openTask(page, TO_DO, 'task') },
+  {
+    role: 'student',
+    name: 'measure',
+    go: async (page) => {
+      await openTask(page, TO_DO, 'measure');
+      await page.getByRole('group', { name: 'keys' }).waitFor();
+    },
+  },
+  { role: 'student', name: 'result', go: (page) => openTask(page, /^see your result/, null) },
+  {
+    role: 'student',
+    name: 'receipt',
+    go: async (page) => {
+      await openTask(page, /^see your result/, 'measure');
+      await page.getByText('Your predicted score').waitFor();
     },
   },
 ];

@@ -20,7 +20,7 @@ export interface RoundStage {
 }
 
 /** A sitting that is being marked: a teacher, an aide of these days, two students with an attempt each. */
-export async function stageRound(): Promise<RoundStage> {
+export async function stageRound(given: Parameters<typeof makePractical>[2] = {}): Promise<RoundStage> {
   const school = await makeSchool();
   const teacher = await makeActor(school, 'teacher', { givenName: 'Dayo', familyName: 'Okonjo' });
   const aide = await makeActor(school, 'aide', { givenName: 'Jonah', familyName: 'Pell' });
@@ -29,7 +29,7 @@ export async function stageRound(): Promise<RoundStage> {
   const studentIds = [ana.personId, ben.personId];
   const sectionId = await makeSection(school, { teacherIds: [teacher.personId], studentIds });
   await giveAide(school, sectionId, aide.personId);
-  const practical = await makePractical(school, teacher.personId);
+  const practical = await makePractical(school, teacher.personId, given);
   const { sittingId, attempts } = await makeSitting(school, sectionId, practical, {
     openedBy: teacher.personId,
     studentIds,
