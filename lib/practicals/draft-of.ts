@@ -1,5 +1,5 @@
 import type { Unit } from '@/lib/length';
-import { AXES, type Axis, type Band, type Check, type Points, type SizeRule } from '@/lib/scoring';
+import type { Axis, Band, Check, Points, SizeRule } from '@/lib/scoring';
 import type { CutListLine, LineException, RubricForm } from '@/lib/scoring/rubric-form';
 import { lengthAsTyped, pointsAsTyped, shareAsTyped } from './as-typed';
 import type { DraftCheck, DraftLine, DraftSizeRule, PracticalDraft } from './draft';
@@ -136,16 +136,4 @@ function predictionOf(
     closeWithin: pointsAsTyped(policy.closeWithin),
     close: pointsAsTyped(policy.close),
   };
-}
-
-/** A draft's axes as they are laid out, with the line they belong to; for walking over every price. */
-export function pricedAxes(draft: PracticalDraft): { path: string; rule: DraftSizeRule }[] {
-  const all = AXES.map((axis) => ({ path: `all.sizes.${axis}`, rule: draft.all.sizes[axis] }));
-  const own = draft.lines.flatMap((line, index) =>
-    AXES.flatMap((axis) => {
-      const rule = line.sizes[axis];
-      return rule ? [{ path: `lines.${index}.sizes.${axis}`, rule }] : [];
-    }),
-  );
-  return [...all, ...own];
 }

@@ -1,5 +1,5 @@
 import 'server-only';
-import { selectOthersPublished, selectOwnPracticals } from '@/db/queries/practicals';
+import { selectOthersPublished, selectOwnPracticals } from '@/db/queries/practical-lists';
 import { listPracticalsInput } from '@/lib/contracts/practicals';
 import type { PracticalDraft } from '@/lib/practicals/draft';
 import { countTask, taskSchema } from '@/lib/practicals/task';
