@@ -5,7 +5,7 @@ import { type Problem, problem, type Result } from '@/lib/result';
 /** More than the largest honest batch; what is longer is refused before it is read. */
 const LONGEST_BODY = 2_000_000;
 
-const FOREIGN: Problem = {
+export const FOREIGN: Problem = {
   code: 'forbidden',
   message: 'This request did not come from a page of this product. Nothing was changed.',
 };
@@ -26,6 +26,11 @@ export async function readSameOriginJson(request: Request): Promise<Result<unkno
   } catch {
     return problem('invalid', 'This is not JSON.');
   }
+}
+
+/** Whether the browser says that a page of another site sent this; a typed address and a program say nothing. */
+export function isForeign(headers: Headers): boolean {
+  return ['cross-site', 'same-site'].includes(headers.get('sec-fetch-site') ?? '');
 }
 
 function isSameOrigin(headers: Headers): boolean {

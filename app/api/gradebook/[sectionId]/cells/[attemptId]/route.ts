@@ -1,12 +1,11 @@
 import { currentActor } from '@/lib/auth/session';
 import { explainCell } from '@/lib/data/gradebook/explain-cell';
-import { answer } from '@/lib/transport/route';
+import { answer, route } from '@/lib/transport/route';
 
 /** Where the points of one cell of the gradebook went. */
-export async function GET(
-  _request: Request,
-  { params }: RouteContext<'/api/gradebook/[sectionId]/cells/[attemptId]'>,
-): Promise<Response> {
-  const { sectionId, attemptId } = await params;
-  return answer(await explainCell(await currentActor(), { sectionId, attemptId }));
-}
+export const GET = route(
+  async (_request: Request, { params }: RouteContext<'/api/gradebook/[sectionId]/cells/[attemptId]'>) => {
+    const { sectionId, attemptId } = await params;
+    return answer(await explainCell(await currentActor(), { sectionId, attemptId }));
+  },
+);
