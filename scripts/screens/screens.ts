@@ -17,6 +17,14 @@ export type Screen = { role: ScreenRole; name: string; status?: number } & (
 );
 
 /** Opens the first of today's rounds, with a way of entry where one is named. */
+async function openPractical(page: Page, sheet?: string): Promise<void> {
+  await page.goto('/practicals');
+  await page.getByRole('link', { name: 'Desk caddy' }).first().click();
+  await page.getByRole('heading', { name: 'What it gives' }).waitFor();
+  if (sheet)
+    await page.getByRole('navigation', { name: 'sheets' }).getByRole('link', { name: sheet }).click();
+}
+
 async function openBench(page: Page, entry?: 'keypad' | 'caliper'): Promise<void> {
   await page.goto('/round');
   await page
@@ -94,6 +102,38 @@ export const SCREENS: Screen[] = [
     go: async (page) => {
       await openBench(page);
       await page.getByRole('button', { name: /^student/ }).click();
+    },
+  },
+  { role: 'teacher', name: 'practicals', path: '/practicals' },
+  { role: 'teacher', name: 'practicals-put-away', path: '/practicals?put=away' },
+  { role: 'teacher', name: 'new-practical', path: '/practicals/new' },
+  { role: 'teacher', name: 'practical', go: (page) => openPractical(page) },
+  { role: 'teacher', name: 'practical-task', go: (page) => openPractical(page, 'task') },
+  { role: 'teacher', name: 'practical-rules', go: (page) => openPractical(page, 'total and rules') },
+  {
+    role: 'teacher',
+    name: 'practical-line',
+    go: async (page) => {
+      await openPractical(page);
+      await page.getByRole('button', { name: /^line 2, end/ }).click();
+    },
+  },
+  {
+    role: 'teacher',
+    name: 'practical-checks',
+    go: async (page) => {
+      await openPractical(page);
+      await page.getByRole('button', { name: /^checks, all lines/ }).click();
+    },
+  },
+  { role: 'head', name: 'department', path: '/department' },
+  {
+    role: 'head',
+    name: 'compare',
+    go: async (page) => {
+      await page.goto('/department');
+      await page.getByRole('form', { name: 'rubrics of Desk caddy' }).getByRole('button').click();
+      await page.getByRole('heading', { name: /^Desk caddy, / }).waitFor();
     },
   },
   { role: 'student', name: 'practicals', path: '/my' },
