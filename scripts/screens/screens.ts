@@ -16,7 +16,7 @@ export type Screen = { role: ScreenRole; name: string; status?: number } & (
   | { go: (page: Page) => Promise<void> }
 );
 
-/** Opens the first of today's rounds, with a way of entry where one is named. */
+/** The practical on its desk, with one of its sheets on top. */
 async function openPractical(page: Page, sheet?: string): Promise<void> {
   await page.goto('/practicals');
   await page.getByRole('link', { name: 'Desk caddy' }).first().click();
@@ -25,6 +25,7 @@ async function openPractical(page: Page, sheet?: string): Promise<void> {
     await page.getByRole('navigation', { name: 'sheets' }).getByRole('link', { name: sheet }).click();
 }
 
+/** Opens the first of today's rounds, with a way of entry where one is named. */
 async function openBench(page: Page, entry?: 'keypad' | 'caliper'): Promise<void> {
   await page.goto('/round');
   await page
