@@ -1,15 +1,12 @@
-import { and, asc, count, desc, eq, gt, inArray, isNotNull, isNull, ne, or, sql } from 'drizzle-orm';
+import { and, asc, count, desc, eq, inArray, or, sql } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
 import {
   attempts,
   enrollments,
-  inHand,
   people,
-  practicals,
   readingEvents,
   rubricVersions,
   schools,
-  scoreSheets,
   sectionStaff,
   sections,
   sittings,
@@ -213,144 +210,4 @@ export async function countBenchEvents(tx: Transaction, schoolId: string, sittin
       ),
     );
   return row?.total ?? 0;
-}
-
-/** A device that has not been heard of for this long has put the pieces down. */
-const IN_HAND_FOR = sql`interval '2 minutes'`;
-
-export function selectInHand(
-  tx: Transaction,
-  schoolId: string,
-  sittingId: string,
-  exceptDevice: string | null,
-) {
-  return tx
-    .select({
-      attemptId: inHand.attemptId,
-      deviceId: inHand.deviceId,
-      since: inHand.since,
-      givenName: people.givenName,
-      familyName: people.familyName,
-    })
-    .from(inHand)
-    .innerJoin(people, and(eq(people.schoolId, inHand.schoolId), eq(people.id, inHand.personId)))
-    .where(
-      and(
-        eq(inHand.schoolId, schoolId),
-        eq(inHand.sittingId, sittingId),
-        exceptDevice === null ? undefined : ne(inHand.deviceId, exceptDevice),
-        gt(inHand.seenAt, sql`now() - ${IN_HAND_FOR}`),
-      ),
-    )
-    .orderBy(asc(inHand.since), asc(inHand.deviceId));
-}
-
-export async function upsertInHand(tx: Transaction, row: typeof inHand.$inferInsert): Promise<void> {
-  await tx
-    .insert(inHand)
-    .values(row)
-    .onConflictDoUpdate({
-      target: [inHand.schoolId, inHand.sittingId, inHand.deviceId],
-      set: {
-        personId: sql`excluded.person_id`,
-        attemptId: sql`excluded.attempt_id`,
-        since: sql`case when ${inHand.attemptId} = excluded.attempt_id then ${inHand.since} else now() end`,
-        seenAt: sql`now()`,
-      },
-    });
-}
-
-export async function deleteInHand(
-  tx: Transaction,
-  schoolId: string,
-  sittingId: string,
-  deviceId: string,
-): Promise<void> {
-  await tx
-    .delete(inHand)
-    .where(
-      and(eq(inHand.schoolId, schoolId), eq(inHand.sittingId, sittingId), eq(inHand.deviceId, deviceId)),
-    );
-}
-
-/** Open sittings of the sections in which the person works today in that duty, with how far each has come. */
-export function selectRounds(tx: Transaction, schoolId: string, personId: string, duty: 'teacher' | 'aide') {
-  const enrolled = tx
-    .select({ sectionId: enrollments.sectionId, students: count().as('students') })
-    .from(enrollments)
-    .innerJoin(schools, eq(schools.id, enrollments.schoolId))
-    .where(and(eq(enrollments.schoolId, schoolId), inSectionToday))
-    .groupBy(enrollments.sectionId)
-    .as('enrolled');
-  const progress = tx
-    .select({
-      sittingId: attempts.sittingId,
-      finished: sql<number>`count(*) filter (where ${scoreSheets.finished})::int`.as('finished'),
-      begun:
-        sql<number>`count(*) filter (where not ${scoreSheets.finished} and ${isNotNull(scoreSheets.measuredAt)})::int`.as(
-          'begun',
-        ),
-      absent: sql<number>`count(*) filter (where ${attempts.standing} = 'absent')::int`.as('absent'),
-      conflicts: sql<number>`coalesce(sum(${scoreSheets.conflicts}), 0)::int`.as('conflicts'),
-    })
-    .from(attempts)
-    .leftJoin(
-      scoreSheets,
-      and(
-        eq(scoreSheets.schoolId, attempts.schoolId),
-        eq(scoreSheets.attemptId, attempts.id),
-        eq(scoreSheets.side, 'bench'),
-      ),
-    )
-    .where(eq(attempts.schoolId, schoolId))
-    .groupBy(attempts.sittingId)
-    .as('progress');
-  return tx
-    .select({
-      sittingId: sittings.id,
-      title: practicals.title,
-      sectionName: sections.name,
-      period: sections.period,
-      state: sittings.state,
-      dueOn: sittings.dueOn,
-      openedAt: sittings.openedAt,
-      versionNumber: rubricVersions.number,
-      students: sql<number>`coalesce(${enrolled.students}, 0)::int`,
-      finished: sql<number>`coalesce(${progress.finished}, 0)`,
-      begun: sql<number>`coalesce(${progress.begun}, 0)`,
-      absent: sql<number>`coalesce(${progress.absent}, 0)`,
-      conflicts: sql<number>`coalesce(${progress.conflicts}, 0)`,
-    })
-    .from(sittings)
-    .innerJoin(sections, and(eq(sections.schoolId, sittings.schoolId), eq(sections.id, sittings.sectionId)))
-    .innerJoin(schools, eq(schools.id, sittings.schoolId))
-    .innerJoin(
-      practicals,
-      and(eq(practicals.schoolId, sittings.schoolId), eq(practicals.id, sittings.practicalId)),
-    )
-    .innerJoin(
-      rubricVersions,
-      and(eq(rubricVersions.schoolId, sittings.schoolId), eq(rubricVersions.id, sittings.rubricVersionId)),
-    )
-    .innerJoin(
-      sectionStaff,
-      and(
-        eq(sectionStaff.schoolId, sittings.schoolId),
-        eq(sectionStaff.sectionId, sittings.sectionId),
-        eq(sectionStaff.personId, personId),
-        eq(sectionStaff.duty, duty),
-        or(isNull(sectionStaff.fromDay), sql`${sectionStaff.fromDay} <= ${schoolToday}`),
-        or(isNull(sectionStaff.toDay), sql`${sectionStaff.toDay} >= ${schoolToday}`),
-      ),
-    )
-    .leftJoin(enrolled, eq(enrolled.sectionId, sections.id))
-    .leftJoin(progress, eq(progress.sittingId, sittings.id))
-    .where(
-      and(
-        eq(sittings.schoolId, schoolId),
-        isNull(sections.archivedAt),
-        duty === 'aide' ? eq(sittings.state, 'open') : undefined,
-      ),
-    )
-    .orderBy(desc(sittings.state), asc(sections.period), asc(sections.name), desc(sittings.openedAt));
 }

@@ -1,6 +1,7 @@
 import 'server-only';
 import type { Transaction } from '@/db/client';
-import { countBenchEvents, selectInHand } from '@/db/queries/rounds';
+import { selectInHand } from '@/db/queries/in-hand';
+import { countBenchEvents } from '@/db/queries/rounds';
 import type { InHandView } from '@/lib/contracts/rounds';
 
 /** Who has whose pieces in hand on other devices, and how many events the bench has in all. */

@@ -1,6 +1,6 @@
 import 'server-only';
 import { z } from 'zod';
-import { selectRounds } from '@/db/queries/rounds';
+import { selectRounds } from '@/db/queries/round-list';
 import { defineVerb } from '../verb';
 
 export interface RoundRow {

@@ -1,5 +1,6 @@
 import 'server-only';
-import { deleteInHand, lockAttempts, selectRound, upsertInHand } from '@/db/queries/rounds';
+import { deleteInHand, upsertInHand } from '@/db/queries/in-hand';
+import { lockAttempts, selectRound } from '@/db/queries/rounds';
 import { type InHandView, takeInHandInput } from '@/lib/contracts/rounds';
 import { defineVerb } from '../verb';
 import { inHandView } from './in-hand-view';
