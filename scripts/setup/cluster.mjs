@@ -53,13 +53,19 @@ async function clusterFolder(name) {
   throw new SetupError(`The user "postgres" can enter neither of these folders: ${folders.join(', ')}`);
 }
 
+/** After a power cut another program may have the number that a server left behind; that one is no business of ours. */
+function isPostgres(pid) {
+  const file = `/proc/${pid}/comm`;
+  return existsSync(file) && readFileSync(file, 'utf8').trim() === 'postgres';
+}
+
 /** Process id and port of the server that runs on a data folder; undefined when none does. */
 function runningServer(data) {
   const file = join(data, 'postmaster.pid');
   if (!existsSync(file)) return undefined;
   const lines = readFileSync(file, 'utf8').split('\n');
   const pid = Number(lines[0]);
-  return existsSync(`/proc/${pid}`) ? { pid, port: Number(lines[3]) } : undefined;
+  return isPostgres(pid) ? { pid, port: Number(lines[3]) } : undefined;
 }
 
 function programsFor(data) {
