@@ -1,7 +1,6 @@
 import 'server-only';
 import type { z } from 'zod';
-import { selectDepartment } from '@/db/queries/departments';
-import { insertSection } from '@/db/queries/sections';
+import { insertSection, selectTeachingDepartments } from '@/db/queries/sections';
 import { insertTerm, isTermNameTaken, selectTerm } from '@/db/queries/terms';
 import { createSectionInput, NEW_TERM } from '@/lib/contracts/sections';
 import { type Context, defineVerb } from '../verb';
@@ -17,8 +16,9 @@ export const createSection = defineVerb({
     const { schoolId } = actor;
     authorize({ schoolId });
     const { name, period, departmentId } = input;
-    if (!(await selectDepartment(tx, schoolId, departmentId))) {
-      refuseFields({ departmentId: ['Choose a department of your school.'] });
+    const own = await selectTeachingDepartments(tx, schoolId, actor.personId);
+    if (!own.some((department) => department.departmentId === departmentId)) {
+      refuseFields({ departmentId: ['Choose a department that you teach in.'] });
     }
     const termId = await findTerm(context);
     const sectionId = await insertSection(

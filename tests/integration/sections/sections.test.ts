@@ -5,6 +5,7 @@ import { listSections } from '@/lib/data/sections/list-sections';
 import { readSectionRoster } from '@/lib/data/sections/read-roster';
 import { readSectionChoices } from '@/lib/data/sections/read-section-choices';
 import type { Result } from '@/lib/result';
+import { ownerSql } from '@/tests/support/database';
 import {
   logOf,
   makeActor,
@@ -79,6 +80,12 @@ describe('createSection', () => {
   ])('points at the field that is wrong: %j', async (more, field) => {
     const result = await createSection(teacher, input(more));
     expect(result.ok ? [] : Object.keys(result.problem.fields ?? {})).toEqual([field]);
+  });
+
+  it('takes no department that the teacher does not teach in', async () => {
+    const [metal] = await ownerSql()<{ id: string }[]>`
+      insert into departments (school_id, name) values (${school.id}, 'Metal') returning id`;
+    expect(code(await createSection(teacher, input({ departmentId: metal?.id })))).toBe('invalid');
   });
 
   it('takes no department of another school', async () => {
