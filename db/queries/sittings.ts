@@ -5,23 +5,15 @@ import {
   enrollments,
   people,
   practicals,
-  publications,
   readingEvents,
-  results,
   rubricVersions,
   schools,
   scoreSheets,
-  sectionStaff,
   sections,
   sittings,
   terms,
 } from '@/db/schema';
-import { inSectionToday, schoolToday } from './sections';
-
-const teacherIds = sql<string[]>`array(
-  select staff.person_id from ${sectionStaff} staff
-  where staff.school_id = ${sections.schoolId} and staff.section_id = ${sections.id} and staff.duty = 'teacher'
-    and (staff.to_day is null or staff.to_day >= ${schoolToday}))`;
+import { inSectionToday, schoolToday, teacherIds } from './sections';
 
 /** A sitting with its section, its version and what permission depends on. */
 export async function selectSitting(tx: Transaction, schoolId: string, sittingId: string) {
@@ -363,54 +355,4 @@ export async function insertAttempt(tx: Transaction, row: typeof attempts.$infer
   const [made] = await tx.insert(attempts).values(row).returning({ id: attempts.id });
   if (!made) throw new Error('The database kept no attempt.');
   return made.id;
-}
-
-/** The publications of the sittings, the latest first, with who published. */
-export function selectPublications(tx: Transaction, schoolId: string, sittingIds: readonly string[]) {
-  return tx
-    .select({
-      publicationId: publications.id,
-      sittingId: publications.sittingId,
-      number: publications.number,
-      rubricVersionId: publications.rubricVersionId,
-      versionNumber: rubricVersions.number,
-      publishedAt: publications.publishedAt,
-    })
-    .from(publications)
-    .innerJoin(
-      rubricVersions,
-      and(
-        eq(rubricVersions.schoolId, publications.schoolId),
-        eq(rubricVersions.id, publications.rubricVersionId),
-      ),
-    )
-    .where(and(eq(publications.schoolId, schoolId), inArray(publications.sittingId, [...sittingIds])))
-    .orderBy(asc(publications.sittingId), desc(publications.number));
-}
-
-export type PublicationRow = Awaited<ReturnType<typeof selectPublications>>[number];
-
-export function selectResults(tx: Transaction, schoolId: string, publicationIds: readonly string[]) {
-  return tx
-    .select()
-    .from(results)
-    .where(and(eq(results.schoolId, schoolId), inArray(results.publicationId, [...publicationIds])));
-}
-
-export type ResultRow = Awaited<ReturnType<typeof selectResults>>[number];
-
-export async function insertPublication(
-  tx: Transaction,
-  row: typeof publications.$inferInsert,
-): Promise<string> {
-  const [made] = await tx.insert(publications).values(row).returning({ id: publications.id });
-  if (!made) throw new Error('The database kept no publication.');
-  return made.id;
-}
-
-export async function insertResults(
-  tx: Transaction,
-  rows: readonly (typeof results.$inferInsert)[],
-): Promise<void> {
-  if (rows.length > 0) await tx.insert(results).values([...rows]);
 }

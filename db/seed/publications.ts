@@ -1,5 +1,6 @@
 import type { Transaction } from '@/db/client';
-import { insertPublication, insertResults, selectSitting, updateSitting } from '@/db/queries/sittings';
+import { insertPublication, insertResults } from '@/db/queries/publications';
+import { selectSitting, updateSitting } from '@/db/queries/sittings';
 import { asTold, gatherResults, judgeAll } from '@/lib/data/sittings/gather-results';
 import type { SeededSchool } from './people';
 import { morningOf } from './practicals';

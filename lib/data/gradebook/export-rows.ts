@@ -1,4 +1,4 @@
-import type { ResultRow } from '@/db/queries/sittings';
+import type { ResultRow } from '@/db/queries/publications';
 import { scoreSheetSchema } from '@/lib/contracts/results';
 import { decimalLength } from '@/lib/csv/decimal-length';
 import { type CsvCell, hundredthsAsDecimal } from '@/lib/csv/write-csv';

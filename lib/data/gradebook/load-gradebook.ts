@@ -2,13 +2,12 @@ import 'server-only';
 import type { Transaction } from '@/db/client';
 import { selectSittingsOf, selectVersion } from '@/db/queries/gradebook';
 import {
-  type AttemptRow,
   type PublicationRow,
   type ResultRow,
-  selectAttempts,
   selectPublications,
   selectResults,
-} from '@/db/queries/sittings';
+} from '@/db/queries/publications';
+import { type AttemptRow, selectAttempts } from '@/db/queries/sittings';
 import { type Task, taskSchema } from '@/lib/practicals/task';
 import type { Rubric } from '@/lib/scoring';
 import type { RubricForm } from '@/lib/scoring/rubric-form';

@@ -14,7 +14,11 @@ export function asSectionView(row: SectionRow): SectionView {
   return { sectionId, name, period, termName, studentCount };
 }
 
-/** The section as the policy asks for it. */
-export function sectionSubject({ schoolId, departmentId, teacherIds }: SectionRow): Subject {
+/** The section, or a sitting of it, as the policy asks for it. */
+export function sectionSubject({
+  schoolId,
+  departmentId,
+  teacherIds,
+}: Pick<SectionRow, 'schoolId' | 'departmentId' | 'teacherIds'>): Subject {
   return { schoolId, departmentId, teacherIds };
 }

@@ -1,9 +1,9 @@
 import 'server-only';
 import { selectSitting } from '@/db/queries/sittings';
 import { changeAttemptInput } from '@/lib/contracts/sittings';
+import { sectionSubject } from '../sections/section-view';
 import { defineVerb } from '../verb';
 import { recordAtDesk } from './record-at-desk';
-import { sittingSubject } from './sitting-subject';
 
 /**
  * What a teacher decides about an attempt at the desk: whether the student is expected, absent, excused or gets a zero,
@@ -16,7 +16,7 @@ export const changeAttempt = defineVerb({
   async run({ actor, input, tx, authorize, found, log }): Promise<{ changed: boolean }> {
     const { sittingId, attemptId, standing, days } = input;
     const sitting = found(await selectSitting(tx, actor.schoolId, sittingId));
-    authorize(sittingSubject(sitting));
+    authorize(sectionSubject(sitting));
     const noted = found(
       await recordAtDesk(tx, actor, sitting, attemptId, [
         ...(standing === undefined

@@ -1,8 +1,8 @@
 import 'server-only';
 import { lockSitting, selectSitting, updateSitting } from '@/db/queries/sittings';
 import { changeDueInput } from '@/lib/contracts/sittings';
+import { sectionSubject } from '../sections/section-view';
 import { defineVerb } from '../verb';
-import { sittingSubject } from './sitting-subject';
 
 /** The day the pieces are due, or none. */
 export const changeDue = defineVerb({
@@ -12,7 +12,7 @@ export const changeDue = defineVerb({
     const { sittingId, dueOn } = input;
     await lockSitting(tx, actor.schoolId, sittingId);
     const sitting = found(await selectSitting(tx, actor.schoolId, sittingId));
-    authorize(sittingSubject(sitting));
+    authorize(sectionSubject(sitting));
     await updateSitting(tx, actor.schoolId, sittingId, { dueOn });
     await log({ subjectKind: 'sitting', subjectId: sittingId, details: { dueOn, before: sitting.dueOn } });
     return { dueOn };

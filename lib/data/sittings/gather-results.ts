@@ -1,17 +1,14 @@
 import 'server-only';
 import { createHash } from 'node:crypto';
 import type { Transaction } from '@/db/client';
-import { insertMissingAttempts, lockAttempts } from '@/db/queries/rounds';
 import {
-  type AttemptRow,
   type PublicationRow,
   type ResultRow,
-  type SittingRow,
-  selectAttempts,
-  selectLockEvents,
   selectPublications,
   selectResults,
-} from '@/db/queries/sittings';
+} from '@/db/queries/publications';
+import { insertMissingAttempts, lockAttempts } from '@/db/queries/rounds';
+import { type AttemptRow, type SittingRow, selectAttempts, selectLockEvents } from '@/db/queries/sittings';
 import { scoreSheetSchema } from '@/lib/contracts/results';
 import type { Rubric } from '@/lib/scoring';
 import type { PredictionPolicy } from '@/lib/scoring/rubric-form';

@@ -1,6 +1,7 @@
 import 'server-only';
 import { z } from 'zod';
-import { selectProgress, selectPublications, selectSittingsOfTeacher } from '@/db/queries/sittings';
+import { selectPublications } from '@/db/queries/publications';
+import { selectProgress, selectSittingsOfTeacher } from '@/db/queries/sittings';
 import { defineVerb } from '../verb';
 
 export interface SittingListView {

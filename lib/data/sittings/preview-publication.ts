@@ -2,9 +2,9 @@ import 'server-only';
 import { selectSitting } from '@/db/queries/sittings';
 import { sittingIdInput } from '@/lib/contracts/sittings';
 import type { Points } from '@/lib/scoring';
+import { sectionSubject } from '../sections/section-view';
 import { defineVerb } from '../verb';
 import { countChanges, type GatheredResult, gatherResults, judgeAll } from './gather-results';
-import { sittingSubject } from './sitting-subject';
 
 export interface StudentName {
   studentId: string;
@@ -44,7 +44,7 @@ export const previewPublication = defineVerb({
   input: sittingIdInput,
   async run({ actor, input, tx, authorize, found, logView }): Promise<PublicationPreview> {
     const sitting = found(await selectSitting(tx, actor.schoolId, input.sittingId));
-    authorize(sittingSubject(sitting));
+    authorize(sectionSubject(sitting));
     const gathered = await gatherResults(tx, sitting);
     const results = judgeAll(gathered, true);
     const without = judgeAll(gathered, false);

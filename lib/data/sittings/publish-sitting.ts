@@ -1,13 +1,9 @@
 import 'server-only';
 import type { z } from 'zod';
-import {
-  insertPublication,
-  insertResults,
-  lockSitting,
-  selectSitting,
-  updateSitting,
-} from '@/db/queries/sittings';
+import { insertPublication, insertResults } from '@/db/queries/publications';
+import { lockSitting, selectSitting, updateSitting } from '@/db/queries/sittings';
 import { publishInput } from '@/lib/contracts/sittings';
+import { sectionSubject } from '../sections/section-view';
 import { type Context, defineVerb } from '../verb';
 import {
   asTold,
@@ -17,7 +13,6 @@ import {
   gatherResults,
   judgeAll,
 } from './gather-results';
-import { sittingSubject } from './sitting-subject';
 
 export interface PublishedView {
   sectionId: string;
@@ -42,7 +37,7 @@ export const publishSitting = defineVerb({
     const { schoolId, personId } = actor;
     await lockSitting(tx, schoolId, input.sittingId);
     const sitting = found(await selectSitting(tx, schoolId, input.sittingId));
-    authorize(sittingSubject(sitting));
+    authorize(sectionSubject(sitting));
     const gathered = await gatherResults(tx, sitting);
     if (gathered.seen !== input.seen) {
       refuse('stale', 'Something has changed since you looked: look at what goes out again.');

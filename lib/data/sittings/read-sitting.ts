@@ -1,15 +1,10 @@
 import 'server-only';
+import { selectPublications } from '@/db/queries/publications';
 import { insertMissingAttempts } from '@/db/queries/rounds';
-import {
-  type AttemptRow,
-  selectAttempts,
-  selectMissingNumbers,
-  selectPublications,
-  selectSitting,
-} from '@/db/queries/sittings';
+import { type AttemptRow, selectAttempts, selectMissingNumbers, selectSitting } from '@/db/queries/sittings';
 import { sittingIdInput } from '@/lib/contracts/sittings';
+import { sectionSubject } from '../sections/section-view';
 import { defineVerb } from '../verb';
-import { sittingSubject } from './sitting-subject';
 
 export interface SittingStudentView {
   attemptId: string;
@@ -57,7 +52,7 @@ export const readSitting = defineVerb({
     const { schoolId } = actor;
     const { sittingId } = input;
     const sitting = found(await selectSitting(tx, schoolId, sittingId));
-    authorize(sittingSubject(sitting));
+    authorize(sectionSubject(sitting));
     if (sitting.state === 'open') await insertMissingAttempts(tx, schoolId, sittingId, sitting.sectionId);
     const rows = await selectAttempts(tx, schoolId, [sittingId]);
     const publications = await selectPublications(tx, schoolId, [sittingId]);

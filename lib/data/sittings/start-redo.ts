@@ -1,8 +1,8 @@
 import 'server-only';
 import { insertAttempt, lockSitting, selectAttempts, selectSitting } from '@/db/queries/sittings';
 import { startRedoInput } from '@/lib/contracts/sittings';
+import { sectionSubject } from '../sections/section-view';
 import { defineVerb } from '../verb';
-import { sittingSubject } from './sitting-subject';
 
 const MOST_ATTEMPTS = 20;
 
@@ -14,7 +14,7 @@ export const startRedo = defineVerb({
     const { sittingId, studentId } = input;
     await lockSitting(tx, actor.schoolId, sittingId);
     const sitting = found(await selectSitting(tx, actor.schoolId, sittingId));
-    authorize(sittingSubject(sitting));
+    authorize(sectionSubject(sitting));
     const all = await selectAttempts(tx, actor.schoolId, [sittingId]);
     const last = found(all.filter((attempt) => attempt.studentId === studentId).at(-1));
     if (!last.here) refuse('conflict', 'This student is no longer in the section.');
