@@ -31,6 +31,8 @@ export class Outbox {
   private running: Promise<void> | null = null;
   private again = false;
   private stopped = false;
+  /** Sittings that the server does not take from this person now, with what it said; the others go on. */
+  private readonly barred = new Map<string, string>();
   private readonly listeners = new Set<(state: OutboxState) => void>();
   current: OutboxState = { state: 'idle' };
 
@@ -70,6 +72,7 @@ export class Outbox {
     let mine = false;
     await this.world.alone(async () => {
       mine = true;
+      this.barred.clear();
       do {
         this.again = false;
         while (!this.stopped && (await this.sendBatch())) this.failures = 0;
@@ -80,12 +83,9 @@ export class Outbox {
 
   /** One batch: true when it moved something on and more may follow. */
   private async sendBatch(): Promise<boolean> {
-    const batch = await nextBatch(this.store, this.personId);
+    const batch = await nextBatch(this.store, this.personId, this.barred);
     const [first] = batch;
-    if (!first) {
-      this.tell({ state: 'idle' });
-      return false;
-    }
+    if (!first) return this.rest();
     this.tell({ state: 'sending' });
     const reply = await this.world.post(first.sittingId, {
       protocol: PROTOCOL_VERSION,
@@ -105,6 +105,10 @@ export class Outbox {
       case 'unreadable':
         return this.sendSingly(batch, reply.message);
       case 'halt':
+        if (reply.why === 'refused' && batch[0]) {
+          this.barred.set(batch[0].sittingId, reply.message);
+          return true;
+        }
         this.tell({ state: 'halted', why: reply.why, message: reply.message });
         this.retry(AFTER_HALT_MS);
         return false;
@@ -126,8 +130,20 @@ export class Outbox {
         events: [event],
       });
       if (!(await this.settle([row], reply))) return false;
+      if (this.barred.has(sittingId)) break;
     }
     return true;
+  }
+
+  /** Nothing more can be sent now: all has arrived, or what is left is for a sitting that is not taken. */
+  private rest(): false {
+    const [message] = this.barred.values();
+    if (message === undefined) this.tell({ state: 'idle' });
+    else {
+      this.tell({ state: 'halted', why: 'refused', message });
+      this.retry(AFTER_HALT_MS);
+    }
+    return false;
   }
 
   private wait(message: string, atLeastMs: number | null): false {
@@ -149,9 +165,14 @@ export class Outbox {
   }
 }
 
-/** The oldest events of one sitting and device that wait, in the order they were made. */
-async function nextBatch(store: DeviceStore, personId: string): Promise<OutboxRow[]> {
-  const waiting = await store.outbox.where('[authorId+state]').equals([personId, 'waiting']).toArray();
+/** The oldest events of one sitting and device that wait, in the order they were made; none of a barred sitting. */
+async function nextBatch(
+  store: DeviceStore,
+  personId: string,
+  barred: ReadonlyMap<string, string>,
+): Promise<OutboxRow[]> {
+  const all = await store.outbox.where('[authorId+state]').equals([personId, 'waiting']).toArray();
+  const waiting = all.filter(({ sittingId }) => !barred.has(sittingId));
   waiting.sort((a, b) => a.sequence - b.sequence);
   const [first] = waiting;
   return waiting

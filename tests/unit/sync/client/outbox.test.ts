@@ -131,6 +131,25 @@ describe('the outbox', () => {
     expect(world.timers).toHaveLength(1);
   });
 
+  test('a sitting that is not taken from this person holds up no other, and is tried again later', async () => {
+    const other = randomUUID();
+    const [mine] = await keepOnDevice(store, SITTING, [draft()]);
+    await keepOnDevice(store, other, [draft(), draft()]);
+    const { world, box } = await outbox(
+      () => ({ kind: 'halt', why: 'refused', message: 'Not yours.' }),
+      keepAll,
+    );
+    await box.nudge();
+    expect(world.pushes.map(({ sittingId }) => sittingId)).toEqual([SITTING, other]);
+    expect(await store.outbox.toArray()).toMatchObject([{ id: mine?.id, state: 'waiting' }]);
+    expect(box.current).toEqual({ state: 'halted', why: 'refused', message: 'Not yours.' });
+    expect(world.timers).toHaveLength(1);
+    world.timers[0]?.work();
+    await box.nudge();
+    expect(await store.outbox.count()).toBe(0);
+    expect(box.current).toEqual({ state: 'idle' });
+  });
+
   test('a refused event is parked with its reason and holds up no other', async () => {
     const [bad, good] = await keepOnDevice(store, SITTING, [draft(), draft()]);
     const { box } = await outbox((push) =>
