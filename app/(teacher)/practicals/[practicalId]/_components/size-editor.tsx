@@ -1,25 +1,18 @@
 'use client';
 
-import { RuleFace } from '@/components/rule/rule-face';
 import { Button } from '@/components/ui/button';
 import { CheckboxField } from '@/components/ui/choice';
 import { LengthText } from '@/components/ui/fraction';
 import { Heading } from '@/components/ui/titles';
 import { readSizeRule } from '@/lib/practicals/parse-size-rule';
-import { ruleScaleOf } from '@/lib/practicals/rule-scale-of';
-import type { Axis, SizeRule } from '@/lib/scoring';
+import type { Axis } from '@/lib/scoring';
 import { BandFields } from './band-fields';
 import { lineOf, useEditor } from './editor-context';
 import { PresetKeys } from './preset-keys';
-import { marginOf, readSize, targetOf } from './read-draft';
+import { OFF, PriceOnRule } from './price-on-rule';
+import { readSize, targetOf } from './read-draft';
 import { FindingText } from './row-notes';
 import { type SizeRuleDesk, useSizeRule } from './use-size-rule';
-
-const OFF: Record<Axis, [under: string, over: string]> = {
-  thickness: ['thin', 'thick'],
-  width: ['narrow', 'wide'],
-  length: ['short', 'long'],
-};
 
 /** The price of one size on its rule: what is typed below stands on it at once. */
 export function SizeEditor({ lineId, axis }: { lineId: string | null; axis: Axis }) {
@@ -51,7 +44,7 @@ export function SizeEditor({ lineId, axis }: { lineId: string | null; axis: Axis
         {size.isOwn ? <PresetKeys size={size} read={read} /> : null}
       </div>
       {read ? (
-        <PriceOnRule rule={read} axis={axis} target={target} label={`${name}, ${axis}`} />
+        <PriceOnRule rule={read} name={`${name}, ${axis}`} {...{ size, axis, target }} />
       ) : (
         <p className="border-y border-hair py-6 text-ink-2">
           The rule is drawn again as soon as every band below can be read.
@@ -84,50 +77,5 @@ function Owner({ size }: { size: SizeRuleDesk }) {
         price it by itself
       </Button>
     </p>
-  );
-}
-
-interface PriceOnRuleProps {
-  rule: SizeRule;
-  axis: Axis;
-  target: number;
-  label: string;
-}
-
-/** Every second graduation is numbered on a phone; an odd span keeps the outermost number off the paper's edge. */
-function oddSpan(span: number): number {
-  return span % 2 === 0 ? span - 1 : span;
-}
-
-/** Where there is room for them, the band edges stand on the rule as knives. */
-function PriceOnRule({ rule, axis, target, label }: PriceOnRuleProps) {
-  const { desk, unit } = useEditor();
-  const margin = marginOf(desk.draft);
-  const [under, over] = OFF[axis];
-  const edges = (['under', 'over'] as const).flatMap((side) =>
-    rule[side].filter(({ within }) => within > 0).map(({ within }) => ({ side, within })),
-  );
-  const face = { unit, target, rule, margin, label, ...ruleScaleOf([rule], unit) };
-  return (
-    <div className="@container">
-      <div className="flex justify-between text-label @min-[920px]:-mb-5">
-        <span>− under: {under}</span>
-        <span>over: {over} +</span>
-      </div>
-      <div className="@min-[560px]:hidden">
-        <RuleFace {...face} span={oddSpan(face.span)} variant="phone" />
-      </div>
-      <div className="hidden @min-[560px]:block @min-[920px]:hidden">
-        <RuleFace {...face} variant="card" />
-      </div>
-      <div className="hidden @min-[920px]:block">
-        <RuleFace {...face} edges={edges} variant="wide" />
-      </div>
-      {margin > 0 ? (
-        <p className="mt-1 text-small text-ink-2">
-          reading margin <LengthText ticks={margin} unit={unit} />: each price begins this far past its edge
-        </p>
-      ) : null}
-    </div>
   );
 }
