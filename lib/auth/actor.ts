@@ -7,7 +7,7 @@ export interface Actor {
   role: Role;
   /** Every role the person holds; the session acts in one of them. */
   roles: Role[];
-  /** The department that a head leads. */
+  /** The department that a head leads, or that a teacher teaches in. */
   departmentId: string | null;
   givenName: string;
   familyName: string;

@@ -41,12 +41,10 @@ const keepOwnEvents = defineVerb({
   action: 'own.record',
   input: keepEventsInput,
   async run(context): Promise<PushAnswer> {
-    const { actor, input, tx, found, authorize, refuse } = context;
+    const { actor, input, tx, found, authorize } = context;
     const round = found(await selectRound(tx, actor.schoolId, input.sittingId));
-    authorize({ schoolId: round.schoolId, studentId: actor.personId });
-    if (!(await isOwnSitting(tx, actor.schoolId, round.sittingId, actor.personId))) {
-      refuse('not_found', 'There is nothing here, or it is not yours to see.');
-    }
+    const own = await isOwnSitting(tx, actor.schoolId, round.sittingId, actor.personId);
+    authorize({ schoolId: round.schoolId, studentId: own ? actor.personId : null });
     const sender = { personId: actor.personId, kind: 'student' as const };
     return keep(context, round, { ...sender, mayFinish: false, maySettle: false, accessEnded: false });
   },
