@@ -28,7 +28,7 @@ export function Logo({ edge = 'never' }: LogoProps) {
       )}
     >
       <Mark className="mr-[0.34em] h-[0.84em] w-auto shrink-0" />
-      <span className="-mb-[0.135em] font-title font-[640]">Trymark</span>
+      <span className="-mb-[0.09em] font-title font-[640]">Trymark</span>
     </span>
   );
 }
