@@ -25,10 +25,6 @@ export interface Problem {
 
 export type Result<T> = { ok: true; value: T } | { ok: false; problem: Problem };
 
-export function done<T>(value: T): Result<T> {
-  return { ok: true, value };
-}
-
 export function problem(
   code: ProblemCode,
   message: string,

@@ -1,6 +1,7 @@
 import 'server-only';
 import { selectFiles } from '@/db/queries/gradebook';
-import { selectRoster, selectSection, selectSections } from '@/db/queries/sections';
+import { selectRoster } from '@/db/queries/rosters';
+import { selectSection, selectSections } from '@/db/queries/sections';
 import { selectMissingNumbers } from '@/db/queries/sittings';
 import type { Actor } from '@/lib/auth/actor';
 import { may } from '@/lib/auth/policy';

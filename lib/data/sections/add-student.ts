@@ -1,5 +1,6 @@
 import 'server-only';
-import { lockRosters, selectSection } from '@/db/queries/sections';
+import { lockRosters } from '@/db/queries/rosters';
+import { selectSection } from '@/db/queries/sections';
 import { addStudentInput } from '@/lib/contracts/sections';
 import { idProblems } from '@/lib/csv/read-roster';
 import { tidyName } from '@/lib/csv/split-name';

@@ -1,10 +1,6 @@
 import 'server-only';
-import {
-  insertAttemptsInOpenSittings,
-  selectEnrollment,
-  selectSection,
-  updateLeftOn,
-} from '@/db/queries/sections';
+import { insertAttemptsInOpenSittings, selectEnrollment, updateLeftOn } from '@/db/queries/rosters';
+import { selectSection } from '@/db/queries/sections';
 import { bringBackInput } from '@/lib/contracts/sections';
 import { defineVerb } from '../verb';
 import { sectionSubject } from './section-view';

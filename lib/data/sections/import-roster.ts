@@ -1,5 +1,6 @@
 import 'server-only';
-import { lockRosters, selectSection } from '@/db/queries/sections';
+import { lockRosters } from '@/db/queries/rosters';
+import { selectSection } from '@/db/queries/sections';
 import { importRosterInput } from '@/lib/contracts/sections';
 import { defineVerb } from '../verb';
 import { changesAnything, type ImportPlan, planImport } from './plan-import';

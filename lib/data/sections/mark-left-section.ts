@@ -1,5 +1,6 @@
 import 'server-only';
-import { selectEnrollment, selectSection, updateLeftOn } from '@/db/queries/sections';
+import { selectEnrollment, updateLeftOn } from '@/db/queries/rosters';
+import { selectSection } from '@/db/queries/sections';
 import { moveStudentInput } from '@/lib/contracts/sections';
 import { defineVerb } from '../verb';
 import { sectionSubject } from './section-view';

@@ -1,5 +1,6 @@
 import 'server-only';
-import { selectRoster, selectSection } from '@/db/queries/sections';
+import { selectRoster } from '@/db/queries/rosters';
+import { selectSection } from '@/db/queries/sections';
 import { sectionInput } from '@/lib/contracts/sections';
 import { defineVerb } from '../verb';
 import { asSectionView, type SectionView, sectionSubject } from './section-view';

@@ -1,7 +1,8 @@
 import 'server-only';
 import { createHash } from 'node:crypto';
 import type { Transaction } from '@/db/client';
-import { type SectionRow, selectKnownPeople } from '@/db/queries/sections';
+import { selectKnownPeople } from '@/db/queries/rosters';
+import type { SectionRow } from '@/db/queries/sections';
 import type { Actor } from '@/lib/auth/actor';
 import type { RosterChoice } from '@/lib/contracts/sections';
 import { type ReadRoster, type RosterLine, type RosterText, readRoster } from '@/lib/csv/read-roster';

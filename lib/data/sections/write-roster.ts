@@ -6,10 +6,10 @@ import {
   insertAttemptsInOpenSittings,
   insertStudentRoles,
   insertStudents,
-  type SectionRow,
   selectMadeIds,
   updateStudent,
-} from '@/db/queries/sections';
+} from '@/db/queries/rosters';
+import type { SectionRow } from '@/db/queries/sections';
 import { madeIds } from './local-ids';
 import type { ImportPlan } from './plan-import';
 
