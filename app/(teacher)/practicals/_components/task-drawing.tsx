@@ -1,18 +1,13 @@
 import { PieceFace } from '@/components/part/piece-face';
-import { parseDraft } from '@/lib/practicals/parse-draft';
-import type { StarterId } from '@/lib/practicals/starter-plans';
-import { starterDraft } from '@/lib/practicals/starters';
-import { countTask } from '@/lib/practicals/task';
+import { countTask, type Task } from '@/lib/practicals/task';
 
 const ROOM = { width: 132, height: 76, gap: 5 };
 const SLIMMEST = 9;
 
-/** All pieces of a starter in a row, on one scale. */
-export function StarterDrawing({ starter }: { starter: StarterId }) {
-  const read = parseDraft(starterDraft(starter));
-  if (!read.ok) return null;
-  const { lines } = read.task.cutList;
-  const { pieces } = countTask(read.task);
+/** All pieces of a task in a row, on one scale. */
+export function TaskDrawing({ task }: { task: Task }) {
+  const { lines } = task.cutList;
+  const { pieces } = countTask(task);
   const free = ROOM.width - pieces * ROOM.gap;
   const across = lines.reduce((sum, { quantity, target }) => sum + quantity * target.width, 0);
   const tallest = Math.max(...lines.map(({ target }) => target.length));
