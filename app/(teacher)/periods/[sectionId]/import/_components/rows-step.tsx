@@ -29,6 +29,7 @@ export function RowsStep({ state, looked }: RowsStepProps) {
   const { problems, conflicts, coming } = groups;
   const anything = coming.length + conflicts.length > 0;
   const sure = preview.layout.sure;
+  const why = whyNotYet(problems.length > 0 && !leaveOut, conflicts.length - Object.keys(choices).length);
   const lookAgain = () => state.lookAtText(roster);
   return (
     <div className="grid gap-6">
@@ -64,16 +65,16 @@ export function RowsStep({ state, looked }: RowsStepProps) {
             onChange={(event) => setLeaveOut(event.currentTarget.checked)}
           />
         ) : null}
+        {sure && anything && why ? (
+          <p className="text-label text-ink-2">Before they come in, {why}.</p>
+        ) : null}
         <div className="flex flex-wrap items-center gap-2">
           {sure && anything ? (
             <Button
               kind="act"
               disabled={pending}
               aria-busy={pending}
-              notYet={whyNotYet(
-                problems.length > 0 && !leaveOut,
-                conflicts.length - Object.keys(choices).length,
-              )}
+              notYet={why}
               onClick={() => state.bringIn(looked, choices, leaveOut)}
             >
               {pending ? 'bringing them in' : 'bring them in'}
@@ -87,7 +88,7 @@ export function RowsStep({ state, looked }: RowsStepProps) {
 }
 
 function whyNotYet(problems: boolean, open: number): string | null {
-  if (problems) return 'correct the rows that cannot be used, or leave them out';
-  if (open > 0) return open === 1 ? 'one row needs your word' : `${open} rows need your word`;
+  if (problems) return 'correct the rows that cannot be used in the text, or leave them out';
+  if (open > 0) return open === 1 ? 'say what holds in one row' : `say what holds in ${open} rows`;
   return null;
 }
