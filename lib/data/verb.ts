@@ -136,7 +136,7 @@ export function fieldErrors(error: z.ZodError): FieldErrors {
   return fields;
 }
 
-const CONNECTION_CODES = /^(08|57P|53|ECONN|CONNECT|EPIPE|ETIMEDOUT|EHOST|ENET|ENOTFOUND|EAI_AGAIN)/;
+const CONNECTION_CODES = /^(08|57P|57014|53|ECONN|CONNECT|EPIPE|ETIMEDOUT|EHOST|ENET|ENOTFOUND|EAI_AGAIN)/;
 
 /** A database that is away, or a constraint that a simultaneous change ran into; anything else is a bug. */
 export function databaseProblem(error: unknown): { ok: false; problem: Problem } {
