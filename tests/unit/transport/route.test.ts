@@ -3,7 +3,7 @@ import { answer, route } from '@/lib/transport/route';
 
 const REQUEST = new Request('https://trymark.example.org/api');
 
-test.each(['ECONNREFUSED', 'CONNECT_TIMEOUT', '57P01', 'ENOTFOUND', 'EAI_AGAIN', 'EHOSTUNREACH'])(
+test.each(['ECONNREFUSED', 'CONNECT_TIMEOUT', '57P01', '57014', 'ENOTFOUND', 'EAI_AGAIN', 'EHOSTUNREACH'])(
   'a database that is away (%s) is answered as something to try again',
   async (code) => {
     const handle = route(() => Promise.reject(Object.assign(new Error('away'), { code })));
