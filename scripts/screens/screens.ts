@@ -50,6 +50,31 @@ async function openTask(
   await page.goto(sheet === 'task' ? address : `${address}/${sheet}`);
 }
 
+/** Opens the roster of the teacher's period 3, or one of the sheets behind it. */
+async function openRoster(page: Page, sheet: 'import' | 'slips' | null = null): Promise<void> {
+  await page.goto('/periods');
+  await page.getByRole('link', { name: /^Woods 2, period 3/ }).click();
+  await page.getByRole('button', { name: 'add one' }).waitFor();
+  if (sheet) await page.goto(`${page.url()}/${sheet}`);
+}
+
+/** Looks at a CSV that shows each kind of row; nothing is written. */
+async function lookAtRoster(page: Page, text: string): Promise<void> {
+  await openRoster(page, 'import');
+  await page.getByText('CSV, with columns').click();
+  await page.getByRole('textbox', { name: 'rows' }).fill(text);
+  await page.getByRole('button', { name: 'look at the rows' }).click();
+  await page.getByRole('button', { name: 'change the text' }).waitFor();
+}
+
+const MIXED_ROSTER = `ID;family name;given name
+00901;Novotná;Ilse
+00902;Tran;Quynh
+00380;Kowalczyk;K.
+=2+3;Petrov;Anja
+00901;Usman;Bilal
+`;
+
 const TO_DO = /^(look at the task|go on measuring|lock your readings)/;
 
 export const SCREENS: Screen[] = [
@@ -155,5 +180,32 @@ export const SCREENS: Screen[] = [
       await openTask(page, /^see your result/, 'measure');
       await page.getByText('Your predicted score').waitFor();
     },
+  },
+  { role: 'teacher', name: 'new-period', path: '/periods/new' },
+  { role: 'teacher', name: 'roster', go: (page) => openRoster(page) },
+  {
+    role: 'teacher',
+    name: 'roster-add',
+    go: async (page) => {
+      await openRoster(page);
+      await page.getByRole('button', { name: 'add one' }).click();
+    },
+  },
+  {
+    role: 'teacher',
+    name: 'roster-student',
+    go: async (page) => {
+      await openRoster(page);
+      await page.getByRole('rowheader').getByRole('link').first().click();
+      await page.getByRole('button', { name: 'mark as left' }).waitFor();
+    },
+  },
+  { role: 'teacher', name: 'slips', go: (page) => openRoster(page, 'slips') },
+  { role: 'teacher', name: 'import', go: (page) => openRoster(page, 'import') },
+  { role: 'teacher', name: 'import-rows', go: (page) => lookAtRoster(page, MIXED_ROSTER) },
+  {
+    role: 'teacher',
+    name: 'import-columns',
+    go: (page) => lookAtRoster(page, '00901;Novotná;Ilse\n00902;Tran;Quynh\n'),
   },
 ];

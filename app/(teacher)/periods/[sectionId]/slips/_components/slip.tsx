@@ -16,7 +16,7 @@ export function Slip({ slip, place, schoolCode, signInAt }: SlipProps) {
       <p className="text-small text-ink-2">{place}</p>
       <p
         data-testid="words"
-        className="my-2 border-y border-ink py-1.5 font-title text-[1.375rem] leading-7 font-[580]"
+        className="my-2 border-y border-ink py-1.5 font-title text-[1.375rem] leading-7 font-[580] print:text-[1.1875rem]"
       >
         {words}
       </p>
