@@ -226,7 +226,7 @@ CREATE TABLE "attempts" (
 	CONSTRAINT "attempts_school_id_id_pk" PRIMARY KEY("school_id","id"),
 	CONSTRAINT "attempts_of_sitting" UNIQUE("school_id","id","sitting_id"),
 	CONSTRAINT "attempts_number_positive" CHECK ("attempts"."number" between 1 and 20),
-	CONSTRAINT "attempts_days_late" CHECK ("attempts"."days_late" >= 0),
+	CONSTRAINT "attempts_days_late" CHECK ("attempts"."days_late" between 0 and 365),
 	CONSTRAINT "attempts_standing" CHECK ("attempts"."standing" in ('expected', 'absent', 'excused', 'zero'))
 );
 --> statement-breakpoint
@@ -249,7 +249,8 @@ CREATE TABLE "publications" (
 	"rubric_version_id" uuid NOT NULL,
 	"published_by" uuid NOT NULL,
 	"published_at" timestamp with time zone DEFAULT now() NOT NULL,
-	CONSTRAINT "publications_school_id_id_pk" PRIMARY KEY("school_id","id")
+	CONSTRAINT "publications_school_id_id_pk" PRIMARY KEY("school_id","id"),
+	CONSTRAINT "publications_number_positive" CHECK ("publications"."number" >= 1)
 );
 --> statement-breakpoint
 CREATE TABLE "reading_events" (
@@ -277,6 +278,9 @@ CREATE TABLE "reading_events" (
 	CONSTRAINT "reading_events_school_id_id_pk" PRIMARY KEY("school_id","id"),
 	CONSTRAINT "reading_events_side" CHECK ("reading_events"."side" in ('bench', 'own')),
 	CONSTRAINT "reading_events_ticks" CHECK ("reading_events"."reading_ticks" is null or "reading_events"."reading_ticks" > 0),
+	CONSTRAINT "reading_events_value" CHECK (("reading_events"."value"->>'kind' = 'value') = ("reading_events"."reading_ticks" is not null)),
+	CONSTRAINT "reading_events_unit" CHECK ("reading_events"."unit" in ('in', 'mm')),
+	CONSTRAINT "reading_events_instrument" CHECK ("reading_events"."instrument" in ('rule', 'caliper', 'gauge', 'keyed')),
 	CONSTRAINT "reading_events_ordinal" CHECK ("reading_events"."ordinal" between 0 and 200),
 	CONSTRAINT "reading_events_sequence_positive" CHECK ("reading_events"."sequence" >= 1)
 );
@@ -296,6 +300,7 @@ CREATE TABLE "results" (
 	"judgement" jsonb,
 	CONSTRAINT "results_school_id_publication_id_attempt_id_pk" PRIMARY KEY("school_id","publication_id","attempt_id"),
 	CONSTRAINT "results_status" CHECK ("results"."status" in ('scored', 'absent', 'excused', 'zero', 'not read')),
+	CONSTRAINT "results_points" CHECK ("results"."total_points" >= 0 and "results"."bonus_points" >= 0),
 	CONSTRAINT "results_number" CHECK (("results"."status" in ('scored', 'zero')) = ("results"."score_points" is not null))
 );
 --> statement-breakpoint

@@ -74,7 +74,7 @@ export const attempts = pgTable(
     unique('attempts_of_sitting').on(t.schoolId, t.id, t.sittingId),
     index('attempts_student').on(t.schoolId, t.studentId),
     check('attempts_number_positive', sql`${t.number} between 1 and 20`),
-    check('attempts_days_late', sql`${t.daysLate} >= 0`),
+    check('attempts_days_late', sql`${t.daysLate} between 0 and 365`),
     check('attempts_standing', sql`${t.standing} in ('expected', 'absent', 'excused', 'zero')`),
   ],
 );
@@ -118,6 +118,9 @@ export const readingEvents = pgTable(
     index('reading_events_sitting').on(t.schoolId, t.sittingId),
     check('reading_events_side', sql`${t.side} in ('bench', 'own')`),
     check('reading_events_ticks', sql`${t.readingTicks} is null or ${t.readingTicks} > 0`),
+    check('reading_events_value', sql`(${t.value}->>'kind' = 'value') = (${t.readingTicks} is not null)`),
+    check('reading_events_unit', sql`${t.unit} in ('in', 'mm')`),
+    check('reading_events_instrument', sql`${t.instrument} in ('rule', 'caliper', 'gauge', 'keyed')`),
     check('reading_events_ordinal', sql`${t.ordinal} between 0 and 200`),
     check('reading_events_sequence_positive', sql`${t.sequence} >= 1`),
   ],
@@ -196,6 +199,7 @@ export const publications = pgTable(
     }),
     foreignKey({ columns: [t.schoolId, t.publishedBy], foreignColumns: [people.schoolId, people.id] }),
     uniqueIndex('publications_number').on(t.schoolId, t.sittingId, t.number),
+    check('publications_number_positive', sql`${t.number} >= 1`),
   ],
 );
 
@@ -225,6 +229,7 @@ export const results = pgTable(
     foreignKey({ columns: [t.schoolId, t.attemptId], foreignColumns: [attempts.schoolId, attempts.id] }),
     index('results_attempt').on(t.schoolId, t.attemptId),
     check('results_status', sql`${t.status} in ('scored', 'absent', 'excused', 'zero', 'not read')`),
+    check('results_points', sql`${t.totalPoints} >= 0 and ${t.bonusPoints} >= 0`),
     check('results_number', sql`(${t.status} in ('scored', 'zero')) = (${t.scorePoints} is not null)`),
   ],
 );

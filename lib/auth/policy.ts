@@ -39,7 +39,7 @@ const RULES = {
   'term.add': { admin: anyone, teacher: anyone },
   'term.change': { admin: anyone },
   'log.read': { admin: anyone },
-  'section.create': { teacher: anyone, admin: anyone },
+  'section.create': { teacher: anyone },
   'section.list': { teacher: anyone, admin: anyone, head: anyone, aide: anyone },
   'section.read': { teacher: ofSection, admin: anyone, head: ofDepartment },
   'section.change': { teacher: ofSection, admin: anyone },

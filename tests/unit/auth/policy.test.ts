@@ -65,7 +65,7 @@ const ALLOWED: Record<Action, Partial<Record<Role, RowKind[]>>> = {
   'term.add': { teacher: EVERY, admin: EVERY },
   'term.change': { admin: EVERY },
   'log.read': { admin: EVERY },
-  'section.create': { teacher: EVERY, admin: EVERY },
+  'section.create': { teacher: EVERY },
   'section.list': { teacher: EVERY, head: EVERY, aide: EVERY, admin: EVERY },
   'section.read': { teacher: SECTION, head: LED, admin: EVERY },
   'section.change': { teacher: SECTION, admin: EVERY },
