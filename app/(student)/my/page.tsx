@@ -4,6 +4,7 @@ import { PageTitle } from '@/components/ui/titles';
 import { listTasks, type TaskStage } from '@/lib/data/own/list-tasks';
 import { pageActor, pageValue } from '@/lib/transport/page';
 import { TaskList } from './_components/task-list';
+import { Unsent } from './_components/unsent';
 
 export const metadata: Metadata = { title: 'my practicals' };
 
@@ -14,10 +15,12 @@ const STAGES: { title: string; stages: TaskStage[] }[] = [
 ];
 
 export default async function MyPage() {
-  const tasks = pageValue(await listTasks(await pageActor(), {}));
+  const actor = await pageActor();
+  const tasks = pageValue(await listTasks(actor, {}));
   return (
     <>
       <PageTitle>Your practicals</PageTitle>
+      <Unsent personId={actor.personId} />
       {tasks.length === 0 ? (
         <EmptyState title="Nothing has been given to you yet">
           A practical stands here as soon as your teacher opens it for your period. Until then there is

@@ -34,7 +34,7 @@ export function MeasureBoard({ session, view, task }: MeasureBoardProps) {
         <KeptLine view={view} />
       </div>
       <KeptTrouble view={view} session={session} />
-      <div className="mt-2 grid grid-cols-[minmax(0,1fr)] gap-x-6 pb-8 sm:grid-cols-2">
+      <div className="mt-2 grid grid-cols-[minmax(0,1fr)] gap-x-6 pb-4 sm:grid-cols-2">
         <div>
           <SizeMap rubric={rubric} record={view.record} spot={spot} onPoint={measuring.point} />
           {place && spot ? (
@@ -63,11 +63,13 @@ export function MeasureBoard({ session, view, task }: MeasureBoardProps) {
           </p>
         )}
       </div>
-      <PhoneActions>
-        <LinkButton href={`/my/${task.sittingId}`}>the task</LinkButton>
-        <WhatIsLeft rubric={rubric} left={left} onPoint={measuring.point} />
-        <LockKey left={left.length} record={view.record} onLock={() => session.lock()} />
-      </PhoneActions>
+      <div className="mt-auto [&>div]:static">
+        <PhoneActions>
+          <LinkButton href={`/my/${task.sittingId}`}>the task</LinkButton>
+          <WhatIsLeft rubric={rubric} left={left} onPoint={measuring.point} />
+          <LockKey left={left.length} record={view.record} onLock={() => session.lock()} />
+        </PhoneActions>
+      </div>
     </>
   );
 }

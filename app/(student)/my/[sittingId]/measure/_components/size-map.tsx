@@ -1,13 +1,12 @@
 'use client';
 
-import { CrowsFoot } from '@/components/rule/rule-pointers';
 import { ScrollRegion } from '@/components/table/scroll-region';
 import { classNames } from '@/components/ui/class-names';
 import type { OwnRecord } from '@/lib/practicals/own-record';
-import { isSameSpot, listPieces } from '@/lib/round/pieces';
-import { pieceStateAt, valueAt } from '@/lib/round/record';
+import { isSameSpot, listPieces, type PiecePlace } from '@/lib/round/pieces';
 import type { Spot } from '@/lib/round/types';
-import { AXES, type Rubric } from '@/lib/scoring';
+import { AXES, type Axis, type Rubric } from '@/lib/scoring';
+import { MARK_WORDS, MarkFace, markAt } from './size-mark';
 
 interface SizeMapProps {
   rubric: Rubric;
@@ -26,26 +25,11 @@ export function SizeMap({ rubric, record, spot, onPoint }: SizeMapProps) {
         <colgroup>
           <col className="w-16" />
           {pieces.map(({ label }) => (
-            <col key={label} className="min-w-7" />
+            <col key={label} className="w-7" />
           ))}
         </colgroup>
         <thead>
-          <tr>
-            <td />
-            {rubric.lines.map((line) => (
-              <th
-                key={line.id}
-                colSpan={line.quantity}
-                scope="colgroup"
-                className={classNames(
-                  'narrow overflow-hidden px-0.5 pb-0.5 align-bottom text-label leading-4 font-[480] text-ellipsis',
-                  line.id === spot?.lineId ? 'font-[680] text-act' : 'text-ink-2',
-                )}
-              >
-                {line.label}
-              </th>
-            ))}
-          </tr>
+          <LineNames rubric={rubric} spot={spot} />
         </thead>
         <tbody>
           {AXES.map((axis) => (
@@ -59,30 +43,9 @@ export function SizeMap({ rubric, record, spot, onPoint }: SizeMapProps) {
               >
                 {axis}
               </th>
-              {pieces.map(({ line, ordinal, label }) => {
-                const at = { lineId: line.id, ordinal, axis };
-                const mark = markAt(record, at);
-                const here = isSameSpot(at, spot);
-                return (
-                  <td
-                    key={label}
-                    className={classNames('p-0', ordinal === 1 && 'border-l-outline border-ink')}
-                  >
-                    <button
-                      type="button"
-                      aria-current={here ? 'location' : undefined}
-                      aria-label={`${label}, ${axis}: ${MARK_WORDS[mark]}`}
-                      onClick={() => onPoint(at)}
-                      className={classNames(
-                        'relative flex h-7 w-full touch-manipulation items-center justify-center border border-rule bg-plate focus-visible:z-1',
-                        here && 'z-1 bg-act-wash outline-3 -outline-offset-2 outline-act',
-                      )}
-                    >
-                      <MarkFace mark={mark} />
-                    </button>
-                  </td>
-                );
-              })}
+              {pieces.map((place) => (
+                <SizeKey key={place.label} {...{ place, axis, record, spot, onPoint }} />
+              ))}
             </tr>
           ))}
         </tbody>
@@ -91,38 +54,50 @@ export function SizeMap({ rubric, record, spot, onPoint }: SizeMapProps) {
   );
 }
 
-type Mark = 'open' | 'read' | 'unreadable' | 'spoiled' | 'missing' | 'two';
-
-const MARK_WORDS: Record<Mark, string> = {
-  open: 'not recorded',
-  read: 'recorded',
-  unreadable: 'couldn’t read',
-  spoiled: 'spoiled',
-  missing: 'piece is missing',
-  two: 'two readings, measure again',
-};
-
-function markAt(record: OwnRecord, { lineId, ordinal, axis }: Spot): Mark {
-  if (pieceStateAt(record, { lineId, ordinal }) === 'missing') return 'missing';
-  const value = valueAt(record, { lineId, ordinal, what: axis });
-  if (value === null) return 'open';
-  if (value === 'conflict') return 'two';
-  return value.kind === 'unreadable' || value.kind === 'spoiled' ? value.kind : 'read';
+function LineNames({ rubric, spot }: { rubric: Rubric; spot: Spot | null }) {
+  return (
+    <tr>
+      <td />
+      {rubric.lines.map((line) => (
+        <th
+          key={line.id}
+          colSpan={line.quantity}
+          scope="colgroup"
+          className={classNames(
+            'narrow overflow-hidden px-0.5 pb-0.5 align-bottom text-label leading-4 font-[480] text-ellipsis',
+            line.id === spot?.lineId ? 'font-[680] text-act' : 'text-ink-2',
+          )}
+        >
+          {line.label}
+        </th>
+      ))}
+    </tr>
+  );
 }
 
-function MarkFace({ mark }: { mark: Mark }) {
-  if (mark === 'open') return null;
-  if (mark === 'unreadable') return <span className="font-[660]">?</span>;
-  if (mark === 'two') return <span className="font-[660] text-refuse">2</span>;
+interface SizeKeyProps extends Pick<SizeMapProps, 'record' | 'spot' | 'onPoint'> {
+  place: PiecePlace;
+  axis: Axis;
+}
+
+function SizeKey({ place: { line, ordinal, label }, axis, record, spot, onPoint }: SizeKeyProps) {
+  const at = { lineId: line.id, ordinal, axis };
+  const mark = markAt(record, at);
+  const here = isSameSpot(at, spot);
   return (
-    <svg aria-hidden="true" viewBox="0 0 24 20" className="h-5 w-6">
-      {mark === 'read' ? <CrowsFoot kind="own" x={12} y={17} size={13} /> : null}
-      {mark === 'spoiled' ? (
-        <path d="M2 10H8L10 4L14 16L16 10H22" className="fill-none stroke-ink [stroke-width:1.75]" />
-      ) : null}
-      {mark === 'missing' ? (
-        <path d="M3 2L21 18M21 2L3 18" className="stroke-rule [stroke-width:1.25]" />
-      ) : null}
-    </svg>
+    <td className={classNames('p-0', ordinal === 1 && 'border-l-outline border-ink')}>
+      <button
+        type="button"
+        aria-current={here ? 'location' : undefined}
+        aria-label={`${label}, ${axis}: ${MARK_WORDS[mark]}`}
+        onClick={() => onPoint(at)}
+        className={classNames(
+          'relative flex h-7 w-full touch-manipulation items-center justify-center border border-rule bg-plate focus-visible:z-1',
+          here && 'z-1 bg-act-wash outline-3 -outline-offset-2 outline-act',
+        )}
+      >
+        <MarkFace mark={mark} />
+      </button>
+    </td>
   );
 }

@@ -2,113 +2,70 @@
 
 import { useState } from 'react';
 import type { OwnTaskView } from '@/lib/data/own/read-task';
-import type { Unit } from '@/lib/length';
 import { nextOpen } from '@/lib/practicals/own-record';
-import { type AskedReading, readOwnEntry } from '@/lib/practicals/read-own-entry';
-import { otherUnit, pressKey } from '@/lib/round/keypad';
+import { readOwnEntry } from '@/lib/practicals/read-own-entry';
 import { findPiece } from '@/lib/round/pieces';
 import type { Spot } from '@/lib/round/types';
 import { type CellValue, cellKey } from '@/lib/sync/cells';
 import type { OwnEntry, OwnSession, OwnView } from '@/lib/sync/client/own-session';
+import { useTyped } from './use-typed';
 
-/** What the last press did: `refused` and `asked` stand until something else is pressed. */
-export interface Told {
-  kind: 'kept' | 'refused' | 'asked';
-  text: string;
-}
-
-export type Instrument = 'rule' | 'caliper';
+export type OwnInstrument = 'rule' | 'caliper';
 
 /** Where the student stands in measuring, and what each press does. */
 export function useMeasuring(session: OwnSession, view: OwnView, { rubric, task }: OwnTaskView) {
   const [spot, setSpot] = useState<Spot | null>(() => nextOpen(rubric, view.record, null));
-  const [text, setText] = useState('');
-  const [unit, setUnit] = useState<Unit>(rubric.unit);
-  const [instrument, setInstrument] = useState<Instrument>('rule');
-  const [asked, setAsked] = useState<AskedReading | null>(null);
-  const [told, setTold] = useState<Told | null>(null);
-  const place = spot && findPiece(rubric, spot);
+  const [instrument, setInstrument] = useState<OwnInstrument>('rule');
+  const typed = useTyped(rubric.unit);
+  const place = (spot && findPiece(rubric, spot)) ?? null;
   const cell = spot && { lineId: spot.lineId, ordinal: spot.ordinal, what: spot.axis };
 
-  function type(next: string) {
-    setText(next);
-    setAsked(null);
-    setTold(null);
-  }
-
-  function point(to: Spot | null) {
+  function point(to: Spot) {
     setSpot(to);
-    type('');
+    typed.type('');
   }
 
-  async function enter(entries: OwnEntry[], words: string) {
-    if (!(await session.enter(entries))) return;
-    setTold({ kind: 'kept', text: words });
-    setText('');
-    setAsked(null);
-    setSpot(nextOpen(rubric, session.getView().record, spot));
+  async function enter(entry: OwnEntry, words: string, stay = false) {
+    if (!(await session.enter([entry]))) return;
+    typed.clear(words);
+    if (!stay) setSpot(nextOpen(rubric, session.getView().record, spot));
   }
 
   async function keep() {
     if (!place || !cell || !spot) return;
-    const context = {
-      line: place.line,
-      axis: spot.axis,
-      unit,
-      grossLimit: rubric.grossLimit,
-      margin: rubric.margin,
-      blank: task.blank,
-    };
-    const outcome = readOwnEntry({ text, unit, instrument, cell: cellKey(cell), asked, context });
-    if (outcome.does === 'refuse') return setTold({ kind: 'refused', text: outcome.reason });
+    const { text, unit, asked } = typed;
+    const { grossLimit, margin } = rubric;
+    const context = { line: place.line, axis: spot.axis, unit, grossLimit, margin, blank: task.blank };
+    const key = cellKey(cell);
+    const outcome = readOwnEntry({ text, unit, instrument, cell: key, asked, context });
+    if (outcome.does === 'refuse') return typed.refuse(outcome.reason);
+    const { ticks } = outcome;
     if (outcome.does === 'ask') {
-      setAsked({ cell: cellKey(cell), ticks: outcome.ticks });
-      return setTold({ kind: 'asked', text: `${outcome.asks} If you read that, keep it again.` });
+      return typed.ask({ cell: key, ticks }, `${outcome.asks} If you read that, keep it again.`);
     }
-    const { ticks, source } = outcome;
+    const { source } = outcome;
     await enter(
-      [{ cell, value: { kind: 'value', ticks }, source }],
+      { cell, value: { kind: 'value', ticks }, source },
       `${place.label}, ${spot.axis}: ${source.typed}`,
     );
   }
 
   const mark = async (value: CellValue, words: string) => {
-    if (place && cell && spot) await enter([{ cell, value }], `${place.label}, ${spot.axis}: ${words}`);
+    if (place && cell)
+      await enter({ cell, value }, `${place.label}, ${cell.what}: ${words}`, value.kind === 'cleared');
   };
 
   const setPiece = async (state: 'missing' | 'present') => {
-    if (!place || !spot) return;
-    const of = { lineId: spot.lineId, ordinal: spot.ordinal, what: 'piece' };
-    const words = state === 'missing' ? 'is missing' : 'is here';
-    await enter([{ cell: of, value: { kind: 'state', state } }], `${place.label} ${words}`);
-    if (state === 'present') setSpot(spot);
+    if (!place || !cell) return;
+    const words = `${place.label} is ${state === 'missing' ? 'missing' : 'here'}`;
+    await enter(
+      { cell: { ...cell, what: 'piece' }, value: { kind: 'state', state } },
+      words,
+      state === 'present',
+    );
   };
 
-  function key(pressed: string) {
-    if (pressed === 'unit') {
-      setUnit(otherUnit(unit));
-      return type(text);
-    }
-    const next = pressKey(text, pressed);
-    if (next !== null) type(next);
-  }
-
-  return {
-    spot,
-    place,
-    cell,
-    text,
-    unit,
-    instrument,
-    told,
-    type,
-    point,
-    keep,
-    mark,
-    setPiece,
-    key,
-    setInstrument,
-  };
+  return { ...typed, spot, place, cell, instrument, setInstrument, point, keep, mark, setPiece };
 }
 
 export type MeasuringState = ReturnType<typeof useMeasuring>;
