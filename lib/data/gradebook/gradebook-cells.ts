@@ -1,5 +1,5 @@
+import type { AttemptRow } from '@/db/queries/attempts';
 import type { ResultRow } from '@/db/queries/publications';
-import type { AttemptRow } from '@/db/queries/sittings';
 import type { GradebookCell } from '@/lib/contracts/gradebook';
 import { scoreSheetSchema } from '@/lib/contracts/results';
 import { type Rubric, type ScoreSheet, scoreAttempt } from '@/lib/scoring';

@@ -1,5 +1,6 @@
 import 'server-only';
 import type { Transaction } from '@/db/client';
+import { type AttemptRow, selectAttempts } from '@/db/queries/attempts';
 import { selectSittingsOf, selectVersion } from '@/db/queries/gradebook';
 import {
   type PublicationRow,
@@ -7,7 +8,6 @@ import {
   selectPublications,
   selectResults,
 } from '@/db/queries/publications';
-import { type AttemptRow, selectAttempts } from '@/db/queries/sittings';
 import { type Task, taskSchema } from '@/lib/practicals/task';
 import type { Rubric } from '@/lib/scoring';
 import type { RubricForm } from '@/lib/scoring/rubric-form';

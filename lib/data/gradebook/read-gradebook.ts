@@ -1,8 +1,8 @@
 import 'server-only';
+import { selectMissingNumbers } from '@/db/queries/attempts';
 import { selectFiles } from '@/db/queries/gradebook';
 import { selectRoster } from '@/db/queries/rosters';
 import { selectSection, selectSections } from '@/db/queries/sections';
-import { selectMissingNumbers } from '@/db/queries/sittings';
 import type { Actor } from '@/lib/auth/actor';
 import { may } from '@/lib/auth/policy';
 import { type GradebookCell, type GradebookView, gradebookInput } from '@/lib/contracts/gradebook';

@@ -1,6 +1,7 @@
 import 'server-only';
 import { createHash } from 'node:crypto';
 import type { Transaction } from '@/db/client';
+import { type AttemptRow, selectAttempts, selectLockEvents } from '@/db/queries/attempts';
 import {
   type PublicationRow,
   type ResultRow,
@@ -8,7 +9,7 @@ import {
   selectResults,
 } from '@/db/queries/publications';
 import { insertMissingAttempts, lockAttempts } from '@/db/queries/rounds';
-import { type AttemptRow, type SittingRow, selectAttempts, selectLockEvents } from '@/db/queries/sittings';
+import type { SittingRow } from '@/db/queries/sittings';
 import { scoreSheetSchema } from '@/lib/contracts/results';
 import type { Rubric } from '@/lib/scoring';
 import type { PredictionPolicy } from '@/lib/scoring/rubric-form';

@@ -1,7 +1,8 @@
 import 'server-only';
 import { z } from 'zod';
+import { selectProgress } from '@/db/queries/attempts';
 import { selectPublications } from '@/db/queries/publications';
-import { selectProgress, selectSittingsOfTeacher } from '@/db/queries/sittings';
+import { selectSittingsOfTeacher } from '@/db/queries/sittings';
 import { defineVerb } from '../verb';
 
 export interface SittingListView {

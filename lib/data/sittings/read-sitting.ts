@@ -1,7 +1,8 @@
 import 'server-only';
+import { type AttemptRow, selectAttempts, selectMissingNumbers } from '@/db/queries/attempts';
 import { selectPublications } from '@/db/queries/publications';
 import { insertMissingAttempts } from '@/db/queries/rounds';
-import { type AttemptRow, selectAttempts, selectMissingNumbers, selectSitting } from '@/db/queries/sittings';
+import { selectSitting } from '@/db/queries/sittings';
 import { sittingIdInput } from '@/lib/contracts/sittings';
 import { sectionSubject } from '../sections/section-view';
 import { defineVerb } from '../verb';

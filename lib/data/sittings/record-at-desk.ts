@@ -1,9 +1,10 @@
 import 'server-only';
 import { randomUUID } from 'node:crypto';
 import type { Transaction } from '@/db/client';
+import { nextSequence } from '@/db/queries/attempts';
 import { insertEvents, lockAttempts } from '@/db/queries/rounds';
 import { selectEventsOf } from '@/db/queries/sheets';
-import { nextSequence, type SittingRow } from '@/db/queries/sittings';
+import type { SittingRow } from '@/db/queries/sittings';
 import type { Actor } from '@/lib/auth/actor';
 import { type CellValue, cellKey, valueKey } from '@/lib/sync/cells';
 import { deriveCells } from '@/lib/sync/derive';

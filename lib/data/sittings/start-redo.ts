@@ -1,5 +1,6 @@
 import 'server-only';
-import { insertAttempt, lockSitting, selectAttempts, selectSitting } from '@/db/queries/sittings';
+import { insertAttempt, selectAttempts } from '@/db/queries/attempts';
+import { lockSitting, selectSitting } from '@/db/queries/sittings';
 import { startRedoInput } from '@/lib/contracts/sittings';
 import { sectionSubject } from '../sections/section-view';
 import { defineVerb } from '../verb';

@@ -30,7 +30,7 @@ export const StudentRow = memo(function StudentRow({
   const name = rosterName(student);
   const since = lateStart(student, book);
   return (
-    <tr className="h-11 md:h-[1.7rem]">
+    <tr className="h-11 md:h-6">
       <th
         scope="row"
         className="sticky left-0 z-[1] max-w-28 bg-sheet pr-2 text-left text-label leading-4 font-[520] md:max-w-56 md:truncate md:text-text md:leading-[1.3125rem] md:whitespace-nowrap"
@@ -54,7 +54,7 @@ export const StudentRow = memo(function StudentRow({
                 aria-pressed={isSelected}
                 onClick={() => onSelect({ studentId: student.studentId, sittingId })}
                 className={classNames(
-                  'block h-full min-h-11 w-full px-1 hover:bg-act-wash md:min-h-[1.7rem]',
+                  'block h-full min-h-11 w-full px-1 hover:bg-act-wash md:min-h-6',
                   isSelected && 'outline-3 -outline-offset-2 outline-act',
                 )}
               >
