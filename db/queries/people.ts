@@ -1,6 +1,6 @@
 import { and, asc, count, eq, inArray, isNotNull, isNull, ne, notExists, sql } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
-import { credentials, departments, people, personRoles, tokens } from '@/db/schema';
+import { credentials, departments, enrollments, people, personRoles, schools, tokens } from '@/db/schema';
 import type { Role } from '@/lib/auth/roles';
 
 export interface PeopleFilter {
@@ -149,4 +149,21 @@ export async function updateLeft(
     .update(people)
     .set({ leftAt })
     .where(and(eq(people.schoolId, schoolId), eq(people.id, personId)));
+}
+
+/** Takes a person off every roster they are on: today is the first day without them. */
+export async function endEnrollments(tx: Transaction, schoolId: string, studentId: string): Promise<void> {
+  await tx
+    .update(enrollments)
+    .set({
+      leftOn: sql`(select greatest(${enrollments.joinedOn}, (now() at time zone ${schools.timeZone})::date)
+        from ${schools} where ${schools.id} = ${schoolId})`,
+    })
+    .where(
+      and(
+        eq(enrollments.schoolId, schoolId),
+        eq(enrollments.studentId, studentId),
+        isNull(enrollments.leftOn),
+      ),
+    );
 }

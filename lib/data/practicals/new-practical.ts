@@ -1,6 +1,6 @@
 import 'server-only';
+import { selectDepartments } from '@/db/queries/departments';
 import { insertPractical } from '@/db/queries/practicals';
-import { selectDepartments } from '@/db/queries/school';
 import type { PracticalDraft } from '@/lib/practicals/draft';
 import type { Context } from '../verb';
 

@@ -3,7 +3,7 @@ import { selectPerson, updateLeft } from '@/db/queries/people';
 import { personInput } from '@/lib/contracts/school';
 import { defineVerb } from '../verb';
 
-/** Undoes a departure: the person signs in with the password or passphrase they had. */
+/** Undoes a departure: the person signs in with the password or passphrase they had; a teacher puts them on a roster again. */
 export const bringBack = defineVerb({
   action: 'person.change',
   input: personInput,

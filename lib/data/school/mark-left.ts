@@ -1,10 +1,10 @@
 import 'server-only';
 import { deleteSessions, endLinks } from '@/db/queries/account';
-import { selectPerson, updateLeft } from '@/db/queries/people';
+import { endEnrollments, selectPerson, updateLeft } from '@/db/queries/people';
 import { personInput } from '@/lib/contracts/school';
 import { defineVerb } from '../verb';
 
-/** Marks a person as left: they can no longer sign in, and what they recorded stays. */
+/** Marks a person as left: they can no longer sign in, are on no roster from today, and what they recorded stays. */
 export const markLeft = defineVerb({
   action: 'person.change',
   input: personInput,
@@ -16,6 +16,7 @@ export const markLeft = defineVerb({
       refuse('conflict', 'You cannot mark yourself as left; another admin can.');
     if (person.leftAt) return null;
     await updateLeft(tx, schoolId, person.personId, new Date());
+    await endEnrollments(tx, schoolId, person.personId);
     await deleteSessions(tx, schoolId, person.personId);
     await endLinks(tx, schoolId, person.personId);
     await log({

@@ -6,7 +6,15 @@ import { signInStaff } from '@/lib/data/account/sign-in-staff';
 import { bringBack } from '@/lib/data/school/bring-back';
 import { markLeft } from '@/lib/data/school/mark-left';
 import { ownerSql } from '@/tests/support/database';
-import { logOf, makeActor, makePerson, makeSchool, signIn, whileLogFails } from '@/tests/support/school';
+import {
+  logOf,
+  makeActor,
+  makePerson,
+  makeSchool,
+  makeSection,
+  signIn,
+  whileLogFails,
+} from '@/tests/support/school';
 
 const PASSWORD = 'plane with the grain';
 const HERE = '127.0.0.1';
@@ -33,6 +41,16 @@ describe('marking as left', () => {
     expect(logged.map(({ details }) => details)).toEqual(
       expect.arrayContaining([{ left: true }, { left: false }]),
     );
+  });
+
+  it('takes a student off every roster from that day on', async () => {
+    const student = await makePerson(school, ['student']);
+    const sectionId = await makeSection(school, { studentIds: [student.personId] });
+    await markLeft(admin, { personId: student.personId });
+    const [row] =
+      await sql`select left_on >= joined_on and left_on <= current_date + 1 as left from enrollments
+      where section_id = ${sectionId} and student_id = ${student.personId}`;
+    expect(row).toEqual({ left: true });
   });
 
   it('is not something an admin does to themselves', async () => {
