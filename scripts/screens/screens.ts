@@ -200,6 +200,16 @@ export const SCREENS: Screen[] = [
       await page.getByRole('button', { name: 'mark as left' }).waitFor();
     },
   },
+  {
+    role: 'teacher',
+    name: 'new-words',
+    go: async (page) => {
+      await openRoster(page);
+      await page.getByRole('rowheader').getByRole('link').last().click();
+      await page.getByRole('button', { name: 'make new words' }).click();
+      await page.getByRole('list', { name: 'the new words' }).waitFor();
+    },
+  },
   { role: 'teacher', name: 'slips', go: (page) => openRoster(page, 'slips') },
   { role: 'teacher', name: 'import', go: (page) => openRoster(page, 'import') },
   { role: 'teacher', name: 'import-rows', go: (page) => lookAtRoster(page, MIXED_ROSTER) },

@@ -27,7 +27,6 @@ export function ImportDone({ sectionId, imported, startOver }: ImportDoneProps) 
             make slips
           </LinkButton>
         ) : null}
-        <LinkButton href={`/periods/${sectionId}`}>the roster</LinkButton>
         <LinkButton href="/practicals">practicals</LinkButton>
         <Button onClick={startOver}>more names</Button>
       </div>
