@@ -34,7 +34,7 @@ export function MeasureBoard({ session, view, task }: MeasureBoardProps) {
         <KeptLine view={view} />
       </div>
       <KeptTrouble view={view} session={session} />
-      <div className="mt-2 grid grid-cols-[minmax(0,1fr)] gap-x-6 pb-4 sm:grid-cols-2">
+      <div className="mt-2 grid grid-cols-[minmax(0,1fr)] gap-x-6 pb-4 sm:grid-cols-[minmax(0,1fr)_19rem]">
         <div>
           <SizeMap rubric={rubric} record={view.record} spot={spot} onPoint={measuring.point} />
           {place && spot ? (

@@ -8,6 +8,9 @@ import type { Spot } from '@/lib/round/types';
 import { AXES, type Axis, type Rubric } from '@/lib/scoring';
 import { MARK_WORDS, MarkFace, markAt } from './size-mark';
 
+const NAMES_PX = 64;
+const NARROWEST_PX = 28;
+
 interface SizeMapProps {
   rubric: Rubric;
   record: OwnRecord;
@@ -20,12 +23,15 @@ export function SizeMap({ rubric, record, spot, onPoint }: SizeMapProps) {
   const pieces = listPieces(rubric);
   return (
     <ScrollRegion>
-      <table className="w-full table-fixed border-collapse">
+      <table
+        className="w-full table-fixed border-collapse"
+        style={{ minWidth: NAMES_PX + pieces.length * NARROWEST_PX }}
+      >
         <caption className="sr-only">your sizes</caption>
         <colgroup>
           <col className="w-16" />
           {pieces.map(({ label }) => (
-            <col key={label} className="w-7" />
+            <col key={label} />
           ))}
         </colgroup>
         <thead>
