@@ -39,8 +39,6 @@ export const startRedoInput = z.object({ sittingId: id, studentId: z.uuid() });
 /** What becomes of predictions that were locked after the bench had begun, without a receipt. */
 export const LATE_LOCK_CHOICES = ['count', 'leave out'] as const;
 
-export type LateLockChoice = (typeof LATE_LOCK_CHOICES)[number];
-
 export const publishInput = z.object({
   sittingId: id,
   /** Students with unread sizes go out as "not read". */

@@ -39,20 +39,10 @@ function exporter(
     action: 'grades.export',
     input: exportInput,
     async run(context): Promise<SentFileView> {
-      const { actor, input, tx, authorize, found, refuse, log } = context;
+      const { actor, input, tx, authorize, found, log } = context;
       const section = found(await selectSection(tx, actor.schoolId, input.sectionId));
       authorize(sectionSubject(section));
-      const all = await loadSittings(tx, actor.schoolId, input.sectionId);
-      const chosen = input.sittingId
-        ? [found(all.find(({ sittingId }) => sittingId === input.sittingId))]
-        : all;
-      const sittings = chosen.filter(({ latest }) => latest !== null);
-      if (sittings.length === 0) {
-        refuse(
-          'conflict',
-          'Nothing is published here yet. Publish a sitting first; then its results can go out.',
-        );
-      }
+      const sittings = await publishedSittings(context);
       const table = tableOf(section, sittings);
       const text = writeCsv(table.header, table.rows);
       const subject = input.sittingId ? (sittings[0]?.title ?? '') : section.name;
@@ -75,6 +65,20 @@ function exporter(
       return { fileId, fileName, text, sha256, rows };
     },
   });
+}
+
+/** The sitting that was asked for, or all of the section, as far as they are published. */
+async function publishedSittings({ actor, input, tx, found, refuse }: Send): Promise<LoadedSitting[]> {
+  const all = await loadSittings(tx, actor.schoolId, input.sectionId);
+  const chosen = input.sittingId ? [found(all.find(({ sittingId }) => sittingId === input.sittingId))] : all;
+  const published = chosen.filter(({ latest }) => latest !== null);
+  if (published.length === 0) {
+    refuse(
+      'conflict',
+      'Nothing is published here yet. Publish a sitting first; then its results can go out.',
+    );
+  }
+  return published;
 }
 
 interface MadeFile {

@@ -43,23 +43,11 @@ export async function loadSittings(
   if (sittings.length === 0) return [];
   const ids = sittings.map(({ sittingId }) => sittingId);
   const attempts = await selectAttempts(tx, schoolId, ids);
-  const latest = new Map<string, PublicationRow>();
-  for (const row of await selectPublications(tx, schoolId, ids)) {
-    if (!latest.has(row.sittingId)) latest.set(row.sittingId, row);
-  }
-  const publications = [...latest.values()];
-  const results =
-    publications.length === 0
-      ? []
-      : await selectResults(
-          tx,
-          schoolId,
-          publications.map(({ publicationId }) => publicationId),
-        );
+  const latest = await loadLatest(tx, schoolId, ids);
   const versionOf = versionReader(tx, schoolId);
   const loaded: LoadedSitting[] = [];
   for (const { sittingId, title, state, openedAt, rubricVersionId } of sittings) {
-    const publication = latest.get(sittingId);
+    const told = latest.get(sittingId);
     loaded.push({
       sittingId,
       title,
@@ -67,20 +55,33 @@ export async function loadSittings(
       openedAt,
       version: await versionOf(rubricVersionId),
       attempts: attempts.filter((row) => row.sittingId === sittingId),
-      latest: publication
-        ? {
-            publication,
-            version: await versionOf(publication.rubricVersionId),
-            results: new Map(
-              results
-                .filter((row) => row.publicationId === publication.publicationId)
-                .map((row) => [row.attemptId, row]),
-            ),
-          }
-        : null,
+      latest: told ? { ...told, version: await versionOf(told.publication.rubricVersionId) } : null,
     });
   }
   return loaded;
+}
+
+interface Told {
+  publication: PublicationRow;
+  results: Map<string, ResultRow>;
+}
+
+/** The latest publication of each sitting that has one, with its results by attempt. */
+async function loadLatest(
+  tx: Transaction,
+  schoolId: string,
+  sittingIds: readonly string[],
+): Promise<Map<string, Told>> {
+  const latest = new Map<string, Told>();
+  for (const publication of await selectPublications(tx, schoolId, sittingIds)) {
+    if (latest.has(publication.sittingId)) continue;
+    latest.set(publication.sittingId, { publication, results: new Map() });
+  }
+  const byPublication = new Map([...latest.values()].map((told) => [told.publication.publicationId, told]));
+  const ids = [...byPublication.keys()];
+  const results = ids.length > 0 ? await selectResults(tx, schoolId, ids) : [];
+  for (const row of results) byPublication.get(row.publicationId)?.results.set(row.attemptId, row);
+  return latest;
 }
 
 /** Each version is read once. */

@@ -30,10 +30,7 @@ export const readGradebook = defineVerb({
       schoolId,
       sittings.map(({ sittingId }) => sittingId),
     );
-    const byAttempt = new Map<string, number>();
-    for (const row of missing.filter(({ sameAttempt }) => sameAttempt)) {
-      byAttempt.set(row.attemptId, (byAttempt.get(row.attemptId) ?? 0) + row.missing);
-    }
+    const byAttempt = sumByAttempt(missing);
     const mayExport = may(actor, 'grades.export', subject);
     const files = mayExport ? await selectFiles(tx, schoolId, sectionId, FILES_SHOWN) : [];
     const siblings = (await selectSections(tx, schoolId, scopeOf(actor))).filter(
@@ -49,30 +46,44 @@ export const readGradebook = defineVerb({
         const cells = sittings.map((sitting) => cellIn(sitting, studentId, byAttempt));
         return { studentId, localId, familyName, givenName, joinedOn, leftOn, cells, mean: meanOf(cells) };
       }),
-      files: files.map((file) => ({
-        fileId: file.fileId,
-        kind: file.kind,
-        fileName: file.fileName,
-        sentAt: file.exportedAt.toISOString(),
-        sentBy: `${file.givenName} ${file.familyName}`.trim(),
-        rows: file.rowCount,
-        bytes: file.byteCount,
-        sha256: file.sha256,
-      })),
+      files: files.map(asFile),
       may: { export: mayExport, change: may(actor, 'sitting.change', subject) },
       timeZone: section.timeZone,
     };
   },
 });
 
+type Missing = Awaited<ReturnType<typeof selectMissingNumbers>>;
+
+/** Readings that have not arrived, as far as it is certain whose they are. */
+function sumByAttempt(missing: Missing): Map<string, number> {
+  const sums = new Map<string, number>();
+  for (const row of missing.filter(({ sameAttempt }) => sameAttempt)) {
+    sums.set(row.attemptId, (sums.get(row.attemptId) ?? 0) + row.missing);
+  }
+  return sums;
+}
+
+type FileRow = Awaited<ReturnType<typeof selectFiles>>[number];
+
+function asFile(file: FileRow): GradebookView['files'][number] {
+  return {
+    fileId: file.fileId,
+    kind: file.kind,
+    fileName: file.fileName,
+    sentAt: file.exportedAt.toISOString(),
+    sentBy: `${file.givenName} ${file.familyName}`.trim(),
+    rows: file.rowCount,
+    bytes: file.byteCount,
+    sha256: file.sha256,
+  };
+}
+
 function scopeOf({ role, personId, departmentId }: Actor) {
   return role === 'head' ? { departmentId: departmentId ?? personId } : { teacherId: personId };
 }
 
-function headOf(
-  sitting: LoadedSitting,
-  missing: readonly { sittingId: string; missing: number }[],
-): GradebookView['sittings'][number] {
+function headOf(sitting: LoadedSitting, missing: Missing): GradebookView['sittings'][number] {
   const { sittingId, title, open, openedAt, version, latest, attempts } = sitting;
   const notArrived = missing
     .filter((row) => row.sittingId === sittingId)

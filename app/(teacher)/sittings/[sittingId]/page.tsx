@@ -1,4 +1,5 @@
 import type { Metadata } from 'next';
+import Link from 'next/link';
 import { actorInRole } from '@/app/account/_components/actor-in-role';
 import { DeskPage } from '@/components/shell/desk-page';
 import { EmptyState } from '@/components/ui/empty-state';
@@ -65,9 +66,9 @@ function Findings({ sitting: { sittingId, students, notArrived } }: { sitting: S
         <Notice
           title={`${count(conflicts, 'size has', 'sizes have')} two readings.`}
           action={
-            <a className="link" href={`/round/${sittingId}`}>
+            <Link className="link" href={`/round/${sittingId}`}>
               Choose at the bench
-            </a>
+            </Link>
           }
         >
           Two people measured the same piece, and the readings differ. Both are kept until you choose.

@@ -1,5 +1,5 @@
 import { pointsAsText } from '@/components/ui/points-text';
-import type { GradebookCell } from '@/lib/contracts/gradebook';
+import type { GradebookCell, GradebookView } from '@/lib/contracts/gradebook';
 import { count } from '../../../_components/names';
 
 /** The word that stands where there is no number; null where there is one. */
@@ -22,21 +22,26 @@ export function notesOf(cell: GradebookCell): string[] {
   return notes.filter((note) => note !== null);
 }
 
-/** Everything of a cell, for those who hear it. */
-export function cellSaid(student: string, practical: string, cell: GradebookCell): string {
+/** Everything of a cell, for those who hear it; `whose` is the student and the practical. */
+export function cellSaid(whose: string, cell: GradebookCell): string {
   const number =
     cell.score === null
       ? wordOf(cell)
       : `${pointsAsText(cell.score)}${cell.published ? ', published' : ', still being recorded'}`;
   const attempt = cell.attemptNumber > 1 ? [`attempt ${cell.attemptNumber}`] : [];
   const zero = cell.status === 'zero' ? ['a zero'] : [];
-  return [student, practical, number, ...zero, ...attempt, ...notesOf(cell)].join(', ');
+  return [whose, number, ...zero, ...attempt, ...notesOf(cell)].join(', ');
 }
 
 /** A score as whole percent of its total, for pictures. */
 export function percentOf(cell: GradebookCell | null): number | null {
   if (cell === null || cell.score === null || cell.total === 0) return null;
   return (cell.score * 100) / cell.total;
+}
+
+/** Every score of a gradebook in percent. */
+export function percentsOf({ students }: GradebookView): number[] {
+  return students.flatMap(({ cells }) => cells.flatMap((cell) => percentOf(cell) ?? []));
 }
 
 /** Tenths of a percent: 857 gives `85.7`. */

@@ -26,6 +26,9 @@ export const features = tableFeatures({
   sortFns: { text: sortFn_text, basic: sortFn_basic },
 });
 
+/** Student and ID come first. */
+export const BEFORE_SITTINGS = 2;
+
 const helper = createColumnHelper<typeof features, GradebookStudent>();
 
 const NUMBER = {

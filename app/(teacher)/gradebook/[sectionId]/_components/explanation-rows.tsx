@@ -4,6 +4,7 @@ import { LengthText } from '@/components/ui/fraction';
 import { pointsAsText } from '@/components/ui/points-text';
 import type { ExplanationView } from '@/lib/contracts/gradebook';
 import { count } from '../../../_components/names';
+import { type SumProps, SumRows } from './sum-rows';
 
 /** The points that fill half a strip in a row: the dearest size of most rubrics. */
 const FULL = 400;
@@ -12,33 +13,21 @@ type LossRow = ExplanationView['rows'][number];
 
 /** One row a lost point: target, reading, strip, points, and the same of the total. Both columns add up. */
 export function ExplanationRows({ explanation }: { explanation: ExplanationView }) {
-  const { rows, total, possible } = explanation;
+  const { rows, total, possible, unit } = explanation;
   const both = total !== possible;
   return (
     <table className="tnum w-full border-collapse text-label">
       <caption className="sr-only">where the points went</caption>
       <thead>
         <tr className="border-b border-hair text-small text-ink-2">
-          <th scope="col" className="py-1.5 pr-1 text-left font-[480]">
-            size
-          </th>
-          <th scope="col" className="px-1 text-right font-[480]">
-            target
-          </th>
-          <th scope="col" className="px-1 text-right font-[480]">
-            reading
-          </th>
-          <th scope="col" className="px-1">
+          <Head align="left">size</Head>
+          <Head>target</Head>
+          <Head>reading</Head>
+          <Head>
             <span className="sr-only">under or over</span>
-          </th>
-          <th scope="col" className="px-1 text-right font-[480]">
-            points
-          </th>
-          {both ? (
-            <th scope="col" className="pl-1 text-right font-[480]">
-              of {pointsAsText(total)}
-            </th>
-          ) : null}
+          </Head>
+          <Head>points</Head>
+          {both ? <Head>of {pointsAsText(total)}</Head> : null}
         </tr>
       </thead>
       <tbody>
@@ -46,7 +35,7 @@ export function ExplanationRows({ explanation }: { explanation: ExplanationView 
           <Row
             key={`${row.kind}-${row.piece}-${row.what}-${index.toString()}`}
             row={row}
-            unit={explanation.unit}
+            unit={unit}
             both={both}
           />
         ))}
@@ -54,6 +43,17 @@ export function ExplanationRows({ explanation }: { explanation: ExplanationView 
       </tbody>
       <SumRows explanation={explanation} both={both} />
     </table>
+  );
+}
+
+function Head({ align = 'right', children }: { align?: 'left' | 'right'; children: ReactNode }) {
+  return (
+    <th
+      scope="col"
+      className={`px-1 py-1.5 font-[480] first:pl-0 last:pr-0 ${align === 'left' ? 'text-left' : 'text-right'}`}
+    >
+      {children}
+    </th>
   );
 }
 
@@ -105,11 +105,6 @@ function nameOf({ kind, piece, what }: LossRow): ReactNode {
   );
 }
 
-interface SumProps {
-  explanation: ExplanationView;
-  both: boolean;
-}
-
 /** What cost nothing, in a line or two. */
 function FreeRows({ explanation: { free, goodChecks, unread, unit }, both }: SumProps) {
   const quiet = (key: string, children: ReactNode) => (
@@ -142,79 +137,4 @@ function FreeRows({ explanation: { free, goodChecks, unread, unit }, both }: Sum
       {unread > 0 ? quiet('unread', `${count(unread, 'entry', 'entries')} not read yet`) : null}
     </>
   );
-}
-
-function SumRows({ explanation, both }: SumProps) {
-  const { lost, kept, possible, rest, score, floorGives, published } = explanation;
-  return (
-    <tfoot>
-      <Sum label="lost" points={lost.points} ofTotal={lost.ofTotal} both={both} />
-      {floorGives > 0 ? (
-        <Sum label="given back: no score falls lower" points={floorGives} both={both} />
-      ) : null}
-      <Sum
-        label={`kept, of ${pointsAsText(possible)}`}
-        points={kept.points}
-        ofTotal={kept.ofTotal}
-        both={both}
-      />
-      <Prediction explanation={explanation} both={both} />
-      {rest === 0 ? null : <Sum label={restOf(explanation)} ofTotal={rest} both={both} signed />}
-      <tr className="border-t border-ink text-text font-[700]">
-        <th scope="row" colSpan={both ? 5 : 4} className="pt-1.5 text-left">
-          {published ? 'score' : 'so far'}, to the nearest {nearest(explanation.roundTo)}
-        </th>
-        <td className="pt-1.5 pl-1 text-right">{score === null ? 'none' : pointsAsText(score)}</td>
-      </tr>
-    </tfoot>
-  );
-}
-
-function Prediction({ explanation, both }: SumProps) {
-  const { judgement, bonus, predicted } = explanation;
-  if (judgement === null) {
-    return predicted === null ? null : (
-      <Sum
-        label={`predicted ${pointsAsText(predicted)}, locked late: earns nothing`}
-        both={both}
-        ofTotal={0}
-      />
-    );
-  }
-  const { agree, of, caught, offBand } = judgement;
-  const words = `prediction: ${agree} of ${of} agree${offBand > 0 ? `, ${caught} of ${offBand} caught` : ''}`;
-  return <Sum label={words} ofTotal={bonus} both={both} signed />;
-}
-
-interface SumRowProps {
-  label: string;
-  points?: number;
-  ofTotal?: number;
-  both: boolean;
-  signed?: boolean;
-}
-
-function Sum({ label, points, ofTotal, both, signed = false }: SumRowProps) {
-  const text = (value: number | undefined) =>
-    value === undefined ? null : `${signed && value > 0 ? '+' : ''}${pointsAsText(value)}`;
-  const single = text(points ?? ofTotal);
-  return (
-    <tr>
-      <th scope="row" colSpan={4} className="py-1 pr-1 text-left font-[520]">
-        {label}
-      </th>
-      <td className="px-1 text-right">{both ? text(points) : single}</td>
-      {both ? <td className="pl-1 text-right">{text(ofTotal)}</td> : null}
-    </tr>
-  );
-}
-
-function restOf({ daysLate, rest }: ExplanationView): string {
-  if (daysLate > 0 && rest < -100) return `${count(daysLate, 'day', 'days')} late, and rounding`;
-  return 'rounding';
-}
-
-function nearest(roundTo: number): string {
-  if (roundTo === 100) return 'point';
-  return roundTo === 50 ? 'half point' : roundTo === 10 ? 'tenth' : 'hundredth';
 }

@@ -24,31 +24,37 @@ export function FilesSent({ files, timeZone }: FilesSentProps) {
       </TableHead>
       <TableBody>
         {files.map((file) => (
-          <tr key={file.fileId}>
-            <RowHead className="break-all">
-              {file.fileName}
-              <span className="block text-small font-[480] text-ink-2" title={`SHA-256 ${file.sha256}`}>
-                {file.bytes} bytes, {file.sha256.slice(0, 8)}
-              </span>
-            </RowHead>
-            <Cell>
-              {sayMoment(file.sentAt, timeZone)}
-              <span className="block text-small text-ink-2">by {file.sentBy}</span>
-            </Cell>
-            <Cell align="right">{file.rows}</Cell>
-            <Cell align="right">
-              <a
-                className="link"
-                href={`/api/exports/files/${file.fileId}`}
-                download
-                aria-label={`send ${file.fileName} again`}
-              >
-                again
-              </a>
-            </Cell>
-          </tr>
+          <FileRow key={file.fileId} file={file} timeZone={timeZone} />
         ))}
       </TableBody>
     </Table>
+  );
+}
+
+function FileRow({ file, timeZone }: { file: GradebookView['files'][number]; timeZone: string }) {
+  return (
+    <tr>
+      <RowHead className="break-all">
+        {file.fileName}
+        <span className="block text-small font-[480] text-ink-2" title={`SHA-256 ${file.sha256}`}>
+          {file.bytes} bytes, {file.sha256.slice(0, 8)}
+        </span>
+      </RowHead>
+      <Cell>
+        {sayMoment(file.sentAt, timeZone)}
+        <span className="block text-small text-ink-2">by {file.sentBy}</span>
+      </Cell>
+      <Cell align="right">{file.rows}</Cell>
+      <Cell align="right">
+        <a
+          className="link"
+          href={`/api/exports/files/${file.fileId}`}
+          download
+          aria-label={`send ${file.fileName} again`}
+        >
+          again
+        </a>
+      </Cell>
+    </tr>
   );
 }

@@ -5,7 +5,7 @@ import { DeskPage } from '@/components/shell/desk-page';
 import { Dialog } from '@/components/ui/dialog';
 import { EmptyState } from '@/components/ui/empty-state';
 import { LinkButton } from '@/components/ui/link-button';
-import type { GradebookView } from '@/lib/contracts/gradebook';
+import type { GradebookCell, GradebookView } from '@/lib/contracts/gradebook';
 import { count, sayPeriod, spokenName } from '../../../_components/names';
 import { ClassPicture } from './class-picture';
 import { Explanation } from './explanation';
@@ -19,23 +19,24 @@ import { useGradebook } from './use-gradebook';
 /** From this width on the explanation stands beside the table; below it opens over it. */
 const BESIDE = '(min-width: 1280px)';
 
-/** A section's gradebook: students down, practicals across, and beside it where the points of one cell went. */
-export function Gradebook({ first }: { first: GradebookView }) {
-  const { book, late } = useGradebook(first);
+/** The cell that is open, beside the table or over it. */
+function useOpenCell({ students, sittings }: GradebookView) {
   const [selection, setSelection] = useState<Selection | null>(null);
   const [over, setOver] = useState(false);
-  const { section, sittings, students } = book;
-
+  const student = students.find(({ studentId }) => studentId === selection?.studentId);
+  const index = sittings.findIndex(({ sittingId }) => sittingId === selection?.sittingId);
   function select(next: Selection) {
     setSelection(next);
     if (!window.matchMedia(BESIDE).matches) setOver(true);
   }
+  return { selection, select, over, setOver, student, index, cell: student?.cells[index] ?? null };
+}
 
-  const student = students.find(({ studentId }) => studentId === selection?.studentId);
-  const index = sittings.findIndex(({ sittingId }) => sittingId === selection?.sittingId);
-  const cell = student?.cells[index] ?? null;
-  const panel = cell ? <Explanation book={book} cell={cell} /> : null;
-  const picture = <ClassPicture book={book} index={index} cell={cell} />;
+/** A section's gradebook: students down, practicals across, and beside it where the points of one cell went. */
+export function Gradebook({ first }: { first: GradebookView }) {
+  const { book, late } = useGradebook(first);
+  const { selection, select, over, setOver, student, index, cell } = useOpenCell(book);
+  const { section, sittings, students } = book;
   return (
     <DeskPage
       title={capital(sayPeriod(section.period))}
@@ -43,16 +44,7 @@ export function Gradebook({ first }: { first: GradebookView }) {
       tabs={<PeriodLinks book={book} />}
       actions={<ExportDialog book={book} />}
       titleBlock={gradebookTitleBlock(book, late)}
-      aside={
-        sittings.length > 0 ? (
-          <div className="grid gap-8">
-            <div className="max-xl:hidden">
-              {panel ?? <p className="text-ink-2">Choose a cell to see where its points went.</p>}
-            </div>
-            {picture}
-          </div>
-        ) : undefined
-      }
+      aside={sittings.length > 0 ? <Beside book={book} index={index} cell={cell} /> : undefined}
     >
       {sittings.length === 0 || students.length === 0 ? (
         <NothingYet book={book} />
@@ -71,6 +63,27 @@ export function Gradebook({ first }: { first: GradebookView }) {
         {cell ? <Explanation book={book} cell={cell} inDialog /> : null}
       </Dialog>
     </DeskPage>
+  );
+}
+
+interface BesideProps {
+  book: GradebookView;
+  index: number;
+  cell: GradebookCell | null;
+}
+
+function Beside({ book, index, cell }: BesideProps) {
+  return (
+    <div className="grid gap-8">
+      <div className="max-xl:hidden">
+        {cell ? (
+          <Explanation book={book} cell={cell} />
+        ) : (
+          <p className="text-ink-2">Choose a cell to see where its points went.</p>
+        )}
+      </div>
+      <ClassPicture book={book} index={index} cell={cell} />
+    </div>
   );
 }
 

@@ -1,3 +1,5 @@
+import type { GradebookView } from '@/lib/contracts/gradebook';
+
 export interface Spread {
   median: number;
   low: number;
@@ -21,4 +23,15 @@ export function scaleFrom(values: readonly number[]): number {
   const sorted = [...values].sort((a, b) => a - b);
   const low = sorted[Math.floor(sorted.length / 10)] ?? 60;
   return Math.max(0, Math.min(70, Math.floor((low - 1) / 10) * 10));
+}
+
+/** At least this much loss fills half a strip, so that a good class does not look like a bad one. */
+const LEAST_FULL = 600;
+
+/** The points that fill half a strip: the dearest of all cells but the very dearest, which are cut off there. */
+export function fullStrip({ students }: GradebookView): number {
+  const losses = students
+    .flatMap(({ cells }) => cells.flatMap((cell) => (cell ? [cell.lost.under, cell.lost.over] : [])))
+    .sort((a, b) => a - b);
+  return Math.max(LEAST_FULL, losses[Math.ceil(losses.length * 0.97) - 1] ?? 0);
 }

@@ -1,6 +1,6 @@
-import { memo } from 'react';
+import { memo, type ReactNode } from 'react';
 import { classNames } from '@/components/ui/class-names';
-import type { GradebookView } from '@/lib/contracts/gradebook';
+import type { GradebookCell, GradebookView } from '@/lib/contracts/gradebook';
 import { sayDay } from '../../../_components/days';
 import { rosterName } from '../../../_components/names';
 import { cellSaid, tenthsAsText } from './cell-words';
@@ -19,14 +19,8 @@ interface StudentRowProps {
   at: number;
 }
 
-export const StudentRow = memo(function StudentRow({
-  student,
-  book,
-  full,
-  selection,
-  onSelect,
-  at,
-}: StudentRowProps) {
+export const StudentRow = memo(function StudentRow(props: StudentRowProps) {
+  const { student, book, full, selection, onSelect, at } = props;
   const name = rosterName(student);
   const since = lateStart(student, book);
   return (
@@ -40,32 +34,17 @@ export const StudentRow = memo(function StudentRow({
         {since && !student.leftOn ? <Aside>since {sayDay(since, since)}</Aside> : null}
       </th>
       <td className="px-2 text-label text-ink-2 max-md:hidden">{student.localId}</td>
-      {book.sittings.map(({ sittingId, title }, index) => {
-        const cell = student.cells[index] ?? null;
-        const isSelected = selection?.studentId === student.studentId && selection.sittingId === sittingId;
-        return (
-          <td key={sittingId} className="relative border-l border-rule p-0">
-            {cell ? (
-              <button
-                type="button"
-                data-place={placeOf(at, index)}
-                onKeyDown={walkCells}
-                aria-label={cellSaid(name, title, cell)}
-                aria-pressed={isSelected}
-                onClick={() => onSelect({ studentId: student.studentId, sittingId })}
-                className={classNames(
-                  'block h-full min-h-11 w-full px-1 hover:bg-act-wash md:min-h-6',
-                  isSelected && 'outline-3 -outline-offset-2 outline-act',
-                )}
-              >
-                <GradeCell cell={cell} full={full} />
-              </button>
-            ) : (
-              <GradeCell cell={null} full={full} />
-            )}
-          </td>
-        );
-      })}
+      {book.sittings.map(({ sittingId, title }, index) => (
+        <SittingCell
+          key={sittingId}
+          cell={student.cells[index] ?? null}
+          full={full}
+          place={placeOf(at, index)}
+          said={`${name}, ${title}`}
+          isSelected={selection?.studentId === student.studentId && selection.sittingId === sittingId}
+          onSelect={() => onSelect({ studentId: student.studentId, sittingId })}
+        />
+      ))}
       <td className="border-l border-ink pl-2 text-right font-[660]">
         {student.mean === null ? <span className="sr-only">none yet</span> : tenthsAsText(student.mean)}
       </td>
@@ -73,7 +52,42 @@ export const StudentRow = memo(function StudentRow({
   );
 });
 
-function Aside({ children }: { children: React.ReactNode }) {
+interface SittingCellProps {
+  cell: GradebookCell | null;
+  full: number;
+  place: string;
+  /** Whose cell of which practical. */
+  said: string;
+  isSelected: boolean;
+  onSelect: () => void;
+}
+
+function SittingCell({ cell, full, place, said, isSelected, onSelect }: SittingCellProps) {
+  return (
+    <td className="relative border-l border-rule p-0">
+      {cell ? (
+        <button
+          type="button"
+          data-place={place}
+          onKeyDown={walkCells}
+          aria-label={cellSaid(said, cell)}
+          aria-pressed={isSelected}
+          onClick={onSelect}
+          className={classNames(
+            'block h-full min-h-11 w-full px-1 hover:bg-act-wash md:min-h-6',
+            isSelected && 'outline-3 -outline-offset-2 outline-act',
+          )}
+        >
+          <GradeCell cell={cell} full={full} />
+        </button>
+      ) : (
+        <GradeCell cell={null} full={full} />
+      )}
+    </td>
+  );
+}
+
+function Aside({ children }: { children: ReactNode }) {
   return (
     <span className="text-small font-[480] max-md:block md:ml-2 font-stretch-[88%] text-ink-2">
       {children}

@@ -1,7 +1,8 @@
 'use client';
 
-import { getFormProps, getInputProps, getSelectProps, useForm } from '@conform-to/react';
+import { type FieldMetadata, getFormProps, getInputProps, getSelectProps, useForm } from '@conform-to/react';
 import { parseWithZod } from '@conform-to/zod/v4';
+import Link from 'next/link';
 import { useActionState } from 'react';
 import { FormRefusal } from '@/components/account/form-refusal';
 import { keepTyped } from '@/components/ui/keep-typed';
@@ -46,27 +47,7 @@ export function OpenForm({ sections, chosen }: OpenFormProps) {
         key={fields.sectionId.key}
         error={fields.sectionId.errors}
       />
-      <SelectField
-        label="practical"
-        hint="The latest rubric of each stands first. The sitting keeps the one you choose."
-        placeholder={section ? 'choose a practical' : 'choose a period first'}
-        options={(section?.versions ?? []).map((version) => ({
-          value: version.versionId,
-          label: sayVersion(version),
-        }))}
-        {...getSelectProps(fields.versionId)}
-        key={`${fields.versionId.key}-${section?.sectionId}`}
-        error={fields.versionId.errors}
-      />
-      {section && section.versions.length === 0 ? (
-        <p className="text-label">
-          This period has every published practical of its department already.{' '}
-          <a className="link" href="/practicals">
-            Publish another one
-          </a>{' '}
-          first.
-        </p>
-      ) : null}
+      <VersionChoices section={section} field={fields.versionId} />
       <TextField
         label="due"
         optional
@@ -83,6 +64,39 @@ export function OpenForm({ sections, chosen }: OpenFormProps) {
         <LinkButton href="/sittings">leave it</LinkButton>
       </div>
     </form>
+  );
+}
+
+interface VersionChoicesProps {
+  section: OpenFormProps['sections'][number] | undefined;
+  field: FieldMetadata<string>;
+}
+
+function VersionChoices({ section, field }: VersionChoicesProps) {
+  return (
+    <>
+      <SelectField
+        label="practical"
+        hint="The latest rubric of each stands first. The sitting keeps the one you choose."
+        placeholder={section ? 'choose a practical' : 'choose a period first'}
+        options={(section?.versions ?? []).map((version) => ({
+          value: version.versionId,
+          label: sayVersion(version),
+        }))}
+        {...getSelectProps(field)}
+        key={`${field.key}-${section?.sectionId}`}
+        error={field.errors}
+      />
+      {section && section.versions.length === 0 ? (
+        <p className="text-label">
+          This period has every published practical of its department already.{' '}
+          <Link className="link" href="/practicals">
+            Publish another one
+          </Link>{' '}
+          first.
+        </p>
+      ) : null}
+    </>
   );
 }
 
