@@ -67,6 +67,21 @@ async function lookAtRoster(page: Page, text: string): Promise<void> {
   await page.getByRole('button', { name: 'change the text' }).waitFor();
 }
 
+/** Opens the teacher's open sitting of period 3, or its sheet to publish from. */
+async function openSitting(page: Page, sheet: 'publish' | null = null): Promise<void> {
+  await page.goto('/sittings');
+  await page.getByRole('link', { name: 'Stair tower, period 3', exact: true }).click();
+  await page.getByRole('link', { name: 'publish' }).waitFor();
+  if (sheet) await page.getByRole('link', { name: 'publish' }).click();
+}
+
+/** Opens the gradebook of the teacher's period 3. */
+async function openGradebook(page: Page): Promise<void> {
+  await page.goto('/periods');
+  await page.getByRole('link', { name: 'gradebook of Woods 2, period 3' }).click();
+  await page.getByRole('table', { name: 'students by practicals' }).waitFor();
+}
+
 const MIXED_ROSTER = `ID;family name;given name
 00901;Novotná;Ilse
 00902;Tran;Quynh
@@ -92,6 +107,45 @@ export const SCREENS: Screen[] = [
   { role: 'public', name: 'link-unknown', path: '/invitation/not-a-link' },
   { role: 'public', name: 'not-found', path: '/no-such-page', status: 404 },
   { role: 'teacher', name: 'home', path: '/' },
+  { role: 'teacher', name: 'sittings', path: '/sittings' },
+  { role: 'teacher', name: 'new-sitting', path: '/sittings/new' },
+  { role: 'teacher', name: 'sitting', go: (page) => openSitting(page) },
+  {
+    role: 'teacher',
+    name: 'sitting-student',
+    go: async (page) => {
+      await openSitting(page);
+      await page
+        .getByRole('button', { name: /^change / })
+        .first()
+        .click();
+      await page.getByRole('dialog').waitFor();
+    },
+  },
+  { role: 'teacher', name: 'publish', go: (page) => openSitting(page, 'publish') },
+  { role: 'teacher', name: 'gradebook', go: openGradebook },
+  {
+    role: 'teacher',
+    name: 'gradebook-cell',
+    go: async (page) => {
+      await openGradebook(page);
+      await page
+        .getByRole('button', { name: /, published/ })
+        .nth(5)
+        .click();
+      await page.getByRole('table', { name: 'where the points went' }).waitFor();
+    },
+  },
+  {
+    role: 'teacher',
+    name: 'gradebook-export',
+    go: async (page) => {
+      await openGradebook(page);
+      await page.getByRole('button', { name: 'export CSV' }).click();
+      await page.getByRole('dialog', { name: 'Export' }).waitFor();
+    },
+  },
+  { role: 'head', name: 'gradebooks', path: '/gradebook' },
   { role: 'student', name: 'home', path: '/' },
   { role: 'head', name: 'home', path: '/' },
   { role: 'aide', name: 'home', path: '/' },
