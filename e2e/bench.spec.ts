@@ -174,6 +174,7 @@ test('missing, held and spoiled take two taps and tell the server which and why;
 }) => {
   await tablet.open();
   await tablet.tap(tablet.action('missing'));
+  await expect(page.getByText('What is missing?')).toBeVisible();
   await tablet.tap(tablet.key('base').last());
   await tablet.tap(tablet.action('held'));
   await tablet.tap(tablet.key('other name on it'));

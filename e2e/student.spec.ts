@@ -106,7 +106,7 @@ test('a student measures through a lost network, is refused what cannot be, lock
   await field.press('Enter');
   await expect(page.getByText('Kept: base, length: 6-15/16.')).toBeVisible();
   await expectCounts(page, 3, 1);
-  await page.getByRole('button', { name: 'couldn’t read' }).click();
+  await page.getByRole('button', { name: 'couldn’t read', exact: true }).click();
   await expect(page.getByRole('textbox', { name: 'end 1, width' })).toBeVisible();
   await enter(page, ['3', '1/2']);
   await expect(page.getByRole('textbox', { name: 'end 1, length' })).toBeVisible();
