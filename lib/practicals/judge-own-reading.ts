@@ -31,7 +31,7 @@ const SMALLEST_SHARE = 10;
  * Everything else can be; past the gross limit (1/4 in or 6 mm where there is none) it is far, and asked about once.
  * Exact, in ticks; the question is in plain words. Nothing is ever changed to what it "should" be.
  *
- * @example judgeOwnReading(fortyInchesOnFive, '40').verdict // 'impossible': "… Is that along the grain?"
+ * @example judgeOwnReading(lengthOfFiveInches, fortyInches, '40').verdict // 'impossible': "… Is that along the grain?"
  */
 export function judgeOwnReading(context: OwnReadingContext, ticks: Length, typed: string): OwnReadingVerdict {
   const { line, axis, unit, blank } = context;
