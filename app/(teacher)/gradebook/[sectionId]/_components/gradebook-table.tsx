@@ -49,7 +49,7 @@ export function GradebookTable({ book, selection, onSelect }: GradebookTableProp
         found={rows.length}
         of={book.students.length}
       />
-      <Table caption="students by practicals" className="w-auto min-w-full">
+      <Table caption="students by practicals" className="w-auto">
         <TableHead>
           {table.getHeaderGroups().map((group) => (
             <tr key={group.id}>

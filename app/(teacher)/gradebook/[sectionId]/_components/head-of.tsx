@@ -49,7 +49,7 @@ export function HeadOf({ header, index, book }: HeadOfProps) {
     );
   }
   return (
-    <th {...common} className="h-px min-w-38 px-1.5 align-bottom font-[480] text-ink-2">
+    <th {...common} className="h-px w-42 min-w-38 px-1.5 align-bottom font-[480] text-ink-2">
       {sort(
         book.sittings[index]?.title ?? '',
         <ColumnHead book={book} index={index} from={scaleFrom(percentsOf(book))} />,

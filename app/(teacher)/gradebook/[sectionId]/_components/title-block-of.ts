@@ -25,15 +25,14 @@ export function gradebookTitleBlock(book: GradebookView, late: boolean): TitleBl
       value: file ? `${sayDayOf(file.sentAt, timeZone)}, ${count(file.rows, 'row', 'rows')}` : 'not yet',
     });
   }
-  cells.push({
-    label: 'since then',
-    value: late
-      ? 'not known: no answer'
-      : changed === 0
-        ? 'nothing changed'
-        : `${count(changed, 'result', 'results')} changed`,
-  });
+  cells.push({ label: 'since then', value: sinceThen(latest !== null, changed, late) });
   return cells;
+}
+
+function sinceThen(isPublished: boolean, changed: number, late: boolean): string {
+  if (late) return 'not known: no answer';
+  if (!isPublished) return 'being recorded';
+  return changed === 0 ? 'nothing changed' : `${count(changed, 'result', 'results')} changed`;
 }
 
 function nth(number: number): string {
