@@ -57,32 +57,48 @@ function Head({ align = 'right', children }: { align?: 'left' | 'right'; childre
   );
 }
 
-function Row({ row, unit, both }: { row: LossRow; unit: 'in' | 'mm'; both: boolean }) {
-  const under = row.deviation !== null && row.deviation < 0;
+interface RowProps {
+  row: LossRow;
+  unit: 'in' | 'mm';
+  both: boolean;
+}
+
+function Row({ row, unit, both }: RowProps) {
+  const isSize = row.target !== null;
   return (
     <tr className="border-b border-hair">
-      <th scope="row" className="py-1.5 pr-1 text-left font-[520]">
+      <th scope="row" colSpan={isSize ? 1 : 4} className="min-w-24 py-1.5 text-left font-[520]">
         {nameOf(row)}
       </th>
+      {isSize ? <SizeCells row={row} unit={unit} /> : null}
+      <td className="px-1 text-right">{pointsAsText(row.points)}</td>
+      {both ? <td className="pl-1 text-right">{pointsAsText(row.ofTotal)}</td> : null}
+    </tr>
+  );
+}
+
+/** Target, reading or the word in its place, and the strip. */
+function SizeCells({ row, unit }: Omit<RowProps, 'both'>) {
+  const under = row.deviation !== null && row.deviation < 0;
+  return (
+    <>
       <td className="px-1 text-right">
         {row.target === null ? null : <LengthText ticks={row.target} unit={unit} />}
       </td>
       <td className="px-1 text-right font-[660]">
         {row.reading === null ? row.word : <LengthText ticks={row.reading} unit={unit} />}
       </td>
-      <td className="w-14 px-0">
+      <td className="w-12 px-0">
         {row.deviation === null ? null : (
           <DeviationStrip
             under={under ? row.points : 0}
             over={under ? 0 : row.points}
             full={FULL}
-            className="w-14"
+            className="w-12"
           />
         )}
       </td>
-      <td className="px-1 text-right">{pointsAsText(row.points)}</td>
-      {both ? <td className="pl-1 text-right">{pointsAsText(row.ofTotal)}</td> : null}
-    </tr>
+    </>
   );
 }
 
@@ -100,7 +116,7 @@ function nameOf({ kind, piece, what }: LossRow): ReactNode {
     word
   ) : (
     <>
-      {piece} <span className="font-[480] text-ink-2">{word}</span>
+      {piece} <span className="font-[480] font-stretch-[88%] text-ink-2">{word}</span>
     </>
   );
 }
