@@ -38,13 +38,3 @@ export function HazardSign({ className }: { className?: string }) {
     </svg>
   );
 }
-
-/** A caution, with what comes first whenever the product speaks of a cut. */
-export function Caution({ children, className }: { children: ReactNode; className?: string }) {
-  return (
-    <p className={classNames('text-refuse', className)}>
-      <HazardSign className="mr-1.5" />
-      {children}
-    </p>
-  );
-}

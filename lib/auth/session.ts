@@ -60,11 +60,6 @@ export async function endSession(): Promise<void> {
   await setCookie(lucia().createBlankSessionCookie());
 }
 
-/** Ends every session of a person, as after a changed password. */
-export async function endSessionsOf(personId: string): Promise<void> {
-  await lucia().invalidateUserSessions(personId);
-}
-
 /** Acts in another of the person's own roles from now on; false when they do not hold it. */
 export async function switchRole(role: Role): Promise<boolean> {
   const actor = await currentActor();

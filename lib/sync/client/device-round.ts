@@ -233,7 +233,10 @@ export class DeviceRound implements RoundStore {
     if (this.refreshing) return;
     this.refreshing = true;
     try {
-      const stored = await this.store.readings.where({ sittingId: this.sittingId }).count();
+      const stored = await this.store.readings
+        .where({ sittingId: this.sittingId })
+        .filter(({ event }) => event.side === 'bench')
+        .count();
       if (stored < benchEvents) {
         const fetched = await fetchRound(this.sittingId, true);
         if (!fetched.ok) return;
