@@ -20,8 +20,6 @@ export interface BenchView {
   failure: string | null;
 }
 
-const PLACE_AFTER_MS = 250;
-
 const browserMint: Mint = { id: () => crypto.randomUUID(), now: () => new Date().toISOString() };
 
 /**
@@ -35,7 +33,8 @@ export class BenchSession {
   private readonly listeners = new Set<() => void>();
   private readonly soundListeners = new Set<(sound: Sound) => void>();
   private readonly closers: (() => void)[];
-  private placeTimer: ReturnType<typeof setTimeout> | null = null;
+  private placeIsOld = false;
+  private savingPlace = false;
 
   constructor(
     private readonly store: RoundStore,
@@ -86,7 +85,7 @@ export class BenchSession {
     if (made.length > 0) void this.keep(made, pressId, undid);
     if (sound) for (const listener of this.soundListeners) listener(sound);
     this.store.takeInHand(outcome.state.attemptId);
-    this.savePlaceSoon();
+    void this.savePlace();
   };
 
   getView = (): BenchView => this.view;
@@ -115,8 +114,7 @@ export class BenchSession {
 
   close(): void {
     for (const close of this.closers) close();
-    if (this.placeTimer) clearTimeout(this.placeTimer);
-    void this.store.savePlace(placeOf(this.view.state)).catch(() => {});
+    void this.savePlace();
   }
 
   private async keep(
@@ -150,10 +148,15 @@ export class BenchSession {
     for (const listener of this.listeners) listener();
   }
 
-  private savePlaceSoon(): void {
-    if (this.placeTimer) clearTimeout(this.placeTimer);
-    this.placeTimer = setTimeout(() => {
-      void this.store.savePlace(placeOf(this.view.state)).catch(() => {});
-    }, PLACE_AFTER_MS);
+  /** Written at once, so that a reload finds the cell; while one write is under way, the newest place waits for it. */
+  private async savePlace(): Promise<void> {
+    this.placeIsOld = true;
+    if (this.savingPlace) return;
+    this.savingPlace = true;
+    while (this.placeIsOld) {
+      this.placeIsOld = false;
+      await this.store.savePlace(placeOf(this.view.state)).catch(() => {});
+    }
+    this.savingPlace = false;
   }
 }
