@@ -1,8 +1,7 @@
-import { notFound } from 'next/navigation';
 import type { ReactNode } from 'react';
 import { AccountMenu } from '@/app/account/_components/account-menu';
+import { actorInRole } from '@/app/account/_components/actor-in-role';
 import { DeskShell } from '@/components/shell/desk-shell';
-import { pageActor } from '@/lib/transport/page';
 
 const NAV = [
   { href: '/department', label: 'department' },
@@ -10,8 +9,7 @@ const NAV = [
 ];
 
 export default async function HeadLayout({ children }: { children: ReactNode }) {
-  const actor = await pageActor();
-  if (actor.role !== 'head') notFound();
+  const actor = await actorInRole('head');
   const name = `${actor.givenName} ${actor.familyName}`.trim();
   return (
     <DeskShell

@@ -92,5 +92,5 @@ export function selectRounds(tx: Transaction, schoolId: string, personId: string
         duty === 'aide' ? eq(sittings.state, 'open') : undefined,
       ),
     )
-    .orderBy(desc(sittings.state), asc(sections.period), asc(sections.name), desc(sittings.openedAt));
+    .orderBy(asc(sittings.state), asc(sections.period), asc(sections.name), desc(sittings.openedAt));
 }

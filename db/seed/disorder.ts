@@ -167,7 +167,7 @@ function twoGraders(
   events: SeedEvent[],
 ): SeedEvent[] {
   const attempt = sitting.attempts[13];
-  const second = school.staff.get('vass');
+  const second = school.staff.get('lindqvist');
   const [first] = sitting.version.rubric.lines;
   if (!attempt || !second || !first) throw new Error('the second grader has nothing to read');
   const recorder = new Recorder(random, random.uuid(), second, 'bench', afterRound(sitting));

@@ -35,7 +35,7 @@ export const CEDAR_FORK: SchoolPlan = {
   staff: [
     { key: 'lindqvist', familyName: 'Lindqvist', givenName: 'Rut', roles: ['teacher'] },
     { key: 'okonjo', familyName: 'Okonjo', givenName: 'Dayo', roles: ['teacher'] },
-    { key: 'vass', familyName: 'Vass', givenName: 'Imre', roles: ['head', 'teacher'] },
+    { key: 'vass', familyName: 'Vass', givenName: 'Imre', roles: ['head'] },
     { key: 'pell', familyName: 'Pell', givenName: 'Jonah', roles: ['aide'] },
     { key: 'adeyemi', familyName: 'Adeyemi', givenName: 'Nomsa', roles: ['admin'] },
   ],
@@ -58,7 +58,7 @@ export const ARDMORE: SchoolPlan = {
   staff: [
     { key: 'brandt', familyName: 'Brandt', givenName: 'Silke', roles: ['teacher'] },
     { key: 'sorley', familyName: 'Sorley', givenName: 'Hamish', roles: ['teacher'] },
-    { key: 'kerr', familyName: 'Kerr', givenName: 'Ishbel', roles: ['head'] },
+    { key: 'kerr', familyName: 'Kerr', givenName: 'Ishbel', roles: ['head', 'teacher'] },
     { key: 'osei', familyName: 'Osei', givenName: 'Abena', roles: ['admin'] },
   ],
   sections: [

@@ -1,8 +1,9 @@
 import type { Metadata } from 'next';
+import { actorInRole } from '@/app/account/_components/actor-in-role';
 import { DeskPage } from '@/components/shell/desk-page';
 import { EmptyState } from '@/components/ui/empty-state';
 import { listRubrics } from '@/lib/data/department/list-rubrics';
-import { pageActor, pageValue } from '@/lib/transport/page';
+import { pageValue } from '@/lib/transport/page';
 import { RubricGroup } from './_components/rubric-group';
 
 export const metadata: Metadata = { title: 'Department' };
@@ -10,7 +11,7 @@ export const metadata: Metadata = { title: 'Department' };
 const count = (of: number, one: string) => `${of} ${one}${of === 1 ? '' : 's'}`;
 
 export default async function DepartmentPage() {
-  const { groups } = pageValue(await listRubrics(await pageActor(), {}));
+  const { groups } = pageValue(await listRubrics(await actorInRole('head'), {}));
   const rubrics = groups.flatMap((group) => group.rubrics);
   const sittings = rubrics.reduce((sum, rubric) => sum + rubric.sittings, 0);
   const teachers = new Set(rubrics.map(({ ownerName }) => ownerName)).size;

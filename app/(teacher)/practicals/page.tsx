@@ -1,10 +1,11 @@
 import type { Metadata } from 'next';
 import Link from 'next/link';
+import { actorInRole } from '@/app/account/_components/actor-in-role';
 import { DeskPage } from '@/components/shell/desk-page';
 import { EmptyState } from '@/components/ui/empty-state';
 import { LinkButton } from '@/components/ui/link-button';
 import { listPracticals } from '@/lib/data/practicals/list-practicals';
-import { pageActor, pageValue } from '@/lib/transport/page';
+import { pageValue } from '@/lib/transport/page';
 import { DepartmentList } from './_components/department-list';
 import { PracticalTable } from './_components/practical-table';
 import { StarterList } from './_components/starter-list';
@@ -17,7 +18,7 @@ interface PracticalsPageProps {
 
 export default async function PracticalsPage({ searchParams }: PracticalsPageProps) {
   const archived = (await searchParams).put === 'away';
-  const { own, department } = pageValue(await listPracticals(await pageActor(), { archived }));
+  const { own, department } = pageValue(await listPracticals(await actorInRole('teacher'), { archived }));
   const first = own.length === 0 && !archived;
   return (
     <DeskPage

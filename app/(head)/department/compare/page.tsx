@@ -1,9 +1,10 @@
 import type { Metadata } from 'next';
+import { actorInRole } from '@/app/account/_components/actor-in-role';
 import { DeskPage } from '@/components/shell/desk-page';
 import { EmptyState } from '@/components/ui/empty-state';
 import { LinkButton } from '@/components/ui/link-button';
 import { compareVersions } from '@/lib/data/department/compare-versions';
-import { pageActor, pageValue } from '@/lib/transport/page';
+import { pageValue } from '@/lib/transport/page';
 import { comparisonTitleBlock } from '../_components/comparison-title-block';
 import { ComparisonView } from '../_components/comparison-view';
 import { DifferenceTable } from '../_components/difference-table';
@@ -20,7 +21,7 @@ const BESIDE = 3;
 export default async function ComparePage({ searchParams }: ComparePageProps) {
   const { versions: asked = [] } = await searchParams;
   const versionIds = [asked].flat().flatMap((each) => each.split(',').filter(Boolean));
-  const result = await compareVersions(await pageActor(), { versionIds });
+  const result = await compareVersions(await actorInRole('head'), { versionIds });
   if (!result.ok && result.problem.code === 'invalid')
     return <NotComparable reason={result.problem.message} />;
   const view = pageValue(result);

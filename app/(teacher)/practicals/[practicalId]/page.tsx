@@ -1,6 +1,7 @@
 import type { Metadata } from 'next';
+import { actorInRole } from '@/app/account/_components/actor-in-role';
 import { readPractical } from '@/lib/data/practicals/read-practical';
-import { pageActor, pageValue } from '@/lib/transport/page';
+import { pageValue } from '@/lib/transport/page';
 import { PracticalEditor } from './_components/practical-editor';
 
 interface PracticalPageProps {
@@ -11,6 +12,6 @@ export const metadata: Metadata = { title: 'Practical' };
 
 export default async function PracticalPage({ params }: PracticalPageProps) {
   const { practicalId } = await params;
-  const view = pageValue(await readPractical(await pageActor(), { practicalId }));
+  const view = pageValue(await readPractical(await actorInRole('teacher'), { practicalId }));
   return <PracticalEditor key={practicalId} view={view} />;
 }

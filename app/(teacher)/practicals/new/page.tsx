@@ -1,15 +1,16 @@
 import type { Metadata } from 'next';
+import { actorInRole } from '@/app/account/_components/actor-in-role';
 import { DeskPage } from '@/components/shell/desk-page';
 import { Heading } from '@/components/ui/titles';
 import { listPracticals } from '@/lib/data/practicals/list-practicals';
-import { pageActor, pageValue } from '@/lib/transport/page';
+import { pageValue } from '@/lib/transport/page';
 import { NewPracticalForm } from '../_components/new-practical-form';
 import { StarterList } from '../_components/starter-list';
 
 export const metadata: Metadata = { title: 'New practical' };
 
 export default async function NewPracticalPage() {
-  const { own } = pageValue(await listPracticals(await pageActor(), {}));
+  const { own } = pageValue(await listPracticals(await actorInRole('teacher'), {}));
   return (
     <DeskPage title="New practical">
       <div className="grid grid-cols-[minmax(0,1fr)] gap-10">
