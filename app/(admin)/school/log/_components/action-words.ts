@@ -47,18 +47,24 @@ export function sayAction(action: string): string {
 export function sayDetails(details: unknown): string {
   if (typeof details !== 'object' || details === null) return '';
   return Object.entries(details)
-    .filter(([, value]) => value !== '' && value !== null)
+    .filter(([, value]) => value !== '' && value !== null && !isId(value))
     .map(([name, value]) => `${name.replaceAll(/([A-Z])/g, ' $1').toLowerCase()}: ${sayValue(value)}`)
     .join('; ');
+}
+
+/** Ids mean nothing to a reader; a list of them is told by how many there are. */
+function isId(value: unknown): boolean {
+  return typeof value === 'string' && /^[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12}$/.test(value);
 }
 
 function sayValue(value: unknown): string {
   if (value === true) return 'yes';
   if (value === false) return 'no';
   if (value === null || value === '') return 'none';
-  if (Array.isArray(value)) return value.map(sayValue).join(', ');
+  if (Array.isArray(value)) return value.some(isId) ? String(value.length) : value.map(sayValue).join(', ');
   if (typeof value === 'object') {
     return Object.entries(value)
+      .filter(([, inner]) => !isId(inner))
       .map(([name, inner]) => `${name} ${sayValue(inner)}`)
       .join(', ');
   }
