@@ -11,11 +11,16 @@ export function parseChecks(reader: FieldReader, path: string, checks: readonly 
     if (names.has(label.toLowerCase())) reader.refuse(`${at}.label`, 'Another check has this name.');
     if (label !== '') names.add(label.toLowerCase());
     const levels = check.levels.map((level, place) => ({
-      label: reader.text(`${at}.levels.${place}.label`, level.label, 60, 'Name this level.'),
+      label: reader.text(
+        `${at}.levels.${place}.label`,
+        level.label,
+        60,
+        place === 0 ? 'Name what passes.' : 'Name this fault.',
+      ),
       lose: place === 0 ? 0 : reader.points(`${at}.levels.${place}.lose`, level.lose),
     }));
     if (check.assume !== null && !levels[check.assume]) {
-      reader.refuse(`${at}.assume`, 'Choose one of the levels.');
+      reader.refuse(`${at}.assume`, 'Choose what passes or one of the faults.');
     }
     return { id: check.id, label, levels, assume: check.assume };
   });

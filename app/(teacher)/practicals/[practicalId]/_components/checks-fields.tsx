@@ -84,7 +84,7 @@ function CheckFields({ base, check, index, change }: CheckFieldsProps) {
         </Button>
       </div>
       <fieldset className="min-w-0">
-        <legend className="sr-only">levels of {name}</legend>
+        <legend className="sr-only">what {name} passes as, and its faults</legend>
         {[...check.levels.keys()].map((place) => (
           <div key={place} className="grid grid-cols-[minmax(0,1fr)_7rem_2.5rem] items-end gap-x-3">
             <DraftField path={`${base}.levels.${place}.label`} label={place === 0 ? 'passes as' : 'or is'} />
@@ -98,7 +98,7 @@ function CheckFields({ base, check, index, change }: CheckFieldsProps) {
                 kind="quiet"
                 size="small"
                 className="px-0"
-                aria-label={`take out level ${place + 1} of ${name}`}
+                aria-label={`take out fault ${place} of ${name}`}
                 onClick={() =>
                   changeThis((each) => {
                     each.levels.splice(place, 1);
@@ -118,7 +118,7 @@ function CheckFields({ base, check, index, change }: CheckFieldsProps) {
             className="px-0"
             onClick={() => changeThis((each) => void each.levels.push({ label: '', lose: '' }))}
           >
-            add a level
+            add a fault
           </Button>
         ) : null}
       </fieldset>
@@ -134,9 +134,9 @@ function CheckFields({ base, check, index, change }: CheckFieldsProps) {
         options={[
           ...check.levels.map(({ label }, place) => ({
             value: String(place),
-            label: label || `level ${place + 1}`,
+            label: label || (place === 0 ? 'passed' : `fault ${place}`),
           })),
-          { value: '', label: 'not known: it must be said' },
+          { value: '', label: 'nothing until said' },
         ]}
       />
     </div>

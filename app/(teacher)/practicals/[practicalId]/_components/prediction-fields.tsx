@@ -7,8 +7,8 @@ export function PredictionFields() {
   return (
     <>
       <p className="max-w-[52ch] text-label text-ink-2">
-        Students lock a score of their own before you measure. How well they measured earns a bonus; how good
-        the parts are has no part in it.
+        Students lock a score of their own before you measure. How well they measured earns a bonus; how well
+        they cut does not count in it.
       </p>
       <div className="grid max-w-[30rem] grid-cols-2 items-end gap-4">
         <DraftField path="prediction.full" label="bonus for measuring well" kind="number" />
