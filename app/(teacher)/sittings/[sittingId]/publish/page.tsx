@@ -23,7 +23,7 @@ export default async function PublishPage({ params }: PageProps<'/sittings/[sitt
         { label: 'publication', value: number === 1 ? 'the first' : `number ${number}` },
         {
           label: 'differs',
-          value: preview.changed === null ? 'from nothing yet' : sayChanged(preview.changed),
+          value: preview.changed === null ? 'nothing is out yet' : sayChanged(preview.changed),
         },
       ]}
     >

@@ -36,7 +36,7 @@ export function OutcomeTable({ preview }: { preview: PublicationPreview }) {
         <Row number={incomplete.length} word="not read" note="begun, sizes left">
           <Names of={incomplete} />
         </Row>
-        <Row number={conflicts.length} word="nothing yet" note="two readings">
+        <Row number={conflicts.length} word="not yet" note="two readings to settle">
           <Names of={conflicts} />
         </Row>
       </TableBody>
