@@ -8,9 +8,9 @@ const SECRET_PATTERN = /^[\w-]{43}$/;
 const typedPassword = (label: string) =>
   z.string(`Type ${label}.`).min(1, `Type ${label}.`).max(1_024, 'This is too long.');
 
-export const secret = z
-  .string('This link is not complete.')
-  .regex(SECRET_PATTERN, 'This link is not complete.');
+const CUT_LINK = 'Part of this link is missing. Copy all of it again, or ask for a new one.';
+
+export const secret = z.string(CUT_LINK).regex(SECRET_PATTERN, CUT_LINK);
 
 export const email = z
   .string('Type an e-mail address.')

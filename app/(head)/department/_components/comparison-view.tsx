@@ -53,7 +53,7 @@ function Stack({ sizes, view }: { sizes: ComparedSizes; view: VersionsComparison
           <PhraseText phrase={sizes.name} unit={unit} />
         </Heading>
         <p className="text-label text-ink-2">
-          {differs ? 'they part where the ground is washed' : 'no difference'}; drawn for {first.label},{' '}
+          {differs ? 'they differ where the ground is tinted' : 'no difference'}; drawn for {first.label},{' '}
           {first.axis}
         </p>
       </div>

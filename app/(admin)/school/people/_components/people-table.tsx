@@ -10,7 +10,7 @@ export function PeopleTable({ people, students }: { people: PersonView[]; studen
       <TableHead>
         <tr>
           <HeadCell>name</HeadCell>
-          {students ? <HeadCell>ID</HeadCell> : <HeadCell className="max-sm:hidden">e-mail</HeadCell>}
+          {students ? <HeadCell>ID</HeadCell> : <HeadCell className="max-sm:hidden">email</HeadCell>}
           {students ? null : <HeadCell>roles</HeadCell>}
           {students ? null : <HeadCell className="max-md:hidden">department</HeadCell>}
           <HeadCell>

@@ -32,7 +32,10 @@ export function PersonActs({ person }: { person: PersonView }) {
         </div>
       ) : (
         <div className="grid gap-2">
-          <p>Who has left cannot sign in any more. All that was recorded stays, and this can be undone.</p>
+          <p>
+            Whoever is marked as left can no longer sign in. All that was recorded stays, and this can be
+            undone.
+          </p>
           <Press what="left" personId={personId} />
         </div>
       )}

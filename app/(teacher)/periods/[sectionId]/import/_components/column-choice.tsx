@@ -69,7 +69,7 @@ export function ColumnChoice({ state, looked: { roster, preview } }: ColumnChoic
           </TableBody>
         </Table>
         <CheckboxField
-          label="the first row names the columns, it is no student"
+          label="the first row names the columns and is not a student"
           checked={header}
           onChange={(event) => setHeader(event.currentTarget.checked)}
         />
