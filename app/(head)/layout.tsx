@@ -15,7 +15,7 @@ export default async function HeadLayout({ children }: { children: ReactNode }) 
     <DeskShell
       home="/department"
       nav={NAV}
-      person={{ name, place: 'department head' }}
+      person={{ name, place: actor.schoolName }}
       menu={<AccountMenu actor={actor} />}
     >
       {children}

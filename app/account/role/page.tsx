@@ -15,14 +15,16 @@ export default async function RolePage({ searchParams }: RolePageProps) {
   const actor = await pageActor();
   const { for: wanted } = await searchParams;
   const role = ROLES.find((each) => each === wanted && actor.roles.includes(each));
+  const several = actor.roles.length > 1;
+  const choice = several ? 'Choose the role to go on in.' : 'You have no other role.';
   return (
     <EntranceShell
-      title="Another of your roles"
+      title={several ? 'Another of your roles' : 'Your role'}
       titleBlock={[{ label: 'school', value: actor.schoolName, wide: true }]}
     >
       <p className="mb-6">
         You act as {ROLE_NAMES[actor.role]} now.{' '}
-        {role ? `That sheet is for you as ${ROLE_NAMES[role]}.` : 'Choose the role to go on in.'}
+        {role ? `That sheet is for you as ${ROLE_NAMES[role]}.` : choice}
       </p>
       <RoleSwitch actor={actor} />
       <p className="mt-8">
