@@ -34,7 +34,7 @@ export async function DeskShell({ home, nav, person, places, menu, children }: D
         <Link
           href={home}
           aria-label="Trymark, first screen"
-          className="-mb-[3px] text-[1.75rem] md:text-[2rem]"
+          className="-mb-[3px] text-[1.75rem] md:text-[2rem] lg:mb-0"
         >
           <Logo edge="narrow" />
         </Link>

@@ -13,6 +13,12 @@ import {
 } from '@/db/schema';
 import { inSectionToday, schoolToday } from './sections';
 
+/** A redo counts in place of the attempt before it. */
+const isLatestAttempt = sql`not exists (
+  select from ${attempts} later
+  where later.school_id = ${attempts.schoolId} and later.sitting_id = ${attempts.sittingId}
+    and later.student_id = ${attempts.studentId} and later.number > ${attempts.number})`;
+
 /** Open sittings of the sections in which the person works today in that duty, with how far each has come. */
 export function selectRounds(tx: Transaction, schoolId: string, personId: string, duty: 'teacher' | 'aide') {
   const enrolled = tx
@@ -34,6 +40,16 @@ export function selectRounds(tx: Transaction, schoolId: string, personId: string
       conflicts: sql<number>`coalesce(sum(${scoreSheets.conflicts}), 0)::int`.as('conflicts'),
     })
     .from(attempts)
+    .innerJoin(sittings, and(eq(sittings.schoolId, attempts.schoolId), eq(sittings.id, attempts.sittingId)))
+    .innerJoin(
+      enrollments,
+      and(
+        eq(enrollments.schoolId, attempts.schoolId),
+        eq(enrollments.sectionId, sittings.sectionId),
+        eq(enrollments.studentId, attempts.studentId),
+      ),
+    )
+    .innerJoin(schools, eq(schools.id, attempts.schoolId))
     .leftJoin(
       scoreSheets,
       and(
@@ -42,7 +58,7 @@ export function selectRounds(tx: Transaction, schoolId: string, personId: string
         eq(scoreSheets.side, 'bench'),
       ),
     )
-    .where(eq(attempts.schoolId, schoolId))
+    .where(and(eq(attempts.schoolId, schoolId), inSectionToday, isLatestAttempt))
     .groupBy(attempts.sittingId)
     .as('progress');
   return tx

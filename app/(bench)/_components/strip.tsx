@@ -26,7 +26,7 @@ export function Strip() {
     <header className="flex flex-wrap items-stretch border-b-edge border-ink lg:h-[66px] lg:flex-nowrap">
       <div className="flex min-w-0 flex-[1_1_16rem] items-end gap-4 pr-3">
         <Mark className="h-11 w-auto shrink-0" />
-        <div className="min-w-0 pb-1">
+        <div className="min-w-0">
           <p className="narrow overflow-hidden text-label text-ellipsis whitespace-nowrap text-ink-2">
             {practice ? 'practice, ' : ''}Period {bundle.period}, {bundle.task.title}, {rubric}
           </p>
@@ -34,7 +34,7 @@ export function Strip() {
             className={classNames(
               'overflow-hidden font-title font-[620] text-ellipsis whitespace-nowrap',
               sizeOfName(student ? fullName(student) : '', view.inHand.length > 0),
-              'leading-9',
+              'pb-1 leading-9',
             )}
           >
             {student ? fullName(student) : 'no students'}

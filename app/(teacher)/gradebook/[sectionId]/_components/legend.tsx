@@ -19,6 +19,7 @@ export function Legend() {
         <span className="tnum font-[380] text-ink">91</span> still being recorded
       </li>
       <li>A word carries no number; zero does.</li>
+      <li>over 100: points for the prediction</li>
       <li>term: simple mean of what is published, percent</li>
     </ul>
   );
