@@ -57,7 +57,7 @@ export function selectOwnPracticals(
     .orderBy(desc(practicalDrafts.savedAt));
 }
 
-/** What others of the department have published last, by title. */
+/** What others of the department have published last and offer, by title. */
 export function selectOthersPublished(
   tx: Transaction,
   schoolId: string,
@@ -83,6 +83,7 @@ export function selectOthersPublished(
         eq(practicals.schoolId, schoolId),
         eq(practicals.departmentId, departmentId),
         ne(practicals.ownerId, personId),
+        isNotNull(practicals.offeredAt),
         isNull(practicals.archivedAt),
       ),
     )

@@ -117,6 +117,7 @@ export async function selectVersion(tx: Transaction, schoolId: string, versionId
       practicalId: rubricVersions.practicalId,
       departmentId: practicals.departmentId,
       ownerId: practicals.ownerId,
+      offeredAt: practicals.offeredAt,
       number: rubricVersions.number,
       task: rubricVersions.task,
       form: rubricVersions.form,

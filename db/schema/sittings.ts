@@ -51,6 +51,46 @@ export const sittings = pgTable(
   ],
 );
 
+/** A sitting's way from one version to the next. An undone one stays, and says who took it back. */
+export const sittingMoves = pgTable(
+  'sitting_moves',
+  {
+    schoolId: schoolId(),
+    id: rowId(),
+    sittingId: uuid('sitting_id').notNull(),
+    number: integer('number').notNull(),
+    practicalId: uuid('practical_id').notNull(),
+    fromVersionId: uuid('from_version_id').notNull(),
+    toVersionId: uuid('to_version_id').notNull(),
+    /** Nobody's score drops by this move. */
+    holdHarmless: boolean('hold_harmless').notNull(),
+    /** The number of the latest publication when it was made, 0 before the first; a later one ends the undoing. */
+    afterPublication: integer('after_publication').notNull(),
+    movedBy: uuid('moved_by').notNull(),
+    movedAt: moment('moved_at').notNull().defaultNow(),
+    undoneBy: uuid('undone_by'),
+    undoneAt: moment('undone_at'),
+  },
+  (t) => [
+    primaryKey({ columns: [t.schoolId, t.id] }),
+    foreignKey({ columns: [t.schoolId, t.sittingId], foreignColumns: [sittings.schoolId, sittings.id] }),
+    foreignKey({
+      columns: [t.schoolId, t.fromVersionId, t.practicalId],
+      foreignColumns: [rubricVersions.schoolId, rubricVersions.id, rubricVersions.practicalId],
+    }),
+    foreignKey({
+      columns: [t.schoolId, t.toVersionId, t.practicalId],
+      foreignColumns: [rubricVersions.schoolId, rubricVersions.id, rubricVersions.practicalId],
+    }),
+    foreignKey({ columns: [t.schoolId, t.movedBy], foreignColumns: [people.schoolId, people.id] }),
+    foreignKey({ columns: [t.schoolId, t.undoneBy], foreignColumns: [people.schoolId, people.id] }),
+    uniqueIndex('sitting_moves_number').on(t.schoolId, t.sittingId, t.number),
+    check('sitting_moves_number_positive', sql`${t.number} >= 1`),
+    check('sitting_moves_publication', sql`${t.afterPublication} >= 0`),
+    check('sitting_moves_undone', sql`(${t.undoneBy} is null) = (${t.undoneAt} is null)`),
+  ],
+);
+
 /** `standing` tells why there is no number: only `zero` is one. It follows the events of its cell. */
 export const attempts = pgTable(
   'attempts',
@@ -126,39 +166,6 @@ export const readingEvents = pgTable(
   ],
 );
 
-/** Derived from the events by the version and engine named; can be rebuilt from them at any time. */
-export const scoreSheets = pgTable(
-  'score_sheets',
-  {
-    schoolId: schoolId(),
-    attemptId: uuid('attempt_id').notNull(),
-    side: text('side', { enum: ['bench', 'own'] }).notNull(),
-    rubricVersionId: uuid('rubric_version_id').notNull(),
-    engineVersion: integer('engine_version').notNull(),
-    recorded: jsonb('recorded').notNull(),
-    sheet: jsonb('sheet').notNull(),
-    scorePoints: integer('score_points'),
-    provisionalPoints: integer('provisional_points'),
-    totalPoints: integer('total_points').notNull(),
-    lostPoints: integer('lost_points').notNull(),
-    complete: boolean('complete').notNull(),
-    conflicts: integer('conflicts').notNull(),
-    finished: boolean('finished').notNull(),
-    lockedAt: moment('locked_at'),
-    measuredAt: moment('measured_at'),
-    updatedAt: moment('updated_at').notNull().defaultNow(),
-  },
-  (t) => [
-    primaryKey({ columns: [t.schoolId, t.attemptId, t.side] }),
-    foreignKey({ columns: [t.schoolId, t.attemptId], foreignColumns: [attempts.schoolId, attempts.id] }),
-    foreignKey({
-      columns: [t.schoolId, t.rubricVersionId],
-      foreignColumns: [rubricVersions.schoolId, rubricVersions.id],
-    }),
-    check('score_sheets_side', sql`${t.side} in ('bench', 'own')`),
-  ],
-);
-
 /** Whose pieces each device has on its bench now. */
 export const inHand = pgTable(
   'in_hand',
@@ -176,60 +183,5 @@ export const inHand = pgTable(
     foreignKey({ columns: [t.schoolId, t.sittingId], foreignColumns: [sittings.schoolId, sittings.id] }),
     foreignKey({ columns: [t.schoolId, t.personId], foreignColumns: [people.schoolId, people.id] }),
     foreignKey({ columns: [t.schoolId, t.attemptId], foreignColumns: [attempts.schoolId, attempts.id] }),
-  ],
-);
-
-export const publications = pgTable(
-  'publications',
-  {
-    schoolId: schoolId(),
-    id: rowId(),
-    sittingId: uuid('sitting_id').notNull(),
-    number: integer('number').notNull(),
-    rubricVersionId: uuid('rubric_version_id').notNull(),
-    publishedBy: uuid('published_by').notNull(),
-    publishedAt: moment('published_at').notNull().defaultNow(),
-  },
-  (t) => [
-    primaryKey({ columns: [t.schoolId, t.id] }),
-    foreignKey({ columns: [t.schoolId, t.sittingId], foreignColumns: [sittings.schoolId, sittings.id] }),
-    foreignKey({
-      columns: [t.schoolId, t.rubricVersionId],
-      foreignColumns: [rubricVersions.schoolId, rubricVersions.id],
-    }),
-    foreignKey({ columns: [t.schoolId, t.publishedBy], foreignColumns: [people.schoolId, people.id] }),
-    uniqueIndex('publications_number').on(t.schoolId, t.sittingId, t.number),
-    check('publications_number_positive', sql`${t.number} >= 1`),
-  ],
-);
-
-/** What a publication told each student; a later correction is another publication. */
-export const results = pgTable(
-  'results',
-  {
-    schoolId: schoolId(),
-    publicationId: uuid('publication_id').notNull(),
-    attemptId: uuid('attempt_id').notNull(),
-    status: text('status', { enum: ['scored', 'absent', 'excused', 'zero', 'not read'] }).notNull(),
-    scorePoints: integer('score_points'),
-    totalPoints: integer('total_points').notNull(),
-    bonusPoints: integer('bonus_points').notNull(),
-    predictedPoints: integer('predicted_points'),
-    measuredAt: moment('measured_at'),
-    sheet: jsonb('sheet'),
-    ownSheet: jsonb('own_sheet'),
-    judgement: jsonb('judgement'),
-  },
-  (t) => [
-    primaryKey({ columns: [t.schoolId, t.publicationId, t.attemptId] }),
-    foreignKey({
-      columns: [t.schoolId, t.publicationId],
-      foreignColumns: [publications.schoolId, publications.id],
-    }),
-    foreignKey({ columns: [t.schoolId, t.attemptId], foreignColumns: [attempts.schoolId, attempts.id] }),
-    index('results_attempt').on(t.schoolId, t.attemptId),
-    check('results_status', sql`${t.status} in ('scored', 'absent', 'excused', 'zero', 'not read')`),
-    check('results_points', sql`${t.totalPoints} >= 0 and ${t.bonusPoints} >= 0`),
-    check('results_number', sql`(${t.status} in ('scored', 'zero')) = (${t.scorePoints} is not null)`),
   ],
 );

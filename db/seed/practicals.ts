@@ -150,6 +150,7 @@ async function seedPractical(
   const draft = starterDraft(plan.starter);
   plan.change?.(draft);
   const practicalId = random.uuid();
+  const source = plan.copiedFrom ? before.get(plan.copiedFrom) : undefined;
   await tx.insert(practicals).values({
     schoolId: school.id,
     id: practicalId,
@@ -157,7 +158,7 @@ async function seedPractical(
     ownerId,
     title: draft.title,
     unit: draft.unit,
-    copiedFromVersionId: plan.copiedFrom ? (before.get(plan.copiedFrom)?.id ?? null) : null,
+    ...(source && { copiedFromVersionId: source.id, sourceKind: 'adopted' as const }),
     createdAt: morningOf(plan.publishedOn),
   });
   const version = await seedVersion(tx, random, school, practicalId, ownerId, draft, 1, plan.publishedOn);

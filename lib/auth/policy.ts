@@ -10,6 +10,8 @@ export interface Subject {
   teacherIds?: readonly string[];
   /** The aides of the section whose given days include today. */
   aideIds?: readonly string[];
+  /** The practical's owner offers it to the department. */
+  offered?: boolean;
   /** The student the record is about. */
   studentId?: string | null;
 }
@@ -21,8 +23,8 @@ const ofSection: Rule = (actor, subject) => subject.teacherIds?.includes(actor.p
 const aideToday: Rule = (actor, subject) => subject.aideIds?.includes(actor.personId) ?? false;
 const ofDepartment: Rule = (actor, subject) =>
   actor.departmentId !== null && actor.departmentId === subject.departmentId;
-const ofSectionOrDepartment: Rule = (actor, subject) =>
-  ofSection(actor, subject) || ofDepartment(actor, subject);
+const offeredToDepartment: Rule = (actor, subject) =>
+  ofSection(actor, subject) || (subject.offered === true && ofDepartment(actor, subject));
 const self: Rule = (actor, subject) => subject.studentId === actor.personId;
 
 /**
@@ -50,12 +52,17 @@ const RULES = {
   'practical.list': { teacher: anyone, head: anyone },
   'practical.read': { teacher: ofSection, head: ofDepartment },
   'practical.change': { teacher: ofSection },
-  'practical.copy': { teacher: ofSectionOrDepartment },
+  'practical.copy': { teacher: offeredToDepartment },
+  'version.read': { teacher: offeredToDepartment, head: ofDepartment },
   'sitting.open': { teacher: ofSection },
   'sitting.list': { teacher: anyone, aide: anyone },
   'sitting.read': { teacher: ofSection, head: ofDepartment },
   'sitting.change': { teacher: ofSection },
   'sitting.publish': { teacher: ofSection },
+  'sitting.move': { teacher: ofSection },
+  'accommodation.list': { teacher: ofSection, head: ofDepartment },
+  'accommodation.change': { teacher: ofSection },
+  'accommodation.reason': { teacher: ofSection, head: ofDepartment },
   'round.read': { teacher: ofSection, aide: aideToday },
   'round.record': { teacher: ofSection, aide: aideToday },
   'round.finish': { teacher: ofSection },
@@ -67,6 +74,7 @@ const RULES = {
   'own.record': { student: self },
   'result.read': { student: self },
   'rubric.compare': { head: ofDepartment },
+  'rubric.approve': { head: ofDepartment },
 } as const satisfies Record<string, Partial<Record<Role, Rule>>>;
 
 export type Action = keyof typeof RULES;

@@ -5,7 +5,7 @@ import { copyPracticalInput } from '@/lib/contracts/practicals';
 import type { PracticalDraft } from '@/lib/practicals/draft';
 import { draftOf } from '@/lib/practicals/draft-of';
 import { type Context, defineVerb } from '../verb';
-import { writePractical } from './new-practical';
+import { type PracticalSource, writePractical } from './new-practical';
 import { practicalSubject } from './practical-subject';
 import { storedDraft, storedVersion } from './stored';
 
@@ -19,7 +19,7 @@ export const copyPractical = defineVerb({
     const { input, log } = context;
     const source = input.versionId ? await versionSource(context) : await draftSource(context);
     const title = source.own ? `${source.draft.title.slice(0, LONGEST_TITLE - 5)}, copy` : source.draft.title;
-    const practicalId = await writePractical(context, { ...source.draft, title }, input.versionId);
+    const practicalId = await writePractical(context, { ...source.draft, title }, source.taken);
     await log({
       subjectKind: 'practical',
       subjectId: practicalId,
@@ -30,7 +30,7 @@ export const copyPractical = defineVerb({
 });
 
 type Input = Context<{ practicalId: string; versionId: string | null }>;
-type Source = { draft: PracticalDraft; own: boolean };
+type Source = { draft: PracticalDraft; own: boolean; taken: PracticalSource | null };
 
 async function draftSource({ actor, input, tx, found, authorize, refuse }: Input): Promise<Source> {
   const row = found(await selectPractical(tx, actor.schoolId, input.practicalId));
@@ -39,7 +39,7 @@ async function draftSource({ actor, input, tx, found, authorize, refuse }: Input
     refuse('not_found', 'Only what the department has published can be copied.');
   }
   const draft = storedDraft(found(await selectDraft(tx, actor.schoolId, input.practicalId)).content);
-  return { draft: { ...draft, title: draft.title.trim() || row.title }, own: true };
+  return { draft: { ...draft, title: draft.title.trim() || row.title }, own: true, taken: null };
 }
 
 async function versionSource({ actor, input, tx, found, authorize }: Input): Promise<Source> {
@@ -47,5 +47,10 @@ async function versionSource({ actor, input, tx, found, authorize }: Input): Pro
   authorize(practicalSubject(row));
   found(row.practicalId === input.practicalId ? row : null);
   const { task, form } = storedVersion(row);
-  return { draft: draftOf(task, form), own: row.ownerId === actor.personId };
+  const own = row.ownerId === actor.personId;
+  return {
+    draft: draftOf(task, form),
+    own,
+    taken: { versionId: row.versionId, kind: own ? 'copy' : 'adopted' },
+  };
 }

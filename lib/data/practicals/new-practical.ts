@@ -6,11 +6,17 @@ import type { Context } from '../verb';
 
 type Writing = Pick<Context<unknown>, 'actor' | 'tx' | 'refuse'>;
 
+/** The published version that a practical was taken from, and what it is to it. */
+export interface PracticalSource {
+  versionId: string;
+  kind: 'copy' | 'adopted' | 'variant';
+}
+
 /** Writes a practical of the actor's with its first draft, in the actor's department or the school's only one. */
 export async function writePractical(
   { actor, tx, refuse }: Writing,
   draft: PracticalDraft,
-  copiedFromVersionId: string | null = null,
+  source: PracticalSource | null = null,
 ): Promise<string> {
   const { schoolId, personId } = actor;
   const departments = actor.departmentId ? [] : await selectDepartments(tx, schoolId);
@@ -20,5 +26,6 @@ export async function writePractical(
     only ??
     refuse('conflict', 'You are in no department yet. Ask the admin to set one; then make the practical.');
   const row = { schoolId, departmentId, ownerId: personId, title: draft.title, unit: draft.unit };
-  return insertPractical(tx, { ...row, copiedFromVersionId }, { content: draft, savedBy: personId });
+  const taken = source && { copiedFromVersionId: source.versionId, sourceKind: source.kind };
+  return insertPractical(tx, { ...row, ...taken }, { content: draft, savedBy: personId });
 }

@@ -20,7 +20,7 @@ export interface VersionView {
 }
 
 export const readVersion = defineVerb({
-  action: 'practical.read',
+  action: 'version.read',
   input: readVersionInput,
   async run({ actor, input, tx, found, authorize }): Promise<VersionView> {
     const row = found(await selectVersion(tx, actor.schoolId, input.versionId));

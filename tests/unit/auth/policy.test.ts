@@ -36,6 +36,12 @@ const ROWS = {
     teacherIds: ['another'],
     studentId: 'another',
   },
+  'offered to my department': {
+    schoolId: SCHOOL,
+    departmentId: DEPARTMENT,
+    teacherIds: ['another'],
+    offered: true,
+  },
   'about me': { schoolId: SCHOOL, teacherIds: ['another'], studentId: ME },
   'another’s': {
     schoolId: SCHOOL,
@@ -51,7 +57,7 @@ type RowKind = keyof typeof ROWS;
 const EVERY = Object.keys(ROWS) as RowKind[];
 const SECTION: RowKind[] = ['my section’s'];
 const AIDED: RowKind[] = ['a section’s that I aid today'];
-const LED: RowKind[] = ['my department’s'];
+const LED: RowKind[] = ['my department’s', 'offered to my department'];
 const OWN: RowKind[] = ['about me'];
 
 /** Which rows each role may do an action on; a role that is not named may do it on none. */
@@ -77,11 +83,16 @@ const ALLOWED: Record<Action, Partial<Record<Role, RowKind[]>>> = {
   'practical.read': { teacher: SECTION, head: LED },
   'practical.change': { teacher: SECTION },
   'practical.copy': { teacher: SECTION },
+  'version.read': { teacher: SECTION, head: LED },
   'sitting.open': { teacher: SECTION },
   'sitting.list': { teacher: EVERY, aide: EVERY },
   'sitting.read': { teacher: SECTION, head: LED },
   'sitting.change': { teacher: SECTION },
   'sitting.publish': { teacher: SECTION },
+  'sitting.move': { teacher: SECTION },
+  'accommodation.list': { teacher: SECTION, head: LED },
+  'accommodation.change': { teacher: SECTION },
+  'accommodation.reason': { teacher: SECTION, head: LED },
   'round.read': { teacher: SECTION, aide: AIDED },
   'round.record': { teacher: SECTION, aide: AIDED },
   'round.finish': { teacher: SECTION },
@@ -93,6 +104,7 @@ const ALLOWED: Record<Action, Partial<Record<Role, RowKind[]>>> = {
   'own.record': { student: OWN },
   'result.read': { student: OWN },
   'rubric.compare': { head: LED },
+  'rubric.approve': { head: LED },
 };
 
 const CASES = ACTIONS.flatMap((action) =>
@@ -148,7 +160,10 @@ it('asks for the role that is acted in, not for the others that are held', () =>
 
 it('lets a teacher copy, but neither read nor change, what is the department’s', () => {
   const teacher = actorAs('teacher', { departmentId: DEPARTMENT });
-  expect(may(teacher, 'practical.copy', ROWS['my department’s'])).toBe(true);
+  expect(may(teacher, 'practical.copy', ROWS['offered to my department'])).toBe(true);
+  expect(may(teacher, 'version.read', ROWS['offered to my department'])).toBe(true);
+  expect(may(teacher, 'practical.copy', ROWS['my department’s'])).toBe(false);
+  expect(may(teacher, 'practical.read', ROWS['offered to my department'])).toBe(false);
   expect(may(teacher, 'practical.read', ROWS['my department’s'])).toBe(false);
   expect(may(teacher, 'practical.change', ROWS['my department’s'])).toBe(false);
   expect(may(teacher, 'practical.copy', ROWS['another’s'])).toBe(false);
