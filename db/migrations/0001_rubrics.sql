@@ -64,6 +64,7 @@ UPDATE "practicals" SET "source_kind" = 'copy' WHERE "copied_from_version_id" IS
 UPDATE "practicals" p SET "offered_at" = now() WHERE "archived_at" IS NULL
   AND EXISTS (SELECT FROM "rubric_versions" v WHERE v."school_id" = p."school_id" AND v."practical_id" = p."id");--> statement-breakpoint
 ALTER TABLE "rubric_versions" ADD COLUMN "difference_reason" text;--> statement-breakpoint
+ALTER TABLE "practical_drafts" ADD COLUMN "replaced" jsonb;--> statement-breakpoint
 ALTER TABLE "results" ADD COLUMN "held_points" integer DEFAULT 0 NOT NULL;--> statement-breakpoint
 ALTER TABLE "results" ADD COLUMN "held_version_id" uuid;--> statement-breakpoint
 ALTER TABLE "results" ADD COLUMN "accommodation_id" uuid;--> statement-breakpoint

@@ -57,6 +57,8 @@ export const practicalDrafts = pgTable(
     revision: integer('revision').notNull(),
     savedBy: uuid('saved_by').notNull(),
     savedAt: moment('saved_at').notNull().defaultNow(),
+    /** The draft that a newer version of the original was taken over, kept so that it can be put back. */
+    replaced: jsonb('replaced'),
   },
   (t) => [
     primaryKey({ columns: [t.schoolId, t.practicalId] }),
