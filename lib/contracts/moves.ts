@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import type { Phrase } from '@/lib/practicals/compare-types';
 import type { Points } from '@/lib/scoring';
 
 const sittingId = z.uuid('This is not a sitting.');
@@ -17,6 +18,57 @@ export const moveSittingInput = z.object({
 });
 
 export const undoMoveInput = z.object({ sittingId, moveId: z.uuid('This is not a move.') });
+
+/** Another version that the sitting could stand under. */
+export interface VersionChoice {
+  versionId: string;
+  number: number;
+  publishedAt: string;
+  /** What it changes of the sitting's version, a sentence each; empty where no score could ever differ. */
+  changes: Phrase[];
+}
+
+/** A move that was made, standing or taken back. */
+export interface MoveMade {
+  moveId: string;
+  number: number;
+  movedAt: string;
+  movedBy: string;
+  /** Numbers of the versions. */
+  from: number;
+  to: number;
+  holdHarmless: boolean;
+  undone: { at: string; by: string } | null;
+  /** The latest that stands, as long as nothing was published after it; by every teacher of the section. */
+  canUndo: boolean;
+}
+
+/** Where a sitting stands, where it could go, and how it came there. */
+export interface MoveChoices {
+  sittingId: string;
+  title: string;
+  sectionId: string;
+  sectionName: string;
+  period: string;
+  unit: 'in' | 'mm';
+  timeZone: string;
+  published: boolean;
+  version: { versionId: string; number: number; publishedAt: string };
+  /** The practical's other versions, the latest first. */
+  others: VersionChoice[];
+  /** The latest first. */
+  moves: MoveMade[];
+}
+
+/** What a move, or taking one back, did. */
+export interface MovedView {
+  sittingId: string;
+  sectionId: string;
+  /** The number of the version that the sitting stands under now. */
+  versionNumber: number;
+  /** Attempts that were priced anew. */
+  attempts: number;
+}
 
 /** One attempt before and after a move; points are of the total of that version. */
 export interface MovedAttempt {

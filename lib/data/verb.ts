@@ -22,11 +22,18 @@ export interface LogEntry {
   details?: Record<string, unknown>;
 }
 
+/** How whoever runs a long verb hears how far it has come, and calls it off. */
+export interface Following {
+  onProgress?(done: number, of: number): void;
+  signal?: AbortSignal;
+}
+
 /** What a verb's body works with, inside its transaction. */
 export interface Context<Input> {
   actor: Actor;
   input: Input;
   tx: Transaction;
+  following: Following;
   /** Ends the verb with "not found" unless the policy allows the action on this row. */
   authorize(subject: Subject): void;
   /** The same for a row that may be absent; returns the row. */
@@ -61,7 +68,11 @@ const NOT_FOUND = 'There is nothing here, or it is not yours to see.';
  * checks the policy on what it loaded, works, writes and logs. Any refusal rolls back.
  */
 export function defineVerb<Schema extends z.ZodType, View>(verb: Verb<Schema, View>) {
-  return async (actor: Actor | null, raw: z.input<Schema> | unknown): Promise<Result<View>> => {
+  return async (
+    actor: Actor | null,
+    raw: z.input<Schema> | unknown,
+    following: Following = {},
+  ): Promise<Result<View>> => {
     if (!actor) return problem('unauthenticated', 'Sign in to go on.');
     if (actor.mustChangePassword || !mayEver(actor.role, verb.action)) {
       return problem('forbidden', 'Your role does not include this.');
@@ -70,7 +81,7 @@ export function defineVerb<Schema extends z.ZodType, View>(verb: Verb<Schema, Vi
     if (!parsed.success) return invalid(fieldErrors(parsed.error));
     try {
       const value = await inSchool(actor.schoolId, (tx) =>
-        verb.run(context(verb.action, actor, parsed.data, tx)),
+        verb.run({ ...context(verb.action, actor, parsed.data, tx), following }),
       );
       return { ok: true, value };
     } catch (error) {
@@ -80,7 +91,12 @@ export function defineVerb<Schema extends z.ZodType, View>(verb: Verb<Schema, Vi
   };
 }
 
-function context<Input>(action: Action, actor: Actor, input: Input, tx: Transaction): Context<Input> {
+function context<Input>(
+  action: Action,
+  actor: Actor,
+  input: Input,
+  tx: Transaction,
+): Omit<Context<Input>, 'following'> {
   const refuse = (
     code: ProblemCode,
     message: string,

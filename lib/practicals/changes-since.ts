@@ -3,8 +3,11 @@ import type { Compared, Phrase } from './compare-types';
 
 type Written = Omit<Compared, 'label'>;
 
-/** What a draft changes of the version before it, a sentence each. */
-export function changesSince(before: Written & { number: number }, now: Written): Phrase[] {
+/** What a draft, or the version numbered, changes of another version, a sentence each. */
+export function changesSince(
+  before: Written & { number: number },
+  now: Written & { number?: number },
+): Phrase[] {
   return [...taskChanges(before, now), ...priceChanges(before, now)];
 }
 
@@ -33,11 +36,11 @@ function names({ task }: Pick<Written, 'task'>): string {
 }
 
 /** Prices can be set against each other only while the pieces are the same. */
-function priceChanges(before: Written & { number: number }, now: Written): Phrase[] {
+function priceChanges(before: Written & { number: number }, now: Written & { number?: number }): Phrase[] {
   if (cutListSignature(before.task) !== cutListSignature(now.task)) return [];
   const comparison = compareRubrics([
     { ...before, label: `version ${before.number}` },
-    { ...now, label: `version ${before.number + 1}` },
+    { ...now, label: `version ${now.number ?? before.number + 1}` },
   ]);
   return comparison.same ? [] : comparison.sentences;
 }
