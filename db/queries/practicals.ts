@@ -47,7 +47,7 @@ export async function updatePractical(
   tx: Transaction,
   schoolId: string,
   practicalId: string,
-  values: { title?: string; archivedAt?: Date | null },
+  values: Partial<Pick<PracticalRow, 'title' | 'archivedAt' | 'offeredAt' | 'copiedFromVersionId'>>,
 ): Promise<void> {
   await tx
     .update(practicals)
@@ -61,6 +61,7 @@ export async function selectDraft(tx: Transaction, schoolId: string, practicalId
       content: practicalDrafts.content,
       revision: practicalDrafts.revision,
       savedAt: practicalDrafts.savedAt,
+      replaced: practicalDrafts.replaced,
     })
     .from(practicalDrafts)
     .where(and(eq(practicalDrafts.schoolId, schoolId), eq(practicalDrafts.practicalId, practicalId)));
@@ -73,7 +74,7 @@ export async function updateDraft(
   schoolId: string,
   practicalId: string,
   revision: number,
-  kept: { content: unknown; savedBy: string },
+  kept: { content: unknown; savedBy: string; replaced?: unknown },
 ) {
   const [row] = await tx
     .update(practicalDrafts)

@@ -1,6 +1,15 @@
-import { and, asc, desc, eq, inArray, isNull, sql } from 'drizzle-orm';
+import { and, asc, desc, eq, inArray, isNotNull, isNull, or, sql } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
-import { people, practicals, rubricVersions, schools, sections, sittings, terms } from '@/db/schema';
+import {
+  people,
+  practicals,
+  rubricApprovals,
+  rubricVersions,
+  schools,
+  sections,
+  sittings,
+  terms,
+} from '@/db/schema';
 import { schoolToday, teacherIds } from './sections';
 
 /** A sitting with its section, its version and what permission depends on. */
@@ -54,12 +63,21 @@ export async function lockSitting(tx: Transaction, schoolId: string, sittingId: 
     .for('update');
 }
 
-/** Published versions of a department's practicals in use: a person's own first, the latest of each first. */
+const isApproved = sql<boolean>`exists (select from ${rubricApprovals} approval
+  where approval.school_id = ${rubricVersions.schoolId} and approval.rubric_version_id = ${rubricVersions.id}
+    and approval.ended_at is null)`;
+
+/**
+ * Published versions that a person may give in a department: of own practicals and of those on offer, and the one that
+ * stands approved as the department's, offered or not. A person's own first, the latest of each first.
+ */
 export function selectVersionsToGive(
   tx: Transaction,
   schoolId: string,
   { departmentId, personId }: { departmentId: string; personId: string },
 ) {
+  const offered = and(isNull(practicals.archivedAt), isNotNull(practicals.offeredAt));
+  const own = and(isNull(practicals.archivedAt), eq(practicals.ownerId, personId));
   return tx
     .select({
       versionId: rubricVersions.id,
@@ -67,6 +85,7 @@ export function selectVersionsToGive(
       title: practicals.title,
       number: rubricVersions.number,
       publishedAt: rubricVersions.publishedAt,
+      approved: isApproved,
       own: sql<boolean>`${practicals.ownerId} = ${personId}`,
       ownerName: sql<string>`btrim(${people.givenName} || ' ' || ${people.familyName})`,
     })
@@ -80,7 +99,7 @@ export function selectVersionsToGive(
       and(
         eq(rubricVersions.schoolId, schoolId),
         eq(practicals.departmentId, departmentId),
-        isNull(practicals.archivedAt),
+        or(own, offered, isApproved),
       ),
     )
     .orderBy(

@@ -33,8 +33,32 @@ export const saveDraftInput = z.object({
   content: practicalDraftSchema,
 });
 
-export const publishVersionInput = z.object({ practicalId, revision: z.int().min(1) });
+export const LONGEST_REASON = 400;
+
+/** `reason`: why the version differs from the department’s, where it does. */
+export const publishVersionInput = z.object({
+  practicalId,
+  revision: z.int().min(1),
+  reason: z
+    .string()
+    .trim()
+    .max(LONGEST_REASON, `Use at most ${LONGEST_REASON} characters for the reason.`)
+    .transform((text) => text || null)
+    .nullable()
+    .default(null),
+});
 
 export const readVersionInput = z.object({ versionId: z.uuid('This is not a version.') });
 
 export const archivePracticalInput = z.object({ practicalId, archived: z.boolean() });
+
+export const offerPracticalInput = z.object({ practicalId, offered: z.boolean() });
+
+/** `revision`: the draft that is to give way, as it was looked at; `versionId`: a newer version of the original. */
+export const takeNewerVersionInput = z.object({
+  practicalId,
+  revision: z.int().min(1),
+  versionId: z.uuid('This is not a version.'),
+});
+
+export const putBackDraftInput = z.object({ practicalId, revision: z.int().min(1) });

@@ -1,5 +1,6 @@
 import type { Actor } from '@/lib/auth/actor';
 import { createPractical } from '@/lib/data/practicals/create-practical';
+import { offerPractical } from '@/lib/data/practicals/offer-practical';
 import { publishVersion } from '@/lib/data/practicals/publish-version';
 import { readPractical } from '@/lib/data/practicals/read-practical';
 import { saveDraft } from '@/lib/data/practicals/save-draft';
@@ -37,6 +38,16 @@ export async function publishDraft(
 ): Promise<{ versionId: string; number: number }> {
   const { draft } = valueFrom(await readPractical(actor, { practicalId }));
   return valueFrom(await publishVersion(actor, { practicalId, revision: draft.revision }));
+}
+
+/** Publishes the draft as it stands and offers the practical to the department. */
+export async function publishAndOffer(
+  actor: Actor,
+  practicalId: string,
+): Promise<{ versionId: string; number: number }> {
+  const version = await publishDraft(actor, practicalId);
+  valueFrom(await offerPractical(actor, { practicalId, offered: true }));
+  return version;
 }
 
 /** How much of a school's work on practicals is stored; the same before and after a refusal. */

@@ -4,7 +4,7 @@ import { archivePracticalInput } from '@/lib/contracts/practicals';
 import { defineVerb } from '../verb';
 import { practicalSubject } from './practical-subject';
 
-/** Puts a practical away, or brings it back; its versions and sittings stay as they are. */
+/** Puts a practical away, or brings it back; its versions and sittings stay as they are, an offer of it ends. */
 export const archivePractical = defineVerb({
   action: 'practical.change',
   input: archivePracticalInput,
@@ -13,7 +13,8 @@ export const archivePractical = defineVerb({
     const row = found(await lockPractical(tx, actor.schoolId, practicalId));
     authorize(practicalSubject(row));
     if (archived === (row.archivedAt !== null)) return { archived };
-    await updatePractical(tx, actor.schoolId, practicalId, { archivedAt: archived ? new Date() : null });
+    const values = archived ? { archivedAt: new Date(), offeredAt: null } : { archivedAt: null };
+    await updatePractical(tx, actor.schoolId, practicalId, values);
     const details = archived ? { putAway: row.title } : { broughtBack: row.title };
     await log({ subjectKind: 'practical', subjectId: practicalId, details });
     return { archived };

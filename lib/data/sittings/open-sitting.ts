@@ -19,7 +19,9 @@ export const openSitting = defineVerb({
     const versions = await selectVersionsToGive(tx, schoolId, { departmentId, personId });
     const version =
       versions.find((row) => row.versionId === versionId) ??
-      refuseFields({ versionId: ['Choose a published practical of this department.'] });
+      refuseFields({
+        versionId: ['Choose one of your practicals, one that a colleague offers, or the department’s.'],
+      });
     const given = await selectGivenPracticals(tx, schoolId, [sectionId]);
     if (given.some(({ practicalId }) => practicalId === version.practicalId)) {
       refuseFields({ versionId: [`This section has “${version.title}” already.`] });

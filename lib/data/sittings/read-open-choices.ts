@@ -14,6 +14,8 @@ export interface VersionChoice {
   title: string;
   number: number;
   latest: boolean;
+  /** It stands approved as the department's. */
+  approved: boolean;
   /** Whose practical it is, when it is a colleague's. */
   ownerName: string | null;
 }
@@ -49,10 +51,10 @@ type VersionRow = Awaited<ReturnType<typeof selectVersionsToGive>>[number];
 
 function latestFirst(rows: readonly VersionRow[]): VersionChoice[] {
   const seen = new Set<string>();
-  const choices = rows.map(({ versionId, practicalId, title, number, own, ownerName }) => {
+  const choices = rows.map(({ versionId, practicalId, title, number, approved, own, ownerName }) => {
     const latest = !seen.has(practicalId);
     seen.add(practicalId);
-    return { versionId, title, number, latest, ownerName: own ? null : ownerName };
+    return { versionId, title, number, latest, approved, ownerName: own ? null : ownerName };
   });
   return [...choices.filter(({ latest }) => latest), ...choices.filter(({ latest }) => !latest)];
 }

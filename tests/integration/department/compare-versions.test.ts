@@ -3,7 +3,13 @@ import { compareVersions } from '@/lib/data/department/compare-versions';
 import { listRubrics } from '@/lib/data/department/list-rubrics';
 import { copyPractical } from '@/lib/data/practicals/copy-practical';
 import { ownerSql } from '@/tests/support/database';
-import { changeDraft, makeStarter, publishDraft, valueFrom } from '@/tests/support/practicals';
+import {
+  changeDraft,
+  makeStarter,
+  publishAndOffer,
+  publishDraft,
+  valueFrom,
+} from '@/tests/support/practicals';
 import { makeActor, makeSchool, makeSection } from '@/tests/support/school';
 
 const school = await makeSchool();
@@ -12,7 +18,7 @@ const rut = await makeActor(school, 'teacher', { givenName: 'Rut', familyName: '
 const dayo = await makeActor(school, 'teacher', { givenName: 'Dayo', familyName: 'Okonjo' });
 
 const caddy = await makeStarter(rut, 'desk-caddy');
-const first = await publishDraft(rut, caddy);
+const first = await publishAndOffer(rut, caddy);
 await changeDraft(rut, caddy, (draft) => {
   draft.redo.capPercent = '100';
 });

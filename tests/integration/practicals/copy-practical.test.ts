@@ -7,6 +7,7 @@ import {
   changeDraft,
   countPracticals,
   makeStarter,
+  publishAndOffer,
   publishDraft,
   valueFrom,
 } from '@/tests/support/practicals';
@@ -29,9 +30,9 @@ describe('copying a practical', () => {
     expect(versions).toEqual([]);
   });
 
-  it('of the department’s copies what was published, and remembers the version it came from', async () => {
+  it('of what a colleague offers copies what was published, and remembers the version it came from', async () => {
     const practicalId = await makeStarter(teacher, 'desk-caddy');
-    const { versionId } = await publishDraft(teacher, practicalId);
+    const { versionId } = await publishAndOffer(teacher, practicalId);
     await changeDraft(teacher, practicalId, (draft) => {
       draft.all.worth = '1';
     });
@@ -39,8 +40,14 @@ describe('copying a practical', () => {
     const { draft } = valueFrom(await readPractical(colleague, copy));
     expect(draft.content).toEqual(starterDraft('desk-caddy'));
     const [row] = await ownerSql()`
-      select owner_id, copied_from_version_id from practicals where id = ${copy.practicalId}`;
-    expect(row).toEqual({ owner_id: colleague.personId, copied_from_version_id: versionId });
+      select owner_id, copied_from_version_id, source_kind, offered_at from practicals
+      where id = ${copy.practicalId}`;
+    expect(row).toEqual({
+      owner_id: colleague.personId,
+      copied_from_version_id: versionId,
+      source_kind: 'adopted',
+      offered_at: null,
+    });
     expect(await logOf(school)).toContainEqual(
       expect.objectContaining({
         action: 'practical.copy',
@@ -49,15 +56,27 @@ describe('copying a practical', () => {
     );
   });
 
-  it('never copies another’s draft, nor a version of another practical, department or school', async () => {
+  it('of one’s own version remembers it as a copy, offered or not', async () => {
     const practicalId = await makeStarter(teacher, 'gauge-kit');
     const { versionId } = await publishDraft(teacher, practicalId);
+    const copy = valueFrom(await copyPractical(teacher, { practicalId, versionId }));
+    const [row] = await ownerSql()`
+      select copied_from_version_id, source_kind from practicals where id = ${copy.practicalId}`;
+    expect(row).toEqual({ copied_from_version_id: versionId, source_kind: 'copy' });
+  });
+
+  it('never copies what is not on offer, another’s draft, nor a version of another practical, department or school', async () => {
+    const practicalId = await makeStarter(teacher, 'gauge-kit');
+    const { versionId } = await publishAndOffer(teacher, practicalId);
+    const unoffered = await makeStarter(teacher, 'wall-rack');
+    const { versionId: notShown } = await publishDraft(teacher, unoffered);
     const own = await makeStarter(colleague);
     const apart = { ...colleague, departmentId: crypto.randomUUID() };
     const stranger = await makeActor(await makeSchool('Ardmore Academy'), 'teacher');
     const before = await countPracticals(school);
     for (const [actor, input] of [
       [colleague, { practicalId }],
+      [colleague, { practicalId: unoffered, versionId: notShown }],
       [colleague, { practicalId: own, versionId }],
       [apart, { practicalId, versionId }],
       [stranger, { practicalId, versionId }],

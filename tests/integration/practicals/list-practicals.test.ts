@@ -1,10 +1,10 @@
 import { describe, expect, it } from 'vitest';
 import { listPracticals } from '@/lib/data/practicals/list-practicals';
-import { makeStarter, publishDraft, valueFrom } from '@/tests/support/practicals';
+import { makeStarter, publishAndOffer, publishDraft, valueFrom } from '@/tests/support/practicals';
 import { makeActor, makeSchool } from '@/tests/support/school';
 
 describe('the list of practicals', () => {
-  it('shows one’s own with what is published of them, and what colleagues of the department have published', async () => {
+  it('shows one’s own with what is published of them, and what colleagues of the department offer', async () => {
     const place = await makeSchool('Cedar Fork High School');
     const [rut, dayo] = [
       await makeActor(place, 'teacher', { givenName: 'Rut', familyName: 'Lindqvist' }),
@@ -12,7 +12,8 @@ describe('the list of practicals', () => {
     ];
     const unpublished = await makeStarter(rut, 'wall-rack');
     const published = await makeStarter(rut, 'desk-caddy');
-    const version = await publishDraft(rut, published);
+    const version = await publishAndOffer(rut, published);
+    await publishDraft(rut, await makeStarter(rut, 'gauge-kit'));
     await makeStarter(dayo, 'bench-hook');
     expect(valueFrom(await listPracticals(rut, {}))).toMatchObject({
       own: expect.arrayContaining([

@@ -100,7 +100,10 @@ function VersionChoices({ section, field }: VersionChoicesProps) {
   );
 }
 
-function sayVersion({ title, number, latest, ownerName }: VersionChoice): string {
-  const rubric = latest ? `rubric ${number}` : `rubric ${number}, an older one`;
-  return `${title}, ${rubric}${ownerName ? `, by ${ownerName}` : ''}`;
+function sayVersion({ title, number, latest, approved, ownerName }: VersionChoice): string {
+  const parts = [title, `rubric ${number}`];
+  if (!latest) parts.push('an older one');
+  if (ownerName) parts.push(`by ${ownerName}`);
+  if (approved) parts.push('the department’s');
+  return parts.join(', ');
 }
