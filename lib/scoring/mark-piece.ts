@@ -18,7 +18,7 @@ function capLoss(line: Line, uncapped: Points, gross: boolean): Points {
 }
 
 /** Is (lose, gross, uncapped) lexicographically less than what the mark holds, false before true? */
-function isCheaper(lose: Points, gross: boolean, uncapped: Points, mark: PieceMark): boolean {
+export function isCheaper(lose: Points, gross: boolean, uncapped: Points, mark: PieceMark): boolean {
   if (lose !== mark.lose) return lose < mark.lose;
   if (gross !== mark.gross) return mark.gross;
   return uncapped < mark.uncapped;
