@@ -1,6 +1,18 @@
 import { and, asc, desc, eq, isNotNull, isNull, ne, sql } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
-import { people, practicalDrafts, practicals, rubricVersions, sittings } from '@/db/schema';
+import { people, practicalDrafts, practicals, rubricApprovals, rubricVersions, sittings } from '@/db/schema';
+
+const approvedNumber = sql<number | null>`(select version.number from ${rubricApprovals} approval
+  join ${rubricVersions} version
+    on version.school_id = approval.school_id and version.id = approval.rubric_version_id
+  where approval.school_id = ${practicals.schoolId} and approval.practical_id = ${practicals.id}
+    and approval.ended_at is null)`;
+
+const approvedVersionId = sql<
+  string | null
+>`(select approval.rubric_version_id from ${rubricApprovals} approval
+  where approval.school_id = ${practicals.schoolId} and approval.practical_id = ${practicals.id}
+    and approval.ended_at is null)`;
 
 const ownerName = sql<string>`${people.givenName} || ' ' || ${people.familyName}`;
 
@@ -38,6 +50,10 @@ export function selectOwnPracticals(
       versionId: latest.versionId,
       number: latest.number,
       publishedAt: latest.publishedAt,
+      offeredAt: practicals.offeredAt,
+      copiedFromVersionId: practicals.copiedFromVersionId,
+      sourceKind: practicals.sourceKind,
+      approvedNumber,
       sittings: sql<number>`(select count(*)::int from ${sittings} s
         where s.school_id = ${practicals.schoolId} and s.practical_id = ${practicals.id})`,
     })
@@ -57,13 +73,8 @@ export function selectOwnPracticals(
     .orderBy(desc(practicalDrafts.savedAt));
 }
 
-/** What others of the department have published last and offer, by title. */
-export function selectOthersPublished(
-  tx: Transaction,
-  schoolId: string,
-  departmentId: string,
-  personId: string,
-) {
+/** What others of the department offer, each as it was published last, by title. */
+export function selectOffered(tx: Transaction, schoolId: string, departmentId: string, personId: string) {
   const latest = latestVersions(tx, schoolId);
   return tx
     .select({
@@ -74,6 +85,14 @@ export function selectOthersPublished(
       number: latest.number,
       task: latest.task,
       publishedAt: latest.publishedAt,
+      approvedNumber,
+      approvedVersionId,
+      /** A copy of any of its versions that the person has already and has not put away. */
+      taken: sql<boolean>`exists (select from ${practicals} mine
+        join ${rubricVersions} version
+          on version.school_id = mine.school_id and version.id = mine.copied_from_version_id
+        where mine.school_id = ${practicals.schoolId} and mine.owner_id = ${personId}
+          and mine.archived_at is null and version.practical_id = ${practicals.id})`,
     })
     .from(practicals)
     .innerJoin(latest, eq(latest.practicalId, practicals.id))

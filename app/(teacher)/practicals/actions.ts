@@ -8,6 +8,7 @@ import { createPracticalInput } from '@/lib/contracts/practicals';
 import { archivePractical } from '@/lib/data/practicals/archive-practical';
 import { copyPractical } from '@/lib/data/practicals/copy-practical';
 import { createPractical } from '@/lib/data/practicals/create-practical';
+import { offerPractical } from '@/lib/data/practicals/offer-practical';
 import type { Result } from '@/lib/result';
 import { type FormReply, replyTo } from '@/lib/transport/form';
 
@@ -48,5 +49,13 @@ export async function archivePracticalAction(_: PressReply, data: FormData): Pro
   const result = await archivePractical(await currentActor(), input);
   if (!result.ok) return { message: result.problem.message };
   revalidatePath('/practicals');
+  return undefined;
+}
+
+export async function offerPracticalAction(_: PressReply, data: FormData): Promise<PressReply> {
+  const input = { practicalId: text(data, 'practicalId'), offered: text(data, 'offered') === 'yes' };
+  const result = await offerPractical(await currentActor(), input);
+  if (!result.ok) return { message: result.problem.message };
+  revalidatePath('/practicals', 'layout');
   return undefined;
 }

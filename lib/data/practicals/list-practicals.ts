@@ -1,9 +1,10 @@
 import 'server-only';
-import { selectOthersPublished, selectOwnPracticals } from '@/db/queries/practical-lists';
+import { selectOffered, selectOwnPracticals } from '@/db/queries/practical-lists';
 import { listPracticalsInput } from '@/lib/contracts/practicals';
 import type { PracticalDraft } from '@/lib/practicals/draft';
 import { countTask, taskSchema } from '@/lib/practicals/task';
 import { defineVerb } from '../verb';
+import { readSource, type SourceView } from './practical-source';
 import { storedDraft } from './stored';
 
 export interface PracticalListItem {
@@ -15,7 +16,14 @@ export interface PracticalListItem {
   savedAt: string;
   version: { versionId: string; number: number; publishedAt: string } | null;
   sittings: number;
+  offered: boolean;
+  /** The number of the version that the department approved. */
+  approvedNumber: number | null;
+  source: ListedSource | null;
 }
+
+/** What a practical was taken from, and what its original has changed since. */
+export type ListedSource = Pick<SourceView, 'kind' | 'ownerName' | 'title' | 'number' | 'isOpen' | 'newest'>;
 
 export interface DepartmentPractical {
   practicalId: string;
@@ -26,6 +34,10 @@ export interface DepartmentPractical {
   ownerName: string;
   lines: number;
   pieces: number;
+  /** The version that the department approved, the one on offer or an earlier one. */
+  approved: { versionId: string; number: number } | null;
+  /** The person has a copy of it already. */
+  taken: boolean;
 }
 
 export interface PracticalList {
@@ -36,11 +48,14 @@ export interface PracticalList {
 export const listPracticals = defineVerb({
   action: 'practical.list',
   input: listPracticalsInput,
-  async run({ actor, input, tx, authorize }): Promise<PracticalList> {
+  async run(context): Promise<PracticalList> {
+    const { actor, input, tx, authorize } = context;
     const { schoolId, personId, departmentId } = actor;
     authorize({ schoolId });
     const own = await selectOwnPracticals(tx, schoolId, personId, input);
-    const others = departmentId ? await selectOthersPublished(tx, schoolId, departmentId, personId) : [];
+    const sources = new Map<string, ListedSource | null>();
+    for (const row of own) sources.set(row.practicalId, await listSource(context, row));
+    const others = departmentId ? await selectOffered(tx, schoolId, departmentId, personId) : [];
     return {
       own: own.map((row) => ({
         practicalId: row.practicalId,
@@ -53,6 +68,9 @@ export const listPracticals = defineVerb({
             ? { versionId: row.versionId, number: row.number, publishedAt: row.publishedAt.toISOString() }
             : null,
         sittings: row.sittings,
+        offered: row.offeredAt !== null,
+        approvedNumber: row.approvedNumber,
+        source: sources.get(row.practicalId) ?? null,
       })),
       department: others.map((row) => {
         const task = taskSchema.parse(row.task);
@@ -65,11 +83,26 @@ export const listPracticals = defineVerb({
           ownerName: row.ownerName,
           lines: task.cutList.lines.length,
           pieces: countTask(task).pieces,
+          approved:
+            row.approvedVersionId && row.approvedNumber
+              ? { versionId: row.approvedVersionId, number: row.approvedNumber }
+              : null,
+          taken: row.taken,
         };
       }),
     };
   },
 });
+
+async function listSource(
+  context: Parameters<typeof readSource>[0],
+  row: Parameters<typeof readSource>[1],
+): Promise<ListedSource | null> {
+  const source = await readSource(context, row);
+  if (!source) return null;
+  const { kind, ownerName, title, number, isOpen, newest } = source;
+  return { kind, ownerName, title, number, isOpen, newest };
+}
 
 /** Pieces as far as their numbers can be read yet. */
 function countDraft(draft: PracticalDraft): { lines: number; pieces: number } {

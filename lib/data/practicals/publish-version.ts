@@ -1,10 +1,12 @@
 import 'server-only';
 import { insertVersion, lockPractical, selectDraft, selectLatestVersion } from '@/db/queries/practicals';
 import { publishVersionInput } from '@/lib/contracts/practicals';
+import { departmentDifferences } from '@/lib/practicals/department-differences';
 import { parseDraft } from '@/lib/practicals/parse-draft';
 import { sameInEffect } from '@/lib/practicals/same-in-effect';
 import { ENGINE_VERSION } from '@/lib/scoring/engine-version';
 import { defineVerb } from '../verb';
+import { departmentRubricOf } from './department-rubric';
 import { practicalSubject } from './practical-subject';
 import { STALE_DRAFT } from './save-draft';
 import { storedDraft, storedVersion } from './stored';
@@ -31,6 +33,10 @@ export const publishVersion = defineVerb({
       );
     }
     const number = (latest?.number ?? 0) + 1;
+    const department = await departmentRubricOf(tx, row, [task]);
+    const differs =
+      department !== null && !departmentDifferences(department, { ...parsed, label: 'own' }).same;
+    const differenceReason = differs ? input.reason : null;
     const versionId = await insertVersion(tx, {
       schoolId,
       practicalId: row.id,
@@ -39,12 +45,13 @@ export const publishVersion = defineVerb({
       form,
       rubric,
       engineVersion: ENGINE_VERSION,
+      differenceReason,
       publishedBy: personId,
     });
     await log({
       subjectKind: 'rubric version',
       subjectId: versionId,
-      details: { published: task.title, version: number },
+      details: { published: task.title, version: number, ...(differenceReason && { differenceReason }) },
     });
     return { versionId, number };
   },

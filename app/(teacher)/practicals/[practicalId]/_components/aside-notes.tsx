@@ -1,12 +1,27 @@
 'use client';
 
+import Link from 'next/link';
 import { LocalTime } from '@/app/(teacher)/practicals/_components/local-time';
+import { PressForm } from '@/app/(teacher)/practicals/_components/press-form';
+import { offerPracticalAction } from '@/app/(teacher)/practicals/actions';
 import { Heading } from '@/components/ui/titles';
 import type { PracticalView } from '@/lib/data/practicals/read-practical';
+import { DepartmentNote } from './department-note';
+import { SourceNote } from './source-note';
 
-/** The versions so far and what hangs on each. */
+/** The versions so far and what hangs on each, where the practical comes from, and what the department has of it. */
 export function AsideNotes({ view }: { view: PracticalView }) {
-  const { versions } = view;
+  return (
+    <div className="grid content-start gap-8">
+      <Versions view={view} />
+      {view.source ? <SourceNote view={view} source={view.source} /> : null}
+      {view.department ? <DepartmentNote view={view} department={view.department} /> : null}
+    </div>
+  );
+}
+
+function Versions({ view }: { view: PracticalView }) {
+  const { practicalId, versions } = view;
   const held = versions.reduce((sum, { sittings }) => sum + sittings, 0);
   if (versions.length === 0) {
     return (
@@ -23,7 +38,10 @@ export function AsideNotes({ view }: { view: PracticalView }) {
         {versions.map(({ versionId, number, publishedAt, sittings }) => (
           <li key={versionId} className="flex justify-between gap-3 border-b border-hair py-1.5">
             <span>
-              version {number}, <LocalTime at={publishedAt} style="day" />
+              <Link className="link" href={`/practicals/${practicalId}/versions/${number}`}>
+                version {number}
+              </Link>
+              , <LocalTime at={publishedAt} style="day" />
             </span>
             <span className="tnum text-ink-2">{sittingsText(sittings)}</span>
           </li>
@@ -32,7 +50,27 @@ export function AsideNotes({ view }: { view: PracticalView }) {
       {held > 0 ? (
         <p className="mt-2 text-label">A sitting keeps its version, whatever you change here.</p>
       ) : null}
+      <Offer view={view} />
     </section>
+  );
+}
+
+function Offer({ view: { practicalId, title, offered, archived } }: { view: PracticalView }) {
+  if (archived) return null;
+  return (
+    <div className="mt-3 grid justify-items-start gap-2 text-label">
+      <p>
+        {offered
+          ? 'Your department can use what is published here and take copies. Copies stay if you withdraw it.'
+          : 'Only you see this practical. Offered, your department can use its versions and take copies.'}
+      </p>
+      <PressForm
+        action={offerPracticalAction}
+        fields={{ practicalId, offered: offered ? 'no' : 'yes' }}
+        label={offered ? 'withdraw it' : 'offer it to the department'}
+        fullLabel={offered ? `withdraw ${title} from the department` : `offer ${title} to the department`}
+      />
+    </div>
   );
 }
 

@@ -63,6 +63,7 @@ export function PracticalEditor({ view }: { view: PracticalView }) {
               practicalId={view.practicalId}
               parsed={editor.parsed}
               latest={view.latest}
+              department={view.department}
               {...{ desk, onBadFields }}
             />
           </>

@@ -1,13 +1,17 @@
 'use client';
 
 import { useRouter } from 'next/navigation';
-import { useState, useTransition } from 'react';
+import { type RefObject, useRef, useState, useTransition } from 'react';
 import { Button } from '@/components/ui/button';
 import { Dialog } from '@/components/ui/dialog';
 import { LinkButton } from '@/components/ui/link-button';
-import { PhraseText } from '@/components/ui/phrase-text';
+import { PhraseList } from '@/components/ui/phrase-list';
 import { Refusal } from '@/components/ui/refusal';
+import { TextAreaField } from '@/components/ui/text-area-field';
+import { LONGEST_REASON } from '@/lib/contracts/practicals';
+import type { DepartmentRubric } from '@/lib/data/practicals/department-rubric';
 import { changesSince } from '@/lib/practicals/changes-since';
+import { departmentDifferences } from '@/lib/practicals/department-differences';
 import type { ParsedDraft } from '@/lib/practicals/parse-draft';
 import { sameInEffect } from '@/lib/practicals/same-in-effect';
 import { publishVersionAction } from '../actions';
@@ -19,6 +23,7 @@ interface PublishButtonProps {
   desk: DraftDesk;
   parsed: ParsedDraft;
   latest: Editor['latest'];
+  department: DepartmentRubric | null;
   /** Called when fields cannot be used yet: shows them all and goes to the first. */
   onBadFields(): void;
 }
@@ -26,7 +31,8 @@ interface PublishButtonProps {
 type Good = Extract<ParsedDraft, { ok: true }>;
 
 /** Publishing: keeps what is typed, says that a version never changes and what this one changes, then makes it. */
-export function PublishButton({ practicalId, desk, parsed, latest, onBadFields }: PublishButtonProps) {
+export function PublishButton(props: PublishButtonProps) {
+  const { practicalId, desk, parsed, latest, department, onBadFields } = props;
   const [asking, setAsking] = useState<number | null>(null);
   const [published, setPublished] = useState<number | null>(null);
   const number = (latest?.number ?? 0) + 1;
@@ -51,7 +57,7 @@ export function PublishButton({ practicalId, desk, parsed, latest, onBadFields }
       </Button>
       {parsed.ok && asking !== null ? (
         <Ask
-          {...{ practicalId, number, parsed, latest }}
+          {...{ practicalId, number, parsed, latest, department }}
           revision={asking}
           onClose={() => setAsking(null)}
           onPublished={(made) => {
@@ -73,18 +79,23 @@ interface AskProps {
   revision: number;
   parsed: Good;
   latest: Editor['latest'];
+  department: DepartmentRubric | null;
   onClose(): void;
   onPublished(number: number): void;
 }
 
-function Ask({ practicalId, number, revision, parsed, latest, onClose, onPublished }: AskProps) {
+function Ask(props: AskProps) {
+  const { practicalId, number, revision, parsed, latest, department, onClose, onPublished } = props;
+  const reason = useRef<HTMLTextAreaElement>(null);
   const router = useRouter();
   const [pending, start] = useTransition();
   const [refused, setRefused] = useState<string | null>(null);
 
   function publish() {
     start(async () => {
-      const reply = await publishVersionAction(practicalId, revision).catch(() => null);
+      const reply = await publishVersionAction(practicalId, revision, reason.current?.value ?? null).catch(
+        () => null,
+      );
       if (reply?.kind === 'published') {
         router.refresh();
         onPublished(reply.number);
@@ -109,14 +120,15 @@ function Ask({ practicalId, number, revision, parsed, latest, onClose, onPublish
       {latest ? (
         <div className="mb-4">
           <h3 className="font-[640]">What changes since version {latest.number}</h3>
-          <ul className="mt-1 list-disc pl-5">
-            {changesSince(latest, parsed).map((phrase) => (
-              <li key={JSON.stringify(phrase)} className="first-letter:uppercase">
-                <PhraseText phrase={phrase} unit={parsed.task.unit} />
-              </li>
-            ))}
-          </ul>
+          <PhraseList phrases={changesSince(latest, parsed)} unit={parsed.task.unit} className="mt-1" />
         </div>
+      ) : null}
+      {department ? (
+        <DepartmentPart
+          {...{ department, parsed }}
+          given={latest?.differenceReason ?? ''}
+          reasonField={reason}
+        />
       ) : null}
       {refused ? <Refusal title={refused} className="mb-4" /> : null}
       <div className="flex flex-wrap justify-end gap-2">
@@ -126,6 +138,36 @@ function Ask({ practicalId, number, revision, parsed, latest, onClose, onPublish
         </Button>
       </div>
     </Dialog>
+  );
+}
+
+interface DepartmentPartProps {
+  department: DepartmentRubric;
+  parsed: Good;
+  /** What was said of the version before. */
+  given: string;
+  reasonField: RefObject<HTMLTextAreaElement | null>;
+}
+
+/** Where the version differs from the department’s, and room to say why. It asks nothing of a version that does not. */
+function DepartmentPart({ department, parsed, given, reasonField }: DepartmentPartProps) {
+  const { same, sentences } = departmentDifferences(department, { ...parsed, label: 'this version' });
+  if (same) return null;
+  return (
+    <div className="mb-4">
+      <h3 className="font-[640]">Where it differs from the department’s rubric</h3>
+      <PhraseList phrases={sentences} unit={parsed.task.unit} className="mt-1" />
+      <TextAreaField
+        ref={reasonField}
+        label="why"
+        optional
+        hint="Your head reads the differences, and this beside them."
+        rows={2}
+        maxLength={LONGEST_REASON}
+        defaultValue={given}
+        className="mt-3"
+      />
+    </div>
   );
 }
 

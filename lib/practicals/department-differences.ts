@@ -1,0 +1,46 @@
+import { compareRubrics, cutListSignature } from './compare-rubrics';
+import type { Compared, Phrase } from './compare-types';
+
+type Written = Omit<Compared, 'label'>;
+
+export interface DepartmentDifferences {
+  /** No attempt can score differently under one than under the other. */
+  same: boolean;
+  /** Where they differ, a sentence each; empty when they are the same. */
+  sentences: Phrase[];
+}
+
+const OTHER_PIECES = 'It asks for other pieces, so its prices are not set against the department’s.';
+const OTHER_SIZES = 'It asks for other sizes of the same pieces.';
+
+/**
+ * Where a rubric differs from the one that the department approved. A variant, which has the same lines with other
+ * sizes, is compared as if it had the approved sizes. Pure; never fails.
+ *
+ * @example departmentDifferences(approved, { ...approved, label: 'Okonjo' }) // { same: true, sentences: [] }
+ */
+export function departmentDifferences(approved: Written, own: Compared): DepartmentDifferences {
+  const sameTask = cutListSignature(approved.task) === cutListSignature(own.task);
+  const comparable = sameTask ? own : inSizesOf(approved, own);
+  if (!comparable) return { same: false, sentences: [[OTHER_PIECES]] };
+  const { same, sentences } = compareRubrics([{ ...approved, label: 'the department' }, comparable]);
+  const told = same ? [] : sentences;
+  return { same: same && sameTask, sentences: sameTask ? told : [[OTHER_SIZES], ...told] };
+}
+
+/** The same prices on the other's sizes, where both have the same lines. */
+function inSizesOf(approved: Written, own: Compared): Compared | null {
+  const targets = new Map(approved.task.cutList.lines.map((line) => [line.id, line]));
+  const { lines } = own.task.cutList;
+  const alike = lines.every(({ id, quantity }) => targets.get(id)?.quantity === quantity);
+  if (!alike || lines.length !== targets.size) return null;
+  const resize = <L extends { id: string; target: (typeof lines)[number]['target'] }>(line: L): L => {
+    const target = targets.get(line.id)?.target ?? line.target;
+    return { ...line, target: { ...target } };
+  };
+  return {
+    ...own,
+    task: { ...own.task, cutList: { ...own.task.cutList, lines: lines.map(resize) } },
+    rubric: { ...own.rubric, lines: own.rubric.lines.map(resize) },
+  };
+}
