@@ -8,11 +8,23 @@ import { comparedRow, lengthValue, percentValue, pointsValue, textValue } from '
 /** What each piece is worth, costs when missing, and is checked for; lines that say the same share a row. */
 export function pieceRows(lines: readonly MatchedLine[]): ComparedRow[] {
   return [
-    ...gathered('worth of a piece', lines, (line) => pointsValue(line.worth)),
-    ...gathered('a missing piece', lines, (line) => pointsValue(line.missing)),
+    ...worthRows(lines),
     ...checkIds(lines).flatMap((id) =>
       gathered(`check: ${labelOf(lines, id)}`, lines, (line) => checkValue(line.checks, id)),
     ),
+    ...countingRows(lines),
+  ];
+}
+
+export function worthRows(lines: readonly MatchedLine[]): ComparedRow[] {
+  return [
+    ...gathered('worth of a piece', lines, (line) => pointsValue(line.worth)),
+    ...gathered('a missing piece', lines, (line) => pointsValue(line.missing)),
+  ];
+}
+
+export function countingRows(lines: readonly MatchedLine[]): ComparedRow[] {
+  return [
     ...gathered('thickness and width may change places', lines, (line) =>
       textValue(line.swap ? 'yes' : 'no'),
     ),
@@ -61,14 +73,34 @@ function checkValue(checks: readonly Check[], id: string): ComparedValue {
 
 /** How losses become the score. */
 export function wholeRows(compared: readonly Compared[]): ComparedRow[] {
-  const row = (label: string, valueIn: (rubric: Rubric) => ComparedValue) =>
-    comparedRow(
-      label,
-      compared.map(({ rubric }) => valueIn(rubric)),
-    );
   const workIds = [...new Set(compared.flatMap(({ rubric }) => rubric.workChecks.map(({ id }) => id)))];
   return [
-    row('unit', ({ unit }) => textValue(unit === 'in' ? 'inches' : 'millimetres')),
+    rubricRow(compared, 'unit', ({ unit }) => textValue(unit === 'in' ? 'inches' : 'millimetres')),
+    ...totalRows(compared),
+    ...workIds.map((id) => {
+      const found = compared.flatMap(({ rubric }) => rubric.workChecks).find((check) => check.id === id);
+      return rubricRow(compared, `check: ${found?.label ?? id}`, ({ workChecks }) =>
+        checkValue(workChecks, id),
+      );
+    }),
+  ];
+}
+
+function rubricRow(
+  compared: readonly Compared[],
+  label: string,
+  valueIn: (rubric: Rubric) => ComparedValue,
+): ComparedRow {
+  return comparedRow(
+    label,
+    compared.map(({ rubric }) => valueIn(rubric)),
+  );
+}
+
+export function totalRows(compared: readonly Compared[]): ComparedRow[] {
+  const row = (label: string, valueIn: (rubric: Rubric) => ComparedValue) =>
+    rubricRow(compared, label, valueIn);
+  return [
     row('points in all', (rubric) => pointsValue(rubric.start ?? pieceWorth(rubric))),
     row('counted', ({ basis }) =>
       textValue(basis === 'worth' ? 'from the pieces’ worth' : 'off a fixed start'),
@@ -80,10 +112,6 @@ export function wholeRows(compared: readonly Compared[]): ComparedRow[] {
     row('score rounded to', ({ roundTo }) => pointsValue(roundTo)),
     row('floor', ({ floor }) => percentValue(floor)),
     row('bonus counts up to', ({ ceiling }) => percentValue(ceiling)),
-    ...workIds.map((id) => {
-      const found = compared.flatMap(({ rubric }) => rubric.workChecks).find((check) => check.id === id);
-      return row(`check: ${found?.label ?? id}`, ({ workChecks }) => checkValue(workChecks, id));
-    }),
   ];
 }
 
@@ -91,16 +119,32 @@ function pieceWorth(rubric: Rubric): number {
   return rubric.lines.reduce((sum, { worth, quantity }) => sum + worth * quantity, 0);
 }
 
+type Policies = Compared['form']['policies'];
+
+function policyRow(
+  compared: readonly Compared[],
+  label: string,
+  valueIn: (policies: Policies) => ComparedValue,
+): ComparedRow {
+  return comparedRow(
+    label,
+    compared.map(({ form }) => valueIn(form.policies)),
+  );
+}
+
 /** What lateness costs, how a redo counts, and what a prediction can win. */
 export function policyRows(compared: readonly Compared[]): ComparedRow[] {
-  const row = (label: string, valueIn: (policies: Compared['form']['policies']) => ComparedValue) =>
-    comparedRow(
-      label,
-      compared.map(({ form }) => valueIn(form.policies)),
-    );
   return [
-    row('each day late', ({ late }) => percentValue(late?.perDay ?? 0)),
-    row('lateness costs at most', ({ late }) => percentValue(late?.max ?? 0)),
+    policyRow(compared, 'each day late', ({ late }) => percentValue(late?.perDay ?? 0)),
+    policyRow(compared, 'lateness costs at most', ({ late }) => percentValue(late?.max ?? 0)),
+    ...redoAndPredictionRows(compared),
+  ];
+}
+
+export function redoAndPredictionRows(compared: readonly Compared[]): ComparedRow[] {
+  const row = (label: string, valueIn: (policies: Policies) => ComparedValue) =>
+    policyRow(compared, label, valueIn);
+  return [
     row('of first and redo counts', ({ redo }) => textValue(redoWords(redo))),
     row('a redo counts up to', ({ redo }) => percentValue(redo.kind === 'average' ? null : redo.capPercent)),
     row('prediction agrees within', ({ prediction }) => lengthValue(prediction.agreeWithin)),

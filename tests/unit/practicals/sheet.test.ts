@@ -1,9 +1,7 @@
 import { describe, expect, it } from 'vitest';
-import { changesSince } from '@/lib/practicals/changes-since';
 import { textAt, typeAt } from '@/lib/practicals/draft-paths';
 import { draftDifferences, fieldName, stepOfPath } from '@/lib/practicals/field-names';
 import { parseDraft } from '@/lib/practicals/parse-draft';
-import { pasteRows } from '@/lib/practicals/paste-rows';
 import { placeFindings } from '@/lib/practicals/place-findings';
 import { doubleSide, isDoubled, isRatePerStep } from '@/lib/practicals/presets';
 import { ruleScaleOf } from '@/lib/practicals/rule-scale-of';
@@ -11,43 +9,6 @@ import { starterDraft } from '@/lib/practicals/starters';
 import { bandsFromRate, reviewRubric } from '@/lib/scoring';
 import { comparedStarter } from '@/tests/support/compared';
 import { defaultRule, ticksOf } from '@/tests/support/rubrics';
-
-describe('pasting rows of a spreadsheet', () => {
-  it('makes lines of them, kept as they are, good or bad', () => {
-    const { lines, leftOut } = pasteRows([], { row: 0, column: 'label' }, [
-      ['base', '1', '3/4', ' 4 1/2 ', '9', 'grain along'],
-      ['', '', ''],
-      ['guide', 'two', '3/4', '3/4'],
-    ]);
-    expect(
-      lines.map(({ label, quantity, width, length, note }) => [label, quantity, width, length, note]),
-    ).toEqual([
-      ['base', '1', '4 1/2', '9', 'grain along'],
-      ['guide', 'two', '3/4', '', ''],
-    ]);
-    expect(new Set(lines.map(({ id }) => id)).size).toBe(2);
-    expect(leftOut).toEqual({ rows: 0, cells: 0 });
-  });
-
-  it('overwrites from the cell in hand, keeps what the rows do not cover, and does not touch its input', () => {
-    const before = starterDraft('bench-hook').lines;
-    const copy = structuredClone(before);
-    const { lines } = pasteRows(before, { row: 3, column: 'width' }, [
-      ['1', '3 1/2'],
-      ['1', '4'],
-    ]);
-    expect(lines[3]).toMatchObject({ id: 'guide', label: 'guide', width: '1', length: '3 1/2' });
-    expect(lines[4]).toMatchObject({ label: '', width: '1', length: '4' });
-    expect(before).toEqual(copy);
-  });
-
-  it('counts what finds no place', () => {
-    const rows = Array.from({ length: 402 }, () => ['part', '1', '1', '1', '1', '', 'one too many']);
-    const { lines, leftOut } = pasteRows([], { row: 0, column: 'label' }, rows);
-    expect(lines).toHaveLength(400);
-    expect(leftOut).toEqual({ rows: 2, cells: 400 });
-  });
-});
 
 describe('paths into a draft', () => {
   it('read and type texts, and leave alone what is none', () => {
@@ -187,40 +148,5 @@ describe('the stretch of rule a price is drawn on', () => {
     const { graduation, span } = ruleScaleOf([wide, defaultRule()], 'in');
     expect(graduation * span).toBeGreaterThan(ticksOf('2'));
     expect(span).toBeLessThanOrEqual(16);
-  });
-});
-
-describe('what a version changes', () => {
-  const before = { ...comparedStarter('version 1'), number: 1 };
-  const words = (change: Parameters<typeof comparedStarter>[1]) =>
-    changesSince(before, comparedStarter('now', change)).map((phrase) => phrase.join('').slice(0, 60));
-
-  it('is nothing when nothing changed', () => {
-    expect(words(() => {})).toEqual([]);
-  });
-
-  it('is said of the task', () => {
-    expect(
-      words((draft) => {
-        draft.title = 'Caddy';
-        draft.instructions = 'Cut.';
-        draft.kerf = '3/32';
-        Object.assign(draft.lines[0] ?? {}, { label: 'bottom' });
-      }),
-    ).toEqual([
-      'The title is another.',
-      'The instructions are others.',
-      'The blank, its wood or the kerf is another.',
-      'Lines are named, ordered or noted otherwise.',
-    ]);
-  });
-
-  it('is said of the prices while the pieces are the same, and of the pieces when they are not', () => {
-    expect(words((draft) => Object.assign(draft.redo, { capPercent: '80' }))).toEqual([
-      'They price every size alike, and differ in a redo counts up ',
-    ]);
-    expect(words((draft) => Object.assign(draft.lines[0] ?? {}, { width: '3' }))).toEqual([
-      'The cut list asks for other pieces.',
-    ]);
   });
 });
