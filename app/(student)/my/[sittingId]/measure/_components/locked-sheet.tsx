@@ -1,7 +1,7 @@
 'use client';
 
 import { format } from 'date-fns';
-import { LossTable } from '@/app/(student)/my/_components/loss-table';
+import { LossTable } from '@/components/loss/loss-table';
 import { ScoreRule } from '@/components/rule/score-rule';
 import { CopyButton } from '@/components/ui/copy-button';
 import { pointsAsText } from '@/components/ui/points-text';

@@ -1,3 +1,4 @@
+import { LossTable } from '@/components/loss/loss-table';
 import { ScoreRule } from '@/components/rule/score-rule';
 import { pointsAsText } from '@/components/ui/points-text';
 import type { OwnResultView } from '@/lib/data/own/read-result';
@@ -5,7 +6,6 @@ import { largestDisagreements, pairReadings } from '@/lib/practicals/compare-rea
 import { explainScore } from '@/lib/practicals/explain-score';
 import { lengthPattern } from '@/lib/practicals/length-pattern';
 import type { ScoreSheet } from '@/lib/scoring';
-import { LossTable } from '../../../_components/loss-table';
 import { AllReadings } from './all-readings';
 import { Disagreements } from './disagreements';
 import { JudgementWords } from './judgement-words';
