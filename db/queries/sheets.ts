@@ -1,6 +1,7 @@
-import { and, asc, eq, inArray, notInArray, sql } from 'drizzle-orm';
+import { and, asc, eq, not, sql } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
 import { attempts, readingEvents, rubricVersions, scoreSheets, sittings } from '@/db/schema';
+import { anyOf } from './any-of';
 
 /** Rows a statement: well under the protocol's 65 535 parameters. */
 const CHUNK = 500;
@@ -8,21 +9,38 @@ const CHUNK = 500;
 export type EventRow = typeof readingEvents.$inferSelect;
 export type SheetRow = typeof scoreSheets.$inferInsert;
 
-/** The attempts named, each with the rubric version its sitting stands under. */
+/** The attempts named, each with its sitting and the rubric version that it stands under. */
 export function selectAttemptVersions(tx: Transaction, schoolId: string, attemptIds: readonly string[]) {
   return tx
-    .select({ attemptId: attempts.id, rubricVersionId: sittings.rubricVersionId })
+    .select({
+      attemptId: attempts.id,
+      sittingId: attempts.sittingId,
+      rubricVersionId: sittings.rubricVersionId,
+    })
     .from(attempts)
     .innerJoin(sittings, and(eq(sittings.schoolId, attempts.schoolId), eq(sittings.id, attempts.sittingId)))
-    .where(and(eq(attempts.schoolId, schoolId), inArray(attempts.id, [...attemptIds])))
+    .where(and(eq(attempts.schoolId, schoolId), anyOf(attempts.id, attemptIds)))
     .orderBy(asc(attempts.id));
 }
 
-export function selectRubrics(tx: Transaction, schoolId: string, versionIds: readonly string[]) {
+export function selectAttemptIds(tx: Transaction, schoolId: string, sittingId: string) {
   return tx
-    .select({ id: rubricVersions.id, rubric: rubricVersions.rubric })
+    .select({ attemptId: attempts.id })
+    .from(attempts)
+    .where(and(eq(attempts.schoolId, schoolId), eq(attempts.sittingId, sittingId)))
+    .orderBy(asc(attempts.id));
+}
+
+export function selectPricedVersions(tx: Transaction, schoolId: string, versionIds: readonly string[]) {
+  return tx
+    .select({
+      versionId: rubricVersions.id,
+      number: rubricVersions.number,
+      form: rubricVersions.form,
+      rubric: rubricVersions.rubric,
+    })
     .from(rubricVersions)
-    .where(and(eq(rubricVersions.schoolId, schoolId), inArray(rubricVersions.id, [...versionIds])));
+    .where(and(eq(rubricVersions.schoolId, schoolId), anyOf(rubricVersions.id, versionIds)));
 }
 
 /** Every event of the attempts, in the order they arrived. */
@@ -34,7 +52,7 @@ export function selectEventsOf(
   return tx
     .select()
     .from(readingEvents)
-    .where(and(eq(readingEvents.schoolId, schoolId), inArray(readingEvents.attemptId, [...attemptIds])))
+    .where(and(eq(readingEvents.schoolId, schoolId), anyOf(readingEvents.attemptId, attemptIds)))
     .orderBy(asc(readingEvents.receivedAt), asc(readingEvents.sequence), asc(readingEvents.id));
 }
 
@@ -53,6 +71,8 @@ export async function upsertSheets(tx: Transaction, rows: readonly SheetRow[]): 
           scorePoints: sql`excluded.score_points`,
           provisionalPoints: sql`excluded.provisional_points`,
           totalPoints: sql`excluded.total_points`,
+          heldPoints: sql`excluded.held_points`,
+          accommodationId: sql`excluded.accommodation_id`,
           lostPoints: sql`excluded.lost_points`,
           complete: sql`excluded.complete`,
           conflicts: sql`excluded.conflicts`,
@@ -78,8 +98,8 @@ export async function deleteOtherSheets(
       and(
         eq(scoreSheets.schoolId, schoolId),
         eq(scoreSheets.side, kept.side),
-        inArray(scoreSheets.attemptId, [...attemptIds]),
-        kept.attemptIds.length > 0 ? notInArray(scoreSheets.attemptId, [...kept.attemptIds]) : undefined,
+        anyOf(scoreSheets.attemptId, attemptIds),
+        not(anyOf(scoreSheets.attemptId, kept.attemptIds)),
       ),
     );
 }

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { MAX_LENGTH } from '@/lib/length';
+import { AXES, type Rubric } from '@/lib/scoring';
 
 /**
  * A cell is one thing that can be recorded of an attempt. `what` names it:
@@ -67,6 +68,15 @@ export const cellValueSchema = z.discriminatedUnion('kind', [
 ]);
 
 export type CellValue = z.infer<typeof cellValueSchema>;
+
+/** Whether a rubric has the cell; an attempt's own cells are there under every rubric. */
+export function hasCell({ lines, workChecks }: Rubric, { lineId, ordinal, what }: Cell): boolean {
+  if (what.startsWith('@')) return true;
+  if (lineId === '') return ordinal === 0 && workChecks.some(({ id }) => id === what);
+  const line = lines.find(({ id }) => id === lineId);
+  if (!line || ordinal < 1 || ordinal > line.quantity) return false;
+  return what === 'piece' || AXES.some((axis) => axis === what) || line.checks.some(({ id }) => id === what);
+}
 
 /** One text for one cell, to use as a key. */
 export function cellKey(cell: Cell): string {

@@ -4,37 +4,50 @@ import {
   type EventRow,
   type SheetRow,
   type StandingRow,
-  selectAttemptVersions,
   selectEventsOf,
-  selectRubrics,
   updateStandings,
   upsertSheets,
 } from '@/db/queries/sheets';
-import { type Rubric, scoreAttempt } from '@/lib/scoring';
+import type { Points } from '@/lib/scoring';
 import { ENGINE_VERSION } from '@/lib/scoring/engine-version';
-import { rubricSchema } from '@/lib/scoring/schemas';
-import { SIDES, type Side } from '@/lib/sync/cells';
+import { hasCell, SIDES, type Side } from '@/lib/sync/cells';
 import { type CellEvent, type DerivedAttempt, deriveAttempt } from '@/lib/sync/derive';
 import { asCellEvent } from '@/lib/sync/server/stored-event';
+import { loadPricing } from '../pricing/load-pricing';
+import { holdPoints, priceUnder, sheetUnder } from '../pricing/price-work';
+import type { Pricing } from '../pricing/pricing';
+
+/** Attempts at a time, so that a large sitting's events are never all in memory. */
+const ATTEMPTS_AT_A_TIME = 500;
 
 /**
- * Derives both sides of the attempts from their events, prices them by their sitting's rubric version, and stores the
- * sheets, standings and days late. Takes the same few statements for one attempt as for hundreds.
+ * Derives both sides of the attempts from their events, prices them as `loadPricing` says, and stores the sheets,
+ * standings and days late. Takes the same few statements for one attempt as for hundreds.
  */
 export async function rebuildSheets(
   tx: Transaction,
   schoolId: string,
   attemptIds: readonly string[],
 ): Promise<void> {
-  if (attemptIds.length === 0) return;
-  const versions = await selectAttemptVersions(tx, schoolId, attemptIds);
-  const rubrics = await loadRubrics(tx, schoolId, [...new Set(versions.map((row) => row.rubricVersionId))]);
+  const pricings = await loadPricing(tx, schoolId, attemptIds);
+  const ids = [...pricings.keys()];
+  for (let from = 0; from < ids.length; from += ATTEMPTS_AT_A_TIME) {
+    await rebuildSome(tx, schoolId, ids.slice(from, from + ATTEMPTS_AT_A_TIME), pricings);
+  }
+}
+
+async function rebuildSome(
+  tx: Transaction,
+  schoolId: string,
+  attemptIds: readonly string[],
+  pricings: ReadonlyMap<string, Pricing>,
+): Promise<void> {
   const events = groupByAttempt(await selectEventsOf(tx, schoolId, attemptIds));
   const sheets: SheetRow[] = [];
   const standings: StandingRow[] = [];
-  for (const { attemptId, rubricVersionId } of versions) {
-    const rubric = rubrics.get(rubricVersionId);
-    if (!rubric) throw new Error(`rubric version ${rubricVersionId} of attempt ${attemptId} is not there`);
+  for (const attemptId of attemptIds) {
+    const pricing = pricings.get(attemptId);
+    if (!pricing) throw new Error(`attempt ${attemptId} has no price`);
     const recorded = events.get(attemptId) ?? [];
     for (const side of SIDES) {
       const derived = deriveAttempt(recorded, side);
@@ -42,7 +55,7 @@ export async function rebuildSheets(
         standings.push({ attemptId, standing: derived.standing, daysLate: derived.attempt.daysLate });
       }
       if (recorded.some((event) => event.side === side)) {
-        sheets.push(sheetRow({ schoolId, attemptId, side, rubricVersionId }, rubric, derived));
+        sheets.push(sheetRow({ schoolId, attemptId, side }, pricing, derived));
       }
     }
   }
@@ -52,15 +65,6 @@ export async function rebuildSheets(
   }
   await upsertSheets(tx, sheets);
   await updateStandings(tx, schoolId, standings);
-}
-
-async function loadRubrics(
-  tx: Transaction,
-  schoolId: string,
-  versionIds: string[],
-): Promise<Map<string, Rubric>> {
-  const rows = versionIds.length > 0 ? await selectRubrics(tx, schoolId, versionIds) : [];
-  return new Map(rows.map((row) => [row.id, rubricSchema.parse(row.rubric)]));
 }
 
 function groupByAttempt(rows: readonly EventRow[]): Map<string, CellEvent[]> {
@@ -77,26 +81,39 @@ interface SheetKey {
   schoolId: string;
   attemptId: string;
   side: Side;
-  rubricVersionId: string;
 }
 
-/** While two readings stand against each other there is no score, whatever the engine could make of the rest. */
-function sheetRow(key: SheetKey, rubric: Rubric, derived: DerivedAttempt): SheetRow {
-  const sheet = scoreAttempt(rubric, derived.attempt);
-  const settled = derived.conflicts.length === 0;
+/**
+ * While two readings that the version asks for stand against each other there is no score, whatever the engine could
+ * make of the rest. What earlier versions gave more is held at the bench alone: a prediction is what the pieces cost.
+ */
+function sheetRow(key: SheetKey, pricing: Pricing, derived: DerivedAttempt): SheetRow {
+  const sheet = sheetUnder(pricing, derived.attempt);
+  const held = key.side === 'bench' ? heldOf(pricing, derived) : 0;
+  const conflicts = derived.conflicts.filter((cell) => hasCell(pricing.published, cell)).length;
+  const plus = (points: Points | null) => (points === null ? null : points + held);
   return {
     ...key,
+    rubricVersionId: pricing.versionId,
     engineVersion: ENGINE_VERSION,
     recorded: derived.attempt,
     sheet,
-    scorePoints: settled ? sheet.score : null,
-    provisionalPoints: sheet.provisional,
+    scorePoints: conflicts === 0 ? plus(sheet.score) : null,
+    provisionalPoints: plus(sheet.provisional),
     totalPoints: sheet.total,
+    heldPoints: held,
+    accommodationId: pricing.accommodationId,
     lostPoints: sheet.lost,
-    complete: settled && sheet.complete,
-    conflicts: derived.conflicts.length,
+    complete: conflicts === 0 && sheet.complete,
+    conflicts,
     finished: derived.finished,
     lockedAt: derived.lock ? new Date(derived.lock.at) : null,
     measuredAt: derived.measuredAt ? new Date(derived.measuredAt) : null,
   };
+}
+
+function heldOf(pricing: Pricing, { attempt }: DerivedAttempt): Points {
+  if (pricing.held.length === 0) return 0;
+  const work = { bench: attempt, own: null };
+  return holdPoints(pricing, priceUnder(pricing, work), work).points;
 }

@@ -1,7 +1,7 @@
 import 'server-only';
 import { createHash } from 'node:crypto';
 import type { Transaction } from '@/db/client';
-import { type AttemptRow, selectAttempts, selectLockEvents } from '@/db/queries/attempts';
+import { type AttemptRow, selectAttempts } from '@/db/queries/attempts';
 import {
   type PublicationRow,
   type ResultRow,
@@ -15,10 +15,9 @@ import type { Rubric } from '@/lib/scoring';
 import type { PredictionPolicy } from '@/lib/scoring/rubric-form';
 import { rubricFormSchema } from '@/lib/scoring/rubric-form-schema';
 import { attemptSchema, rubricSchema } from '@/lib/scoring/schemas';
-import { type CellEvent, deriveCells } from '@/lib/sync/derive';
-import { asCellEvent } from '@/lib/sync/server/stored-event';
 import { rebuildSheets } from '../rounds/rebuild-sheets';
 import { type JudgedResult, judgeResult, type RecordedAttempt } from './judge-result';
+import { lateLocks } from './late-locks';
 import { sameJson } from './same-json';
 
 export interface GatheredAttempt {
@@ -95,20 +94,6 @@ function asRecorded(row: AttemptRow, late: boolean): RecordedAttempt {
             late,
           },
   };
-}
-
-/** The attempts whose standing lock came after the bench had begun, without a receipt. */
-async function lateLocks(tx: Transaction, { schoolId, sittingId }: SittingRow): Promise<Set<string>> {
-  const byAttempt = new Map<string, (CellEvent & { flags: string[] })[]>();
-  for (const row of await selectLockEvents(tx, schoolId, sittingId)) {
-    const events = byAttempt.get(row.attemptId) ?? [];
-    byAttempt.set(row.attemptId, [...events, { ...asCellEvent(row), flags: row.flags }]);
-  }
-  const isLate = (events: (CellEvent & { flags: string[] })[]) =>
-    [...deriveCells(events, 'own').values()].some(({ heads }) =>
-      heads.some(({ flags }) => flags.includes('late-lock')),
-    );
-  return new Set([...byAttempt].flatMap(([attemptId, events]) => (isLate(events) ? [attemptId] : [])));
 }
 
 async function loadLatest(tx: Transaction, { schoolId, sittingId }: SittingRow): Promise<Gathered['latest']> {
