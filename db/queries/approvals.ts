@@ -119,3 +119,24 @@ export async function selectTakenFrom(
     select id from taken`);
   return new Set(rows.map(({ id }) => id));
 }
+
+/** An approval, standing or ended, with its version. */
+export async function selectApproval(tx: Transaction, schoolId: string, approvalId: string) {
+  const [row] = await tx
+    .select({
+      practicalId: rubricApprovals.practicalId,
+      versionId: rubricVersions.id,
+      number: rubricVersions.number,
+      endedAt: rubricApprovals.endedAt,
+    })
+    .from(rubricApprovals)
+    .innerJoin(
+      rubricVersions,
+      and(
+        eq(rubricVersions.schoolId, rubricApprovals.schoolId),
+        eq(rubricVersions.id, rubricApprovals.rubricVersionId),
+      ),
+    )
+    .where(and(eq(rubricApprovals.schoolId, schoolId), eq(rubricApprovals.id, approvalId)));
+  return row;
+}

@@ -5,6 +5,7 @@ import { archivePracticalAction, copyPracticalAction } from '../actions';
 import { LocalTime } from './local-time';
 import { PressForm } from './press-form';
 import { sayPieces } from './say-pieces';
+import { SourceLine } from './source-line';
 
 /** One’s own practicals: what each asks for, what is published of it, and what is given out. */
 export function PracticalTable({
@@ -43,19 +44,22 @@ export function PracticalTable({
               </Link>
               <span className="block text-small font-[440] text-ink-2 md:hidden">
                 {sayPieces(practical.lines, practical.pieces)};{' '}
-                {practical.version ? `version ${practical.version.number}` : 'not published yet'}
+                {practical.version ? sayPublished(practical) : 'not published yet'}
               </span>
+              {practical.source ? (
+                <SourceLine
+                  practicalId={practical.practicalId}
+                  unit={practical.unit}
+                  source={practical.source}
+                />
+              ) : null}
             </RowHead>
             <Cell className="max-md:hidden">{practical.unit === 'in' ? 'inches' : 'mm'}</Cell>
             <Cell className="whitespace-nowrap max-md:hidden">
               {sayPieces(practical.lines, practical.pieces)}
             </Cell>
-            <Cell className="whitespace-nowrap max-md:hidden">
-              {practical.version ? (
-                `version ${practical.version.number}`
-              ) : (
-                <span className="text-ink-2">not yet</span>
-              )}
+            <Cell className="max-md:hidden">
+              {practical.version ? sayPublished(practical) : <span className="text-ink-2">not yet</span>}
             </Cell>
             <Cell align="right" className="max-md:hidden">
               {practical.sittings}
@@ -84,4 +88,14 @@ export function PracticalTable({
       </TableBody>
     </Table>
   );
+}
+
+/** "version 2, offered; version 1 is the department’s" */
+function sayPublished({ version, offered, approvedNumber }: PracticalListItem): string {
+  const newest = `version ${version?.number}`;
+  const isDepartments = approvedNumber !== null && approvedNumber === version?.number;
+  const words = [newest, ...(isDepartments ? ['the department’s'] : []), ...(offered ? ['offered'] : [])];
+  const earlier =
+    approvedNumber !== null && !isDepartments ? `; version ${approvedNumber} is the department’s` : '';
+  return `${words.join(', ')}${earlier}`;
 }
