@@ -1,7 +1,7 @@
 import { listPieces, listSpots } from '@/lib/round/pieces';
 import { type BenchRecord, headsAt, pieceStateAt, valueAt } from '@/lib/round/record';
 import type { BenchEvent, Mint, Spot } from '@/lib/round/types';
-import { AXES, type Rubric, type ScoreSheet, scoreAttempt } from '@/lib/scoring';
+import { AXES, projectAttempt, type Rubric, type ScoreSheet, scoreAttempt } from '@/lib/scoring';
 import type { Cell, CellValue } from '@/lib/sync/cells';
 import { deriveAttempt, deriveCells } from '@/lib/sync/derive';
 
@@ -74,7 +74,11 @@ export function makeOwnEvent(
   };
 }
 
-/** What the own readings would score: the engine's sheet, without bonus and lateness. */
+/**
+ * What the own readings would score: the engine's sheet, without bonus and lateness, and without readings of what the
+ * rubric no longer asks for.
+ */
 export function predictedSheet(rubric: Rubric, record: OwnRecord): ScoreSheet {
-  return scoreAttempt(rubric, { ...record.derived.attempt, bonus: 0, daysLate: 0 });
+  const { attempt } = projectAttempt(rubric, record.derived.attempt);
+  return scoreAttempt(rubric, { ...attempt, bonus: 0, daysLate: 0 });
 }

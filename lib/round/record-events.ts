@@ -1,4 +1,4 @@
-import type { Cell, CellValue } from '@/lib/sync/cells';
+import { type Cell, type CellValue, hasCell } from '@/lib/sync/cells';
 import { headsAt, recordOf } from './record';
 import type { BenchEvent, Mint, Outcome, Reading, RoundState, Said, Sound } from './types';
 
@@ -31,10 +31,14 @@ export function sourceOf({ typed, unit, instrument }: Reading): Source {
   return { typed, unit, instrument };
 }
 
-/** The events laid beside what is known; an event that is known already stays as it is. */
+/**
+ * The events laid beside what is known; an event that is known already stays as it is. One of a cell that the rubric
+ * does not have, from before or after the sitting was moved to another version, stays where it is kept.
+ */
 export function withEvents(state: RoundState, events: readonly BenchEvent[]): RoundState {
   const all = new Map(state.events);
   for (const event of events) {
+    if (!hasCell(state.plan.rubric, event.cell)) continue;
     const known = all.get(event.attemptId) ?? [];
     if (!known.some(({ id }) => id === event.id)) all.set(event.attemptId, [...known, event]);
   }

@@ -1,4 +1,4 @@
-import { type Rubric, type ScoreSheet, scoreAttempt } from '@/lib/scoring';
+import { projectAttempt, type Rubric, type ScoreSheet, scoreAttempt } from '@/lib/scoring';
 import { type Cell, type CellValue, cellKey } from '@/lib/sync/cells';
 import { type CellState, type DerivedAttempt, deriveAttempt, deriveCells } from '@/lib/sync/derive';
 import type { BenchEvent, RoundState } from './types';
@@ -24,9 +24,10 @@ export function recordOf(state: RoundState, attemptId = state.attemptId): BenchR
 
 const sheets = new WeakMap<BenchRecord, ScoreSheet>();
 
-/** What the record costs so far, by the sitting's rubric. */
+/** What the record costs so far, by the sitting's rubric; what that does not ask for costs nothing. */
 export function sheetOf(rubric: Rubric, record: BenchRecord): ScoreSheet {
-  const known = sheets.get(record) ?? scoreAttempt(rubric, record.derived.attempt);
+  const known =
+    sheets.get(record) ?? scoreAttempt(rubric, projectAttempt(rubric, record.derived.attempt).attempt);
   sheets.set(record, known);
   return known;
 }

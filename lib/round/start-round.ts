@@ -1,3 +1,4 @@
+import { findPiece } from './pieces';
 import { withEvents } from './record-events';
 import { studentStatus } from './students';
 import type { BenchEvent, Press, RoundPlan, RoundState, Spot } from './types';
@@ -35,7 +36,10 @@ export function startRound(
   };
   const state = withEvents(empty, events);
   if (left && plan.students.some(({ attemptId }) => attemptId === left.attemptId)) {
-    return { ...openStudent(state, left.attemptId), spot: left.spot, skipped: left.skipped };
+    const opened = openStudent(state, left.attemptId);
+    // The piece it stood at may be none that this version asks for.
+    const stays = left.spot === null || findPiece(plan.rubric, left.spot) !== undefined;
+    return { ...opened, spot: stays ? left.spot : opened.spot, skipped: left.skipped };
   }
   const first = plan.students.find((student) => {
     const { standing, finished, unread } = studentStatus(state, student);

@@ -20,8 +20,21 @@ const PIECE_STATES: Record<Side, readonly string[]> = {
   own: ['present', 'missing'],
 };
 
-/** Why this rubric has no such cell, or why the cell cannot hold this value on this side; null when it can. */
-export function refuseCell(rubric: Rubric, side: Side, cell: Cell, value: CellValue): string | null {
+/**
+ * Why none of these rubrics has such a cell, or why the cell cannot hold this value on this side; null when under one
+ * of them it can. Told by the first rubric, the one the sitting stands under.
+ */
+export function refuseCell(
+  rubrics: readonly Rubric[],
+  side: Side,
+  cell: Cell,
+  value: CellValue,
+): string | null {
+  const reasons = rubrics.map((rubric) => refuseUnder(rubric, side, cell, value));
+  return reasons.includes(null) ? null : (reasons[0] ?? 'There is no rubric.');
+}
+
+function refuseUnder(rubric: Rubric, side: Side, cell: Cell, value: CellValue): string | null {
   if (cell.what.startsWith('@')) return refuseAttemptCell(side, cell, value);
   if (cell.lineId === '') {
     if (cell.ordinal !== 0) return 'A check of the whole work has no piece number.';

@@ -1,6 +1,7 @@
 import 'server-only';
 import type { z } from 'zod';
 import type { Transaction } from '@/db/client';
+import { selectStoodVersions } from '@/db/queries/moves';
 import { insertEvents, isOwnSitting, lockAttempts, selectRound, selectSameEvents } from '@/db/queries/rounds';
 import { type EventRow, selectEventsOf } from '@/db/queries/sheets';
 import type { Actor } from '@/lib/auth/actor';
@@ -104,9 +105,10 @@ async function layDesk(
     events.map(({ id }) => id),
     parsed.map(({ sequence }) => sequence),
   );
+  const stood = await selectStoodVersions(tx, round.schoolId, round.sittingId);
   return {
     sittingId: round.sittingId,
-    rubric: rubricSchema.parse(round.rubric),
+    rubrics: stood.map(({ rubric }) => rubricSchema.parse(rubric)),
     published: round.state === 'published',
     sender,
     attempts,

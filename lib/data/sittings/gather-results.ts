@@ -11,10 +11,9 @@ import {
 import { insertMissingAttempts, lockAttempts } from '@/db/queries/rounds';
 import type { SittingRow } from '@/db/queries/sittings';
 import { scoreSheetSchema } from '@/lib/contracts/results';
-import type { Rubric } from '@/lib/scoring';
-import type { PredictionPolicy } from '@/lib/scoring/rubric-form';
-import { rubricFormSchema } from '@/lib/scoring/rubric-form-schema';
-import { attemptSchema, rubricSchema } from '@/lib/scoring/schemas';
+import { loadPricing } from '../pricing/load-pricing';
+import type { Pricing } from '../pricing/pricing';
+import { storedAttempt } from '../pricing/stored-attempt';
 import { rebuildSheets } from '../rounds/rebuild-sheets';
 import { type JudgedResult, judgeResult, type RecordedAttempt } from './judge-result';
 import { lateLocks } from './late-locks';
@@ -23,12 +22,11 @@ import { sameJson } from './same-json';
 export interface GatheredAttempt {
   row: AttemptRow;
   recorded: RecordedAttempt;
+  pricing: Pricing;
 }
 
 /** All that a publication of a sitting depends on, as it stands. */
 export interface Gathered {
-  rubric: Rubric;
-  policy: PredictionPolicy;
   attempts: GatheredAttempt[];
   /** Equal as long as nothing that could change a result has changed. */
   seen: string;
@@ -52,11 +50,17 @@ export async function gatherResults(tx: Transaction, sitting: SittingRow): Promi
   const rows = (await selectAttempts(tx, schoolId, [sittingId])).filter(
     (row) => row.here || row.recorded !== null || row.standing !== 'expected' || told.has(row.attemptId),
   );
-  const attempts = rows.map((row) => ({ row, recorded: asRecorded(row, late.has(row.attemptId)) }));
-  const material = attempts.map(({ row, recorded }) => [row.attemptId, row.here, recorded]);
+  const pricings = await loadPricing(tx, schoolId, ids);
+  const attempts = rows.map((row) => ({
+    row,
+    recorded: asRecorded(row, late.has(row.attemptId)),
+    pricing: pricingOf(pricings, row.attemptId),
+  }));
+  const material = attempts.map(({ row, recorded, pricing: { accommodationId, held } }) => [
+    ...[row.attemptId, row.here, recorded, accommodationId],
+    held.map(({ versionId }) => versionId),
+  ]);
   return {
-    rubric: rubricSchema.parse(sitting.rubric),
-    policy: rubricFormSchema.parse(sitting.form).policies.prediction,
     attempts,
     seen: createHash('sha256')
       .update(sameJson([sitting.rubricVersionId, latest?.publication.number ?? 0, material]))
@@ -70,25 +74,31 @@ export interface GatheredResult extends JudgedResult {
 }
 
 /** Each attempt with its result. What holds it up does not hold for those who have left the section. */
-export function judgeAll({ rubric, policy, attempts }: Gathered, countLate: boolean): GatheredResult[] {
-  return attempts.map(({ row, recorded }) => {
-    const result = judgeResult(rubric, policy, recorded, countLate);
+export function judgeAll({ attempts }: Gathered, countLate: boolean): GatheredResult[] {
+  return attempts.map(({ row, recorded, pricing }) => {
+    const result = judgeResult(pricing, recorded, countLate);
     const open = row.here || result.open === 'conflict' ? result.open : null;
     return { row, ...result, open };
   });
 }
 
+function pricingOf(pricings: ReadonlyMap<string, Pricing>, attemptId: string): Pricing {
+  const pricing = pricings.get(attemptId);
+  if (!pricing) throw new Error(`attempt ${attemptId} has no price`);
+  return pricing;
+}
+
 function asRecorded(row: AttemptRow, late: boolean): RecordedAttempt {
   return {
     standing: row.standing,
-    recorded: row.recorded === null ? null : attemptSchema.parse(row.recorded),
+    recorded: row.recorded === null ? null : storedAttempt(row.recorded),
     conflicts: row.conflicts ?? 0,
     measuredAt: row.measuredAt,
     own:
       row.ownRecorded === null
         ? null
         : {
-            attempt: attemptSchema.parse(row.ownRecorded),
+            attempt: storedAttempt(row.ownRecorded),
             sheet: scoreSheetSchema.parse(row.ownSheet),
             locked: row.lockedAt !== null,
             late,
@@ -109,6 +119,9 @@ type Told = Pick<
   | 'scorePoints'
   | 'totalPoints'
   | 'bonusPoints'
+  | 'heldPoints'
+  | 'heldVersionId'
+  | 'accommodationId'
   | 'predictedPoints'
   | 'measuredAt'
   | 'sheet'

@@ -1,14 +1,8 @@
 import type { z } from 'zod';
 import type { judgementSchema } from '@/lib/contracts/results';
-import {
-  type Attempt,
-  judgePrediction,
-  type Points,
-  type Rubric,
-  type ScoreSheet,
-  scoreAttempt,
-} from '@/lib/scoring';
-import type { PredictionPolicy } from '@/lib/scoring/rubric-form';
+import { type Attempt, type Points, type ScoreSheet, scoreAttempt } from '@/lib/scoring';
+import { fitAttempt, holdPoints, priceUnder } from '../pricing/price-work';
+import type { Pricing } from '../pricing/pricing';
 
 /** An attempt as it is recorded when results are about to go out. */
 export interface RecordedAttempt {
@@ -17,7 +11,7 @@ export interface RecordedAttempt {
   recorded: Attempt | null;
   conflicts: number;
   measuredAt: Date | null;
-  /** The student's own side; null while nothing was recorded. */
+  /** The student's own side, its sheet by the same pricing; null while nothing was recorded. */
   own: { attempt: Attempt; sheet: ScoreSheet; locked: boolean; late: boolean } | null;
 }
 
@@ -28,6 +22,10 @@ export interface JudgedResult {
   scorePoints: Points | null;
   totalPoints: Points;
   bonusPoints: Points;
+  /** The part of the score that an earlier version gave beyond this one, and that version. */
+  heldPoints: Points;
+  heldVersionId: string | null;
+  accommodationId: string | null;
   predictedPoints: Points | null;
   measuredAt: Date | null;
   sheet: ScoreSheet | null;
@@ -38,22 +36,23 @@ export interface JudgedResult {
 const NOTHING: Attempt = { pieces: [], work: {}, bonus: 0, daysLate: 0 };
 
 /**
- * What an attempt's result is under its rubric: its status, and for a complete one the score with the bonus of a
- * locked prediction. A late prediction earns a bonus only where `countLate`. Absent, excused and not read have no
- * number; a zero is the number 0. Pure.
+ * What an attempt's result is under its pricing: its status, and for a complete one the score with the bonus of a
+ * locked prediction and what earlier versions hold, each of them with the bonus it would have given. A late
+ * prediction earns a bonus only where `countLate`. Absent, excused and not read have no number; a zero is the
+ * number 0. Pure.
  */
-export function judgeResult(
-  rubric: Rubric,
-  policy: PredictionPolicy,
-  attempt: RecordedAttempt,
-  countLate: boolean,
-): JudgedResult {
+export function judgeResult(pricing: Pricing, attempt: RecordedAttempt, countLate: boolean): JudgedResult {
   const { standing, recorded, own } = attempt;
-  const bare = scoreAttempt(rubric, { ...(recorded ?? NOTHING), bonus: 0 });
+  const counts = own?.locked && (!own.late || countLate);
+  const work = { bench: recorded ?? NOTHING, own: own && counts ? own.attempt : null };
+  const priced = priceUnder(pricing, work);
   const base = {
     open: attempt.conflicts > 0 ? ('conflict' as const) : null,
-    totalPoints: bare.total,
+    totalPoints: priced.total,
     bonusPoints: 0,
+    heldPoints: 0,
+    heldVersionId: null,
+    accommodationId: pricing.accommodationId,
     predictedPoints: own?.locked ? own.sheet.provisional : null,
     measuredAt: recorded ? attempt.measuredAt : null,
     sheet: null,
@@ -62,14 +61,22 @@ export function judgeResult(
   };
   if (standing === 'zero') return { ...base, status: 'zero', scorePoints: 0 };
   if (standing !== 'expected') return { ...base, status: standing, scorePoints: null };
-  if (!recorded || base.open !== null || bare.score === null) {
+  if (!recorded || base.open !== null || priced.score === null) {
     return { ...base, status: 'not read', open: base.open ?? openOf(recorded), scorePoints: null };
   }
-  const counts = own?.locked && (!own.late || countLate);
-  const judgement = own && counts ? judgePrediction(rubric, own.attempt, recorded, policy) : null;
+  const { judgement } = priced;
   const bonus = judgement?.bonus ?? 0;
-  const sheet = scoreAttempt(rubric, { ...recorded, bonus });
-  return { ...base, status: 'scored', scorePoints: sheet.score, bonusPoints: bonus, sheet, judgement };
+  const held = holdPoints(pricing, priced, work);
+  return {
+    ...base,
+    status: 'scored',
+    scorePoints: priced.score + held.points,
+    bonusPoints: bonus,
+    heldPoints: held.points,
+    heldVersionId: held.version?.versionId ?? null,
+    sheet: scoreAttempt(pricing.rubric, { ...fitAttempt(pricing, recorded), bonus }),
+    judgement,
+  };
 }
 
 function openOf(recorded: Attempt | null): 'unread' | 'unread sizes' {

@@ -1,17 +1,27 @@
 import { findPiece } from '@/lib/round/pieces';
 import type { BenchEvent, Press, Spot } from '@/lib/round/types';
 import { AXES, type Rubric } from '@/lib/scoring';
+import { hasCell } from '../cells';
 import type { StoredPress } from './round-store';
 
-/** Stored presses as undo takes them back: each with a name and the cell it was made at. */
+/**
+ * Stored presses as undo takes them back: each with a name and the cell it was made at. What was recorded of cells that
+ * the rubric does not have is left out, as it is of the round.
+ */
 export function pressesOf(rubric: Rubric, stored: readonly StoredPress[]): Press[] {
-  return stored.map(({ id, attemptId, events }) => ({
-    id,
-    attemptId,
-    spot: spotOf(events[0]),
-    eventIds: events.map((event) => event.id),
-    label: labelOf(rubric, events),
-  }));
+  return stored.flatMap(({ id, attemptId, events }) => {
+    const known = events.filter(({ cell }) => hasCell(rubric, cell));
+    if (known.length === 0) return [];
+    return [
+      {
+        id,
+        attemptId,
+        spot: spotOf(known[0]),
+        eventIds: known.map((event) => event.id),
+        label: labelOf(rubric, known),
+      },
+    ];
+  });
 }
 
 function spotOf(event: BenchEvent | undefined): Spot | null {

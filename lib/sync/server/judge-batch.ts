@@ -10,7 +10,8 @@ import { refuseLock } from './refuse-lock';
 /** What the server knows of a sitting and of the sender when a batch arrives. */
 export interface Desk {
   sittingId: string;
-  rubric: Rubric;
+  /** Of every version that the sitting stands or stood under, the present one first: a device may hold an older one. */
+  rubrics: readonly Rubric[];
   published: boolean;
   sender: {
     personId: string;
@@ -73,7 +74,7 @@ function refuseEvent(desk: Desk, event: ReadingEvent, recorded: readonly CellEve
   if (event.supersedes.includes(event.id)) return 'A reading cannot replace itself.';
   if (event.value.kind === 'value' && (event.typed === null || event.unit === null))
     return 'A reading needs what was typed and its unit.';
-  return refuseCell(desk.rubric, event.side, event.cell, event.value) ?? refuseByDuty(desk, event, recorded);
+  return refuseCell(desk.rubrics, event.side, event.cell, event.value) ?? refuseByDuty(desk, event, recorded);
 }
 
 /** What only the teacher may record, replace or take back. */
@@ -120,7 +121,7 @@ async function refuseBySide(
   if (event.value.kind !== 'lock') return null;
   if (!event.value.locked) return 'Only your teacher can reopen a lock.';
   const receipt = await receiptOf(event.attemptId, recorded);
-  return refuseLock(desk.rubric, recorded, event.value.receipt, receipt);
+  return refuseLock(desk.rubrics, recorded, event.value.receipt, receipt);
 }
 
 function refuseReopening(event: ReadingEvent, recorded: readonly CellEvent[]): string | null {

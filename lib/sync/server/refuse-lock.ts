@@ -2,15 +2,18 @@ import { AXES, type Rubric } from '@/lib/scoring';
 import { cellKey } from '../cells';
 import { type CellEvent, deriveCells } from '../derive';
 
-/** Why own readings cannot be locked as they stand: something is left open, or the receipt is of other readings. */
+/**
+ * Why own readings cannot be locked as they stand: something is left open under each of the rubrics, or the receipt is
+ * of other readings. Told by the first rubric, the present one.
+ */
 export function refuseLock(
-  rubric: Rubric,
+  rubrics: readonly Rubric[],
   recorded: readonly CellEvent[],
   given: string,
   receipt: string,
 ): string | null {
-  const open = countOpenSizes(rubric, recorded);
-  if (open > 0) {
+  const [open = 0, ...others] = rubrics.map((rubric) => countOpenSizes(rubric, recorded));
+  if (open > 0 && others.every((each) => each > 0)) {
     return `${open === 1 ? 'One size is' : `${open} sizes are`} neither recorded nor marked “couldn’t read”.`;
   }
   return given === receipt

@@ -54,10 +54,10 @@ const REFUSED: [Side, Cell, CellValue][] = [
 
 describe('cells of a sitting’s rubric', () => {
   test.each(KEPT)('%s %j holds %j', (side, cell, held) => {
-    expect(refuseCell(rubric, side, cell, held)).toBeNull();
+    expect(refuseCell([rubric], side, cell, held)).toBeNull();
   });
 
   test.each(REFUSED)('%s %j does not hold %j, with a reason', (side, cell, held) => {
-    expect(refuseCell(rubric, side, cell, held)).toMatch(/^[A-Z“].*\.$/);
+    expect(refuseCell([rubric], side, cell, held)).toMatch(/^[A-Z“].*\.$/);
   });
 });
