@@ -5,24 +5,34 @@ import { DeskPage } from '@/components/shell/desk-page';
 import { EmptyState } from '@/components/ui/empty-state';
 import { LinkButton } from '@/components/ui/link-button';
 import { Notice } from '@/components/ui/notice';
+import { readMoveChoices } from '@/lib/data/sittings/read-move-choices';
 import { readSitting, type SittingView } from '@/lib/data/sittings/read-sitting';
 import { pageValue } from '@/lib/transport/page';
 import { count, sayPeriod } from '../../_components/names';
 import { ChangeDue } from './_components/change-due';
+import { LatestMove } from './_components/latest-move';
 import { StudentTable } from './_components/student-table';
 import { sittingTitleBlock } from './_components/title-block-of';
+import { VersionLink } from './_components/version-link';
 
 export const metadata: Metadata = { title: 'Sitting' };
 
 export default async function SittingPage({ params }: PageProps<'/sittings/[sittingId]'>) {
   const { sittingId } = await params;
-  const sitting = pageValue(await readSitting(await actorInRole('teacher'), { sittingId }));
-  const { title, sectionName, period, versionNumber, students, published } = sitting;
+  const actor = await actorInRole('teacher');
+  const sitting = pageValue(await readSitting(actor, { sittingId }));
+  const choices = pageValue(await readMoveChoices(actor, { sittingId }));
+  const { title, sectionName, period, students, published } = sitting;
   return (
     <DeskPage
       title={title}
-      note={`${sectionName}, ${sayPeriod(period)}, rubric ${versionNumber}`}
-      tabs={<ChangeDue sittingId={sittingId} dueOn={sitting.dueOn} today={sitting.today} />}
+      note={`${sectionName}, ${sayPeriod(period)}`}
+      tabs={
+        <>
+          <VersionLink choices={choices} />
+          <ChangeDue sittingId={sittingId} dueOn={sitting.dueOn} today={sitting.today} />
+        </>
+      }
       actions={
         <>
           <LinkButton href={`/gradebook/${sitting.sectionId}`}>gradebook</LinkButton>
@@ -34,9 +44,10 @@ export default async function SittingPage({ params }: PageProps<'/sittings/[sitt
           </LinkButton>
         </>
       }
-      titleBlock={sittingTitleBlock(sitting)}
+      titleBlock={sittingTitleBlock(sitting, choices)}
     >
       <div className="grid gap-6">
+        <LatestMove choices={choices} />
         <Findings sitting={sitting} />
         {students.length === 0 ? (
           <EmptyState

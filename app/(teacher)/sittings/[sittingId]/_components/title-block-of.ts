@@ -1,8 +1,10 @@
 import type { TitleBlockCell } from '@/components/shell/title-block';
+import type { MoveChoices } from '@/lib/contracts/moves';
 import type { SittingView } from '@/lib/data/sittings/read-sitting';
 import { sayDay, sayDayOf } from '../../../_components/days';
+import { sayMoved } from './moved-words';
 
-export function sittingTitleBlock(sitting: SittingView): TitleBlockCell[] {
+export function sittingTitleBlock(sitting: SittingView, choices: MoveChoices): TitleBlockCell[] {
   const { students, publications, dueOn, today, timeZone, termName } = sitting;
   const current = students.filter((student) => student.current);
   const read = current.filter(({ progress }) => progress === 'read').length;
@@ -17,5 +19,6 @@ export function sittingTitleBlock(sitting: SittingView): TitleBlockCell[] {
         ? `${sayDayOf(latest.publishedAt, timeZone)}${latest.number > 1 ? `, time ${latest.number}` : ''}`
         : 'not yet',
     },
+    { label: 'rubric', value: sayMoved(choices), wide: true },
   ];
 }

@@ -7,13 +7,16 @@ import { pageValue } from '@/lib/transport/page';
 import { sayPeriod } from '../../../_components/names';
 import { OutcomeTable } from './_components/outcome-table';
 import { PublishForm } from './_components/publish-form';
+import { VersionSince } from './_components/version-since';
 
 export const metadata: Metadata = { title: 'Publish' };
 
 export default async function PublishPage({ params }: PageProps<'/sittings/[sittingId]/publish'>) {
   const { sittingId } = await params;
-  const preview = pageValue(await previewPublication(await actorInRole('teacher'), { sittingId }));
-  const { title, sectionName, period, versionNumber, number } = preview;
+  const actor = await actorInRole('teacher');
+  const preview = pageValue(await previewPublication(actor, { sittingId }));
+  const { title, sectionName, period, versionNumber, number, lastPublishedAt } = preview;
+  const last = lastPublishedAt === null ? null : { number: number - 1, publishedAt: lastPublishedAt };
   return (
     <DeskPage
       title={`Publish ${title}`}
@@ -27,6 +30,7 @@ export default async function PublishPage({ params }: PageProps<'/sittings/[sitt
         },
       ]}
     >
+      <VersionSince actor={actor} sittingId={sittingId} last={last} />
       <div className="grid items-start gap-x-12 gap-y-8 lg:grid-cols-[minmax(0,1fr)_24rem]">
         <OutcomeTable preview={preview} />
         <PublishForm preview={preview} />

@@ -1,0 +1,154 @@
+'use client';
+
+import { useRouter } from 'next/navigation';
+import { type ReactNode, useState } from 'react';
+import { Button } from '@/components/ui/button';
+import { LinkButton } from '@/components/ui/link-button';
+import { Notice } from '@/components/ui/notice';
+import { Progress } from '@/components/ui/progress';
+import { Refusal } from '@/components/ui/refusal';
+import type { MovePreview } from '@/lib/contracts/moves';
+import { type MoveReply, moveSittingAction } from '../actions';
+import { MoveDecision } from './move-decision';
+import { MoveDrawing } from './move-drawing';
+import { MoveTable } from './move-table';
+import { MoveVerdict } from './move-verdict';
+import { moversOf, pictureWords } from './move-words';
+import { type PreviewState, usePreview } from './use-preview';
+
+interface MoveBoardProps {
+  sittingId: string;
+  versionId: string;
+  toNumber: number;
+  published: boolean;
+  /** What the version changes, above the verdict. */
+  head: ReactNode;
+  history: ReactNode;
+}
+
+/** One version looked at: who would move, and the press that moves the sitting to it. */
+export function MoveBoard({ sittingId, versionId, toNumber, published, head, history }: MoveBoardProps) {
+  const { state, stop, again } = usePreview(sittingId, versionId);
+  const router = useRouter();
+  const [held, setHeld] = useState<boolean | null>(null);
+  const [reply, setReply] = useState<MoveReply | null>(null);
+
+  async function move(preview: MovePreview, holdHarmless: boolean) {
+    const data = { sittingId, versionId, holdHarmless, seen: preview.seen };
+    const answer = await moveSittingAction(data).catch(() => UNANSWERED);
+    setReply(answer);
+    if (answer.kind === 'moved') router.push(`/sittings/${sittingId}`);
+    if (answer.kind === 'stale') again();
+  }
+
+  const preview = state.kind === 'ready' ? state.preview : null;
+  return (
+    <div className="grid items-start gap-x-10 gap-y-8 lg:grid-cols-[minmax(0,1fr)_20rem] xl:grid-cols-[minmax(0,1fr)_25rem_19rem]">
+      <div className="grid gap-5 xl:col-span-2">
+        {head}
+        <Answered reply={reply} />
+        {state.kind === 'ready' ? (
+          <MoveVerdict preview={state.preview} />
+        ) : (
+          <Looking state={state} toNumber={toNumber} stop={stop} again={again} />
+        )}
+      </div>
+      {preview && preview.gain + preview.lose + preview.same > 0 ? (
+        <div className="lg:col-start-1">
+          <MoveDrawing
+            movers={moversOf(preview.students)}
+            total={preview.to.total}
+            held={held === true}
+            label={pictureWords(preview)}
+          />
+        </div>
+      ) : null}
+      <div className="grid gap-8 lg:col-start-2 lg:row-span-3 lg:row-start-1 xl:col-start-3">
+        {preview ? (
+          <MoveDecision
+            preview={preview}
+            published={published}
+            held={held}
+            onHeld={setHeld}
+            onMove={(holdHarmless) => move(preview, holdHarmless)}
+          />
+        ) : null}
+        {history}
+      </div>
+      {preview && preview.students.length > 0 ? (
+        <div className="lg:col-start-1 xl:col-start-2 xl:row-start-2">
+          <MoveTable preview={preview} />
+        </div>
+      ) : null}
+    </div>
+  );
+}
+
+const UNANSWERED: MoveReply = {
+  kind: 'refused',
+  message: 'The server does not answer. Whether the sitting was moved shows when you load this page again.',
+  signedOut: false,
+};
+
+/** What came of the press when the sitting was not moved. */
+function Answered({ reply }: { reply: MoveReply | null }) {
+  if (!reply || reply.kind === 'moved') return null;
+  if (reply.kind === 'stale') {
+    return (
+      <Notice title="Something changed since you looked.">
+        Nothing was moved. The preview is made again below, and your choice is kept: look at it and press once
+        more.
+      </Notice>
+    );
+  }
+  return (
+    <Refusal title={reply.message} action={reply.signedOut ? <SignIn /> : undefined}>
+      {reply.signedOut ? 'Nothing was moved. Sign in, and come back to this page.' : null}
+    </Refusal>
+  );
+}
+
+function SignIn() {
+  return <LinkButton href="/sign-in">sign in</LinkButton>;
+}
+
+interface LookingProps {
+  state: Exclude<PreviewState, { kind: 'ready' }>;
+  toNumber: number;
+  stop: () => void;
+  again: () => void;
+}
+
+/** The preview on its way, stopped, or failed. */
+function Looking({ state, toNumber, stop, again }: LookingProps) {
+  if (state.kind === 'running') {
+    return (
+      <Progress
+        className="max-w-[40rem]"
+        label={`scoring what is recorded by version ${toNumber}`}
+        value={state.of === null ? null : state.done}
+        max={state.of ?? 0}
+        text={state.of === null ? undefined : `${state.done} of ${state.of} attempts`}
+        cancel={<Button onClick={stop}>cancel</Button>}
+      />
+    );
+  }
+  const look = (
+    <Button kind="act" onClick={again}>
+      look again
+    </Button>
+  );
+  if (state.kind === 'stopped') {
+    return (
+      <div className="grid justify-items-start gap-3">
+        <p>You stopped the preview. Nothing was changed.</p>
+        {look}
+      </div>
+    );
+  }
+  return (
+    <Refusal title={state.message} action={state.signedOut ? <SignIn /> : look}>
+      Nothing was changed: a preview only reads.
+    </Refusal>
+  );
+}

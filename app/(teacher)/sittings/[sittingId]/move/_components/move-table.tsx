@@ -1,0 +1,59 @@
+import { Cell, HeadCell, RowHead, Table, TableBody, TableHead } from '@/components/table/table';
+import { pointsAsText } from '@/components/ui/points-text';
+import type { MovedAttempt, MovePreview } from '@/lib/contracts/moves';
+import type { Points } from '@/lib/scoring';
+import { attemptName, dropsFirst, signedPoints } from './move-words';
+
+/** Everyone of the sitting in figures, drops first. */
+export function MoveTable({ preview: { students, from, to, lose } }: { preview: MovePreview }) {
+  const both = from.total !== to.total;
+  const scale = (total: Points) => (both ? ` of ${pointsAsText(total)}` : '');
+  return (
+    <Table caption="who moves, in figures" className="text-label">
+      <TableHead>
+        <tr>
+          <HeadCell>student</HeadCell>
+          <HeadCell align="right">
+            version {from.number}
+            {scale(from.total)}
+          </HeadCell>
+          <HeadCell align="right">
+            version {to.number}
+            {scale(to.total)}
+          </HeadCell>
+          <HeadCell align="right">change</HeadCell>
+          {lose > 0 ? <HeadCell align="right">if held</HeadCell> : null}
+        </tr>
+      </TableHead>
+      <TableBody fives>
+        {dropsFirst(students).map((attempt) => (
+          <Row key={attempt.attemptId} attempt={attempt} heldShown={lose > 0} />
+        ))}
+      </TableBody>
+    </Table>
+  );
+}
+
+function Row({ attempt, heldShown }: { attempt: MovedAttempt; heldShown: boolean }) {
+  const { before, after, change, held } = attempt;
+  const moves = change !== null && change !== 0;
+  return (
+    <tr>
+      <RowHead className="py-1.5">{attemptName(attempt)}</RowHead>
+      <Figure points={before} />
+      <Figure points={after} />
+      <Cell align="right" className={moves ? 'py-1.5 font-[660]' : 'py-1.5 text-ink-2'}>
+        {change === null ? 'not compared' : change === 0 ? 'stays' : signedPoints(change)}
+      </Cell>
+      {heldShown ? <Figure points={held} quiet={change === null || change >= 0} /> : null}
+    </tr>
+  );
+}
+
+function Figure({ points, quiet = false }: { points: Points | null; quiet?: boolean }) {
+  return (
+    <Cell align="right" className={quiet || points === null ? 'py-1.5 text-ink-2' : 'py-1.5'}>
+      {points === null ? 'no number' : pointsAsText(points)}
+    </Cell>
+  );
+}
