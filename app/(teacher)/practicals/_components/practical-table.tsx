@@ -1,8 +1,8 @@
 import Link from 'next/link';
 import { Cell, HeadCell, RowHead, Table, TableBody, TableHead } from '@/components/table/table';
+import { LocalTime } from '@/components/ui/local-time';
 import type { PracticalListItem } from '@/lib/data/practicals/list-practicals';
 import { archivePracticalAction, copyPracticalAction } from '../actions';
-import { LocalTime } from './local-time';
 import { PressForm } from './press-form';
 import { sayPieces } from './say-pieces';
 import { SourceLine } from './source-line';

@@ -1,9 +1,9 @@
 'use client';
 
 import Link from 'next/link';
-import { LocalTime } from '@/app/(teacher)/practicals/_components/local-time';
 import { PressForm } from '@/app/(teacher)/practicals/_components/press-form';
 import { offerPracticalAction } from '@/app/(teacher)/practicals/actions';
+import { LocalTime } from '@/components/ui/local-time';
 import { Heading } from '@/components/ui/titles';
 import type { PracticalView } from '@/lib/data/practicals/read-practical';
 import { DepartmentNote } from './department-note';

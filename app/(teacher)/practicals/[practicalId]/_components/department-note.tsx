@@ -1,6 +1,6 @@
 'use client';
 
-import { LocalTime } from '@/app/(teacher)/practicals/_components/local-time';
+import { LocalTime } from '@/components/ui/local-time';
 import { PhraseList } from '@/components/ui/phrase-list';
 import { Heading } from '@/components/ui/titles';
 import type { DepartmentRubric } from '@/lib/data/practicals/department-rubric';

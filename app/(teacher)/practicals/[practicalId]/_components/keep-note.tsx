@@ -1,6 +1,6 @@
 'use client';
 
-import { LocalTime } from '@/app/(teacher)/practicals/_components/local-time';
+import { LocalTime } from '@/components/ui/local-time';
 import type { KeepState } from './draft-keeper';
 
 /** Where what is typed stands. */

@@ -1,9 +1,9 @@
 'use client';
 
-import { LocalTime } from '@/app/(teacher)/practicals/_components/local-time';
 import { Cell, HeadCell, RowHead, Table, TableBody, TableHead } from '@/components/table/table';
 import { Button } from '@/components/ui/button';
 import { Dialog } from '@/components/ui/dialog';
+import { LocalTime } from '@/components/ui/local-time';
 import { draftDifferences } from '@/lib/practicals/field-names';
 import type { DraftDesk } from './use-draft';
 
