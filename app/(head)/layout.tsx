@@ -5,6 +5,7 @@ import { DeskShell } from '@/components/shell/desk-shell';
 
 const NAV = [
   { href: '/department', label: 'department' },
+  { href: '/department/shared', label: 'shared' },
   { href: '/gradebook', label: 'gradebook' },
 ];
 
