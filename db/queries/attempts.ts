@@ -33,6 +33,8 @@ export function selectAttempts(tx: Transaction, schoolId: string, sittingIds: re
       scorePoints: scoreSheets.scorePoints,
       provisionalPoints: scoreSheets.provisionalPoints,
       totalPoints: scoreSheets.totalPoints,
+      heldPoints: scoreSheets.heldPoints,
+      accommodationId: scoreSheets.accommodationId,
       complete: scoreSheets.complete,
       conflicts: scoreSheets.conflicts,
       finished: scoreSheets.finished,

@@ -1,4 +1,5 @@
 import { and, asc, desc, eq, inArray, sql } from 'drizzle-orm';
+import { alias } from 'drizzle-orm/pg-core';
 import type { Transaction } from '@/db/client';
 import {
   attempts,
@@ -114,6 +115,54 @@ export function selectOwnEvents(tx: Transaction, schoolId: string, attemptIds: r
 
 export type OwnEventRow = Awaited<ReturnType<typeof selectOwnEvents>>[number];
 
+export interface ToldBefore {
+  status: 'scored' | 'absent' | 'excused' | 'zero' | 'not read';
+  score: number | null;
+  total: number;
+}
+
+/** What the publication before told of the same attempt; null where there was none. */
+const toldBefore = sql<ToldBefore | null>`(
+  select json_build_object('status', told.status, 'score', told.score_points, 'total', told.total_points)
+  from ${results} told join ${publications} earlier
+    on earlier.school_id = told.school_id and earlier.id = told.publication_id
+  where told.school_id = ${results.schoolId} and told.attempt_id = ${results.attemptId}
+    and earlier.number < ${publications.number}
+  order by earlier.number desc limit 1)`;
+
+/** The sittings of a student in which the latest publication told another result than the one before it. */
+export async function selectChangedResults(
+  tx: Transaction,
+  schoolId: string,
+  studentId: string,
+): Promise<string[]> {
+  const rows = await tx
+    .selectDistinctOn([attempts.sittingId], {
+      sittingId: attempts.sittingId,
+      status: results.status,
+      score: results.scorePoints,
+      total: results.totalPoints,
+      before: toldBefore,
+    })
+    .from(results)
+    .innerJoin(attempts, and(eq(attempts.schoolId, results.schoolId), eq(attempts.id, results.attemptId)))
+    .innerJoin(
+      publications,
+      and(eq(publications.schoolId, results.schoolId), eq(publications.id, results.publicationId)),
+    )
+    .where(and(eq(results.schoolId, schoolId), eq(attempts.studentId, studentId)))
+    .orderBy(asc(attempts.sittingId), desc(attempts.number), desc(publications.number));
+  return rows.filter(isCorrected).map(({ sittingId }) => sittingId);
+}
+
+/** Whether a result says something else than it did before. */
+export function isCorrected({ before, ...now }: ToldBefore & { before: ToldBefore | null }): boolean {
+  if (before === null) return false;
+  return before.status !== now.status || before.score !== now.score || before.total !== now.total;
+}
+
+const heldVersion = alias(rubricVersions, 'held_version');
+
 /** What the latest publication said of the student's latest attempt that was published; nothing before the first. */
 export async function selectOwnResult(
   tx: Transaction,
@@ -132,13 +181,16 @@ export async function selectOwnResult(
       scorePoints: results.scorePoints,
       totalPoints: results.totalPoints,
       bonusPoints: results.bonusPoints,
+      heldPoints: results.heldPoints,
+      heldVersionNumber: heldVersion.number,
+      accommodationId: results.accommodationId,
       predictedPoints: results.predictedPoints,
       measuredAt: results.measuredAt,
       sheet: results.sheet,
       ownSheet: results.ownSheet,
       judgement: results.judgement,
       publishedAt: publications.publishedAt,
-      publicationNumber: publications.number,
+      before: toldBefore,
       versionNumber: rubricVersions.number,
       task: rubricVersions.task,
       form: rubricVersions.form,
@@ -158,6 +210,10 @@ export async function selectOwnResult(
         eq(rubricVersions.schoolId, publications.schoolId),
         eq(rubricVersions.id, publications.rubricVersionId),
       ),
+    )
+    .leftJoin(
+      heldVersion,
+      and(eq(heldVersion.schoolId, results.schoolId), eq(heldVersion.id, results.heldVersionId)),
     )
     .where(
       and(

@@ -139,6 +139,10 @@ export const explanationSchema = z.strictObject({
   kept: z.strictObject({ points, ofTotal: points }),
   floorGives: points,
   bonus: points,
+  /** Added because an earlier version gave more and nobody was to drop; part of the score. */
+  held: z.strictObject({ points, versionNumber: z.int() }).nullable(),
+  /** Priced by a modified rubric. */
+  modified: z.boolean(),
   rest: points,
   roundTo: points,
   daysLate: z.int(),

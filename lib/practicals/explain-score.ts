@@ -30,6 +30,8 @@ export interface ScoreExplanation {
   floorGives: Points;
   floorGivesOfTotal: Points;
   bonus: Points;
+  /** What an earlier version gave more, which a move that lets nobody drop has kept; on the scale of the total. */
+  held: Points;
   /** What lateness, the ceiling and rounding together add or take, on the scale of the total. */
   rest: Points;
   score: Points | null;
@@ -39,10 +41,16 @@ type BareRow = Omit<LossRow, 'ofTotal'>;
 
 /**
  * Where every lost point of a score sheet went. The rows add up in both scales: `lost` is the sum of the rows,
- * `kept` is the whole less `lost` plus what the floor gives, and kept + bonus + rest is the score. Shares of the total are hundredths, each
+ * `kept` is the whole less `lost` plus what the floor gives, and kept + bonus + held + rest is the score: the sheet's own
+ * and what is held. Shares of the total are hundredths, each
  * rounded down and the missing hundredths given to the largest remainders, first rows first. Pure; never fails.
  */
-export function explainScore(rubric: Rubric, sheet: ScoreSheet, bonus: Points): ScoreExplanation {
+export function explainScore(
+  rubric: Rubric,
+  sheet: ScoreSheet,
+  bonus: Points,
+  held: Points = 0,
+): ScoreExplanation {
   const bare = [...sheet.pieces.flatMap((piece) => pieceRows(rubric, piece)), ...workRows(sheet)];
   const { possible, total, raw, lost } = sheet;
   const scale = (points: Points) =>
@@ -50,7 +58,7 @@ export function explainScore(rubric: Rubric, sheet: ScoreSheet, bonus: Points): 
   const keptOfTotal = scale(raw);
   const floorGives = raw - (possible - lost);
   const lostOfTotal = total - scale(possible - lost);
-  const score = sheet.score ?? sheet.provisional;
+  const own = sheet.score ?? sheet.provisional;
   return {
     rows: shareOut(bare, lostOfTotal, possible, total),
     lost: { points: lost, ofTotal: lostOfTotal },
@@ -60,8 +68,9 @@ export function explainScore(rubric: Rubric, sheet: ScoreSheet, bonus: Points): 
     floorGives,
     floorGivesOfTotal: keptOfTotal - (total - lostOfTotal),
     bonus,
-    rest: score === null ? 0 : score - keptOfTotal - bonus,
-    score,
+    held: own === null ? 0 : held,
+    rest: own === null ? 0 : own - keptOfTotal - bonus,
+    score: own === null ? null : own + held,
   };
 }
 

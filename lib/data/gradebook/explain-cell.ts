@@ -1,8 +1,16 @@
 import 'server-only';
+import type { Transaction } from '@/db/client';
+import type { AttemptRow } from '@/db/queries/attempts';
+import type { ResultRow } from '@/db/queries/publications';
 import { selectSection } from '@/db/queries/sections';
+import { selectPricedVersions } from '@/db/queries/sheets';
 import { cellInput, type ExplanationView } from '@/lib/contracts/gradebook';
 import { judgementSchema, scoreSheetSchema } from '@/lib/contracts/results';
-import { type Attempt, scoreAttempt } from '@/lib/scoring';
+import { type Attempt, type Rubric, scoreAttempt } from '@/lib/scoring';
+import { modifyRubric } from '@/lib/scoring/modification';
+import { loadModifications } from '../pricing/load-pricing';
+import { holdPoints, priceUnder } from '../pricing/price-work';
+import { storedAttempt } from '../pricing/stored-attempt';
 import { sectionSubject } from '../sections/section-view';
 import { defineVerb } from '../verb';
 import { countedScore, redoInWords } from './counted-score';
@@ -27,13 +35,50 @@ export const explainCell = defineVerb({
     );
     const row = found(sitting.attempts.find((each) => each.attemptId === attemptId));
     await logView({ subjectKind: 'attempt', subjectId: attemptId, aboutPersonId: row.studentId });
-    return explain(sitting, { row, result: sitting.latest?.results.get(attemptId) });
+    const result = sitting.latest?.results.get(attemptId);
+    const terms = result ? await termsOfResult(tx, sitting, result) : termsOfRecord(sitting, row);
+    return explain(sitting, { row, result }, terms);
   },
 });
 
-function explain(sitting: LoadedSitting, { row, result }: CellAttempt): ExplanationView {
+/** By what a sheet was priced, and what was held beside it. */
+interface Terms {
+  rubric: Rubric;
+  modified: boolean;
+  held: ExplanationView['held'];
+}
+
+async function termsOfResult(tx: Transaction, sitting: LoadedSitting, result: ResultRow): Promise<Terms> {
+  const { schoolId, accommodationId, heldPoints, heldVersionId } = result;
+  const { rubric } = sitting.latest?.version ?? sitting.version;
+  const modifications = await loadModifications(tx, schoolId, [accommodationId]);
+  const modification = accommodationId === null ? undefined : modifications.get(accommodationId);
+  const [version] = heldVersionId === null ? [] : await selectPricedVersions(tx, schoolId, [heldVersionId]);
+  return {
+    rubric: modification ? modifyRubric(rubric, modification) : rubric,
+    modified: accommodationId !== null,
+    held: version ? { points: heldPoints, versionNumber: version.number } : null,
+  };
+}
+
+function termsOfRecord(sitting: LoadedSitting, row: AttemptRow): Terms {
+  const pricing = sitting.pricingOf(row.attemptId);
+  const work = { bench: row.recorded === null ? NOTHING : storedAttempt(row.recorded), own: null };
+  const { points, version } = holdPoints(pricing, priceUnder(pricing, work), work);
+  return {
+    rubric: pricing.rubric,
+    modified: pricing.accommodationId !== null,
+    held: version && { points, versionNumber: version.number },
+  };
+}
+
+function explain(
+  sitting: LoadedSitting,
+  { row, result }: CellAttempt,
+  { rubric, modified, held }: Terms,
+): ExplanationView {
   const version = result && sitting.latest ? sitting.latest.version : sitting.version;
-  const { task, form, rubric } = version;
+  const { task, form } = version;
   const { redo } = form.policies;
   const stored = scoreSheetSchema.nullable().parse(result ? result.sheet : row.sheet);
   const sheet = stored ?? scoreAttempt(rubric, NOTHING);
@@ -63,8 +108,10 @@ function explain(sitting: LoadedSitting, { row, result }: CellAttempt): Explanat
     })),
     counted: countedScore(redo, scores)?.score ?? null,
     redo: attempts.length > 1 ? redoInWords(redo) : null,
-    ...explainRows(task, rubric, sheet, bonus),
+    ...explainRows(task, rubric, sheet, bonus, held?.points),
     bonus,
+    held,
+    modified,
     roundTo: rubric.roundTo,
     daysLate: row.daysLate,
     predicted: result?.predictedPoints ?? null,

@@ -9,8 +9,14 @@ type Rows = Pick<
 >;
 
 /** A sheet's explanation in words and figures that a page can show; the rows add up as `explainScore` promises. */
-export function explainRows(task: Task, rubric: Rubric, sheet: ScoreSheet, bonus: Points): Rows {
-  const { rows, lost, kept, possible, total, floorGives, rest } = explainScore(rubric, sheet, bonus);
+export function explainRows(
+  task: Task,
+  rubric: Rubric,
+  sheet: ScoreSheet,
+  bonus: Points,
+  held: Points = 0,
+): Rows {
+  const { rows, lost, kept, possible, total, floorGives, rest } = explainScore(rubric, sheet, bonus, held);
   return {
     rows: rows.map((row) => rowOf(task, rubric, row)),
     free: freeSizes(rubric, sheet),

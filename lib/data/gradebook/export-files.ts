@@ -13,6 +13,7 @@ import { CSV_TYPE } from './csv-type';
 import { type CsvTable, type ExportSection, gradesTable, sizesTable } from './export-rows';
 import { exportFileName } from './file-name';
 import { type LoadedSitting, loadSittings } from './load-gradebook';
+import { loadPlainSheets, type PlainSheets } from './plain-sheets';
 
 export interface SentFileView {
   /** Null where this installation keeps no files. */
@@ -33,7 +34,7 @@ export const exportSizes = exporter('sizes', sizesTable);
 
 function exporter(
   kind: 'grades' | 'sizes',
-  tableOf: (section: ExportSection, sittings: readonly LoadedSitting[]) => CsvTable,
+  tableOf: (section: ExportSection, sittings: readonly LoadedSitting[], plain: PlainSheets) => CsvTable,
 ) {
   return defineVerb({
     action: 'grades.export',
@@ -43,7 +44,7 @@ function exporter(
       const section = found(await selectSection(tx, actor.schoolId, input.sectionId));
       authorize(sectionSubject(section));
       const sittings = await publishedSittings(context);
-      const table = tableOf(section, sittings);
+      const table = tableOf(section, sittings, await loadPlainSheets(tx, actor.schoolId, sittings));
       const text = writeCsv(table.header, table.rows);
       const subject = input.sittingId ? (sittings[0]?.title ?? '') : section.name;
       const fileName = exportFileName({ period: section.period, subject, kind });

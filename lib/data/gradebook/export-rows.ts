@@ -6,6 +6,7 @@ import { pieceLabel } from '@/lib/practicals/task';
 import { AXES, type Axis, type PieceSheet, type Points, type SizeSheet } from '@/lib/scoring';
 import type { LoadedSitting, LoadedVersion } from './load-gradebook';
 import { localTime } from './local-time';
+import type { PlainSheets } from './plain-sheets';
 
 export interface ExportSection {
   period: string;
@@ -60,10 +61,17 @@ export function gradesTable(section: ExportSection, sittings: readonly LoadedSit
   return { header: GRADES, rows };
 }
 
-/** One row a size of every scored attempt, lengths as exact decimals in the rubric's unit. */
-export function sizesTable(section: ExportSection, sittings: readonly LoadedSitting[]): CsvTable {
+/**
+ * One row a size of every scored attempt, lengths as exact decimals in the rubric's unit. Every student's sizes are
+ * priced by the sitting's own rubric, so that a modified one does not show in the file: `plain` has their sheets.
+ */
+export function sizesTable(
+  section: ExportSection,
+  sittings: readonly LoadedSitting[],
+  plain: PlainSheets,
+): CsvTable {
   const rows = publishedOf(section, sittings).flatMap(({ result, who, version }) => {
-    const sheet = scoreSheetSchema.nullable().parse(result.sheet);
+    const sheet = plain.get(result.attemptId) ?? scoreSheetSchema.nullable().parse(result.sheet);
     return (sheet?.pieces ?? []).flatMap((piece) => sizeRows(version, piece, who));
   });
   return { header: SIZES, rows };

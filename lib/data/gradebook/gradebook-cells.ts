@@ -2,9 +2,11 @@ import type { AttemptRow } from '@/db/queries/attempts';
 import type { ResultRow } from '@/db/queries/publications';
 import type { GradebookCell } from '@/lib/contracts/gradebook';
 import { scoreSheetSchema } from '@/lib/contracts/results';
-import { type Rubric, type ScoreSheet, scoreAttempt } from '@/lib/scoring';
+import type { ScoreSheet } from '@/lib/scoring';
 import type { RedoPolicy } from '@/lib/scoring/rubric-form';
-import { attemptSchema } from '@/lib/scoring/schemas';
+import { sheetUnder } from '../pricing/price-work';
+import type { Pricing } from '../pricing/pricing';
+import { storedAttempt } from '../pricing/stored-attempt';
 import { sameJson } from '../sittings/same-json';
 import { countedScore } from './counted-score';
 import { countPieces, lossBySide } from './loss-by-side';
@@ -19,7 +21,7 @@ export interface CellAttempt {
 export function cellOf(
   attempts: readonly CellAttempt[],
   policy: RedoPolicy,
-  { rubric, notArrived }: { rubric: Rubric; notArrived: number },
+  { pricingOf, notArrived }: { pricingOf(attemptId: string): Pricing; notArrived: number },
 ): GradebookCell | null {
   const published = attempts.filter(({ result }) => result !== undefined);
   const shown = published.at(-1) ?? attempts.at(-1);
@@ -48,7 +50,7 @@ export function cellOf(
     status: result.status === 'not read' && counted ? 'scored' : result.status,
     score: counted?.score ?? null,
     total: counted?.total ?? result.totalPoints,
-    changed: attempts.some((attempt) => isChanged(attempt, rubric)),
+    changed: attempts.some((attempt) => isChanged(attempt, pricingOf(attempt.row.attemptId))),
   };
 }
 
@@ -67,14 +69,18 @@ export function recordingOf(row: AttemptRow): Pick<GradebookCell, 'status' | 'sc
 }
 
 /** Whether what is recorded now would be told otherwise than it was, the bonus apart. */
-export function isChanged({ row, result }: CellAttempt, rubric: Rubric): boolean {
+export function isChanged({ row, result }: CellAttempt, pricing: Pricing): boolean {
   const now = statusNow(row);
   if (!result) return row.recorded !== null || row.standing !== 'expected';
   if (now !== result.status) return true;
   if (now !== 'scored') return false;
+  // What was held is held no longer once a move was made as it is, or taken back.
+  if (result.heldPoints > 0 && !pricing.held.some(({ versionId }) => versionId === result.heldVersionId)) {
+    return true;
+  }
   const told = scoreSheetSchema.parse(result.sheet);
-  const recorded = attemptSchema.parse(row.recorded);
-  const sheet = scoreAttempt(rubric, { ...recorded, bonus: result.bonusPoints });
+  const recorded = storedAttempt(row.recorded);
+  const sheet = sheetUnder(pricing, { ...recorded, bonus: result.bonusPoints });
   return sameJson(told) !== sameJson(sheet);
 }
 

@@ -13,6 +13,8 @@ import type { Rubric } from '@/lib/scoring';
 import type { RubricForm } from '@/lib/scoring/rubric-form';
 import { rubricFormSchema } from '@/lib/scoring/rubric-form-schema';
 import { rubricSchema } from '@/lib/scoring/schemas';
+import { loadPricing } from '../pricing/load-pricing';
+import type { Pricing } from '../pricing/pricing';
 
 export interface LoadedVersion {
   versionId: string;
@@ -30,6 +32,8 @@ export interface LoadedSitting {
   /** The version the sitting stands under. */
   version: LoadedVersion;
   attempts: AttemptRow[];
+  /** By what an attempt is priced as it stands. */
+  pricingOf(attemptId: string): Pricing;
   latest: { publication: PublicationRow; version: LoadedVersion; results: Map<string, ResultRow> } | null;
 }
 
@@ -44,6 +48,16 @@ export async function loadSittings(
   const ids = sittings.map(({ sittingId }) => sittingId);
   const attempts = await selectAttempts(tx, schoolId, ids);
   const latest = await loadLatest(tx, schoolId, ids);
+  const pricings = await loadPricing(
+    tx,
+    schoolId,
+    attempts.map(({ attemptId }) => attemptId),
+  );
+  const pricingOf = (attemptId: string) => {
+    const pricing = pricings.get(attemptId);
+    if (!pricing) throw new Error(`attempt ${attemptId} has no price`);
+    return pricing;
+  };
   const versionOf = versionReader(tx, schoolId);
   const loaded: LoadedSitting[] = [];
   for (const { sittingId, title, state, openedAt, rubricVersionId } of sittings) {
@@ -55,6 +69,7 @@ export async function loadSittings(
       openedAt,
       version: await versionOf(rubricVersionId),
       attempts: attempts.filter((row) => row.sittingId === sittingId),
+      pricingOf,
       latest: told ? { ...told, version: await versionOf(told.publication.rubricVersionId) } : null,
     });
   }

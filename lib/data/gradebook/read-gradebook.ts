@@ -84,7 +84,7 @@ function scopeOf({ role, personId, departmentId }: Actor) {
 }
 
 function headOf(sitting: LoadedSitting, missing: Missing): GradebookView['sittings'][number] {
-  const { sittingId, title, open, openedAt, version, latest, attempts } = sitting;
+  const { sittingId, title, open, openedAt, version, latest, attempts, pricingOf } = sitting;
   const notArrived = missing
     .filter((row) => row.sittingId === sittingId)
     .reduce((sum, row) => sum + row.missing, 0);
@@ -98,7 +98,7 @@ function headOf(sitting: LoadedSitting, missing: Missing): GradebookView['sittin
       number: latest.publication.number,
       publishedAt: latest.publication.publishedAt.toISOString(),
       changedSince: attempts.filter((row) =>
-        isChanged({ row, result: latest.results.get(row.attemptId) }, version.rubric),
+        isChanged({ row, result: latest.results.get(row.attemptId) }, pricingOf(row.attemptId)),
       ).length,
     },
     notArrived,
@@ -106,7 +106,7 @@ function headOf(sitting: LoadedSitting, missing: Missing): GradebookView['sittin
 }
 
 function cellIn(
-  { attempts, latest, version }: LoadedSitting,
+  { attempts, latest, version, pricingOf }: LoadedSitting,
   studentId: string,
   notArrived: ReadonlyMap<string, number>,
 ): GradebookCell | null {
@@ -115,7 +115,7 @@ function cellIn(
     own.map((row) => ({ row, result: latest?.results.get(row.attemptId) })),
     (latest?.version ?? version).form.policies.redo,
     {
-      rubric: version.rubric,
+      pricingOf,
       notArrived: own.reduce((sum, { attemptId }) => sum + (notArrived.get(attemptId) ?? 0), 0),
     },
   );

@@ -1,5 +1,5 @@
 import 'server-only';
-import { selectOwnAttempts, selectOwnEvents } from '@/db/queries/own';
+import { selectChangedResults, selectOwnAttempts, selectOwnEvents } from '@/db/queries/own';
 import { noInput } from '@/lib/contracts/own';
 import { countOwnSizes, type OwnEvent, ownRecordOf } from '@/lib/practicals/own-record';
 import { rubricSchema } from '@/lib/scoring/schemas';
@@ -19,6 +19,8 @@ export interface OwnTaskRow {
   stage: TaskStage;
   /** A further attempt is open beside the result of the one before. */
   redo: boolean;
+  /** The latest publication told this student another result than the one before it. */
+  scoreChanged: boolean;
   /** Own sizes that a lock no longer waits for, of all. */
   sizes: { of: number; done: number };
 }
@@ -32,18 +34,20 @@ export const listTasks = defineVerb({
     const attemptIds = rows.map(({ attemptId }) => attemptId);
     const stored = attemptIds.length > 0 ? await selectOwnEvents(tx, actor.schoolId, attemptIds) : [];
     const events = stored.map(ownEventOf);
-    return rows.map((row) =>
-      taskRow(
+    const changed = new Set(await selectChangedResults(tx, actor.schoolId, actor.personId));
+    return rows.map((row) => ({
+      ...taskRow(
         row,
         events.filter(({ attemptId }) => attemptId === row.attemptId),
       ),
-    );
+      scoreChanged: changed.has(row.sittingId),
+    }));
   },
 });
 
 type AttemptRow = Awaited<ReturnType<typeof selectOwnAttempts>>[number];
 
-function taskRow(row: AttemptRow, events: readonly OwnEvent[]): OwnTaskRow {
+function taskRow(row: AttemptRow, events: readonly OwnEvent[]): Omit<OwnTaskRow, 'scoreChanged'> {
   const { sittingId, title, sectionName, period, dueOn, attemptNumber } = row;
   const record = ownRecordOf(events);
   return {

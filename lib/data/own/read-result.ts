@@ -1,11 +1,13 @@
 import 'server-only';
-import { selectOwnResult } from '@/db/queries/own';
+import { isCorrected, selectOwnResult } from '@/db/queries/own';
 import { ownSittingInput } from '@/lib/contracts/own';
 import { judgementSchema, scoreSheetSchema } from '@/lib/contracts/results';
 import { type Task, taskSchema } from '@/lib/practicals/task';
 import type { Points, Policies, PredictionJudgement, Rubric, ScoreSheet } from '@/lib/scoring';
+import { modifyRubric } from '@/lib/scoring/modification';
 import { rubricFormSchema } from '@/lib/scoring/rubric-form-schema';
 import { rubricSchema } from '@/lib/scoring/schemas';
+import { loadModifications } from '../pricing/load-pricing';
 import { defineVerb } from '../verb';
 
 export interface OwnResultView {
@@ -15,12 +17,16 @@ export interface OwnResultView {
   attemptNumber: number;
   versionNumber: number;
   publishedAt: string;
-  /** True when an earlier publication said something else. */
+  /** True when the publication before told this student something else: another status, score or total. */
   corrected: boolean;
+  /** What that one told; null unless corrected. */
+  before: { score: Points | null; total: Points } | null;
   status: 'scored' | 'absent' | 'excused' | 'zero' | 'not read';
   score: Points | null;
   total: Points;
   bonus: Points;
+  /** The part of the score that an earlier version gave beyond this one. */
+  held: { points: Points; versionNumber: number } | null;
   predicted: Points | null;
   measuredAt: string | null;
   task: Task;
@@ -38,6 +44,12 @@ export const readResult = defineVerb({
   async run({ actor, input, tx, found, authorize }): Promise<OwnResultView> {
     const row = found(await selectOwnResult(tx, actor.schoolId, actor.personId, input.sittingId));
     authorize({ schoolId: row.schoolId, studentId: row.studentId });
+    const { accommodationId, heldPoints, heldVersionNumber, before } = row;
+    const modifications = await loadModifications(tx, actor.schoolId, [accommodationId]);
+    const modification = accommodationId === null ? undefined : modifications.get(accommodationId);
+    const rubric = rubricSchema.parse(row.rubric);
+    const now = { status: row.status, score: row.scorePoints, total: row.totalPoints };
+    const corrected = isCorrected({ ...now, before });
     return {
       sittingId: input.sittingId,
       sectionName: row.sectionName,
@@ -45,15 +57,17 @@ export const readResult = defineVerb({
       attemptNumber: row.attemptNumber,
       versionNumber: row.versionNumber,
       publishedAt: row.publishedAt.toISOString(),
-      corrected: row.publicationNumber > 1,
+      corrected,
+      before: corrected && before ? { score: before.score, total: before.total } : null,
       status: row.status,
       score: row.scorePoints,
       total: row.totalPoints,
       bonus: row.bonusPoints,
+      held: heldVersionNumber === null ? null : { points: heldPoints, versionNumber: heldVersionNumber },
       predicted: row.predictedPoints,
       measuredAt: row.measuredAt?.toISOString() ?? null,
       task: taskSchema.parse(row.task),
-      rubric: rubricSchema.parse(row.rubric),
+      rubric: modification ? modifyRubric(rubric, modification) : rubric,
       policies: rubricFormSchema.parse(row.form).policies,
       sheet: scoreSheetSchema.nullable().parse(row.sheet),
       ownSheet: scoreSheetSchema.nullable().parse(row.ownSheet),

@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { PriceBook } from '@/lib/data/pricing/pricing';
 import { judgeResult, type RecordedAttempt } from '@/lib/data/sittings/judge-result';
 import { sameJson } from '@/lib/data/sittings/same-json';
 import { type Attempt, scoreAttempt } from '@/lib/scoring';
@@ -6,6 +7,7 @@ import { defaultForm, defaultRubric } from '@/tests/support/rubrics';
 
 const rubric = defaultRubric();
 const policy = defaultForm().policies.prediction;
+const pricing = new PriceBook([{ versionId: 'v1', number: 1, rubric, policy }]).pricing('v1', []);
 
 const complete: Attempt = {
   bonus: 0,
@@ -38,8 +40,7 @@ const own = (more: { locked?: boolean; late?: boolean } = {}): RecordedAttempt['
 
 const judge = (attempt: Partial<RecordedAttempt>, countLate = false) =>
   judgeResult(
-    rubric,
-    policy,
+    pricing,
     { standing: 'expected', recorded: complete, conflicts: 0, measuredAt: AT, own: null, ...attempt },
     countLate,
   );
