@@ -10,9 +10,12 @@ import { ARDMORE, CEDAR_FORK, SITTINGS } from './plan';
 import { seedPracticals } from './practicals';
 import { seedPublication } from './publications';
 import { makeRandom, type Random } from './random';
+import { seedSharing } from './sharing';
 import { seedSitting } from './sittings';
 
 const SEED = 20_261_201;
+/** Of its own, so that what is shared can change without changing what was measured. */
+const SHARING_SEED = 20_261_202;
 
 /**
  * Loads the invented demo into an empty, migrated database through the owner's connection and gives back the
@@ -48,4 +51,5 @@ async function seedWork(tx: Transaction, random: Random, school: SeededSchool): 
   for (const plan of SITTINGS.filter(({ section }) => school.sections.has(section))) {
     await seedPublication(tx, random, school, await seedSitting(tx, random, school, versions, plan));
   }
+  if (school.plan === CEDAR_FORK) await seedSharing(tx, makeRandom(SHARING_SEED), school, versions);
 }

@@ -27,10 +27,19 @@ interface PracticalPlan {
   school: 'cedar-fork' | 'ardmore';
   publishedOn: string;
   copiedFrom?: string;
+  /** Since when its teacher offers it to the department. */
+  offeredOn?: string;
+  /** Why it differs from what the department approved, in its teacher's words. */
+  reason?: string;
   /** What its teacher changed in the starter before publishing version 1. */
   change?(draft: PracticalDraft): void;
   /** A correction, published later as version 2; its sittings stay on the version they were opened under. */
   correction?: { on: string; change(draft: PracticalDraft): void };
+}
+
+/** Leaving a guide out was cheaper than cutting one badly; seen only after the first grades were out. */
+export function cheapMissingGuide(draft: PracticalDraft): void {
+  for (const line of draft.lines) if (line.id === 'guide') line.missing = '6';
 }
 
 /** Short cuts are charged from 1/64 on, twice as dear: the room next door pays more for the same wood. */
@@ -71,10 +80,8 @@ const PRACTICALS: PracticalPlan[] = [
     owner: 'lindqvist',
     school: 'cedar-fork',
     publishedOn: '2026-09-08',
-    // Leaving a guide out was cheaper than cutting one badly; seen only after the first grades were out.
-    change: (draft) => {
-      for (const line of draft.lines) if (line.id === 'guide') line.missing = '6';
-    },
+    offeredOn: '2026-09-09',
+    change: cheapMissingGuide,
     correction: {
       on: '2026-10-05',
       change: (draft) => {
@@ -88,6 +95,7 @@ const PRACTICALS: PracticalPlan[] = [
     owner: 'lindqvist',
     school: 'cedar-fork',
     publishedOn: '2026-10-12',
+    offeredOn: '2026-10-13',
   },
   {
     key: 'desk-caddy',
@@ -95,6 +103,7 @@ const PRACTICALS: PracticalPlan[] = [
     owner: 'lindqvist',
     school: 'cedar-fork',
     publishedOn: '2026-11-02',
+    offeredOn: '2026-11-03',
   },
   {
     key: 'desk-caddy-okonjo',
@@ -104,6 +113,7 @@ const PRACTICALS: PracticalPlan[] = [
     publishedOn: '2026-11-05',
     copiedFrom: 'desk-caddy',
     change: dearerShortCuts,
+    reason: 'Period 5 glues its caddies up the same week: a short end leaves a gap that cannot be closed.',
   },
   {
     key: 'stair-tower',
@@ -112,7 +122,14 @@ const PRACTICALS: PracticalPlan[] = [
     school: 'cedar-fork',
     publishedOn: '2026-11-23',
   },
-  { key: 'gauge-kit', starter: 'gauge-kit', owner: 'brandt', school: 'ardmore', publishedOn: '2026-11-02' },
+  {
+    key: 'gauge-kit',
+    starter: 'gauge-kit',
+    owner: 'brandt',
+    school: 'ardmore',
+    publishedOn: '2026-11-02',
+    offeredOn: '2026-11-02',
+  },
   {
     key: 'gauge-kit-sorley',
     starter: 'gauge-kit',
@@ -159,9 +176,20 @@ async function seedPractical(
     title: draft.title,
     unit: draft.unit,
     ...(source && { copiedFromVersionId: source.id, sourceKind: 'adopted' as const }),
+    ...(plan.offeredOn && { offeredAt: morningOf(plan.offeredOn) }),
     createdAt: morningOf(plan.publishedOn),
   });
-  const version = await seedVersion(tx, random, school, practicalId, ownerId, draft, 1, plan.publishedOn);
+  const version = await seedVersion(
+    tx,
+    random,
+    school,
+    practicalId,
+    ownerId,
+    draft,
+    1,
+    plan.publishedOn,
+    plan.reason,
+  );
   if (plan.correction) {
     plan.correction.change(draft);
     await seedVersion(tx, random, school, practicalId, ownerId, draft, 2, plan.correction.on);
@@ -186,6 +214,7 @@ async function seedVersion(
   draft: PracticalDraft,
   number: number,
   day: string,
+  differenceReason?: string,
 ): Promise<SeededVersion> {
   const parsed = parseDraft(draft);
   if (!parsed.ok) throw new Error(`the demo's ${draft.title} cannot be read: ${JSON.stringify(parsed)}`);
@@ -200,6 +229,7 @@ async function seedVersion(
     form,
     rubric,
     engineVersion: ENGINE_VERSION,
+    differenceReason,
     publishedBy: ownerId,
     publishedAt: morningOf(day),
   });

@@ -8,6 +8,9 @@ import { databaseUrl, ownerSql } from '../../support/database';
 const FINGERPRINT_TABLES = [
   'people',
   'enrollments',
+  'practicals',
+  'practical_drafts',
+  'rubric_approvals',
   'rubric_versions',
   'attempts',
   'reading_events',
@@ -93,6 +96,22 @@ describe('the demo', () => {
         scoreAttempt(rubricSchema.parse(rubric), attemptSchema.parse(recorded)),
       );
     }
+  });
+
+  test('shares practicals: on offer, copied, one approved, and a difference with its reason', async () => {
+    const [found] = await ownerSql()`select
+      (select array_agg(title order by title) from practicals where offered_at is not null) as offered,
+      (select count(*)::int from practicals where source_kind = 'adopted') as adopted,
+      (select array_agg(p.title || ' ' || v.number) from rubric_approvals a
+        join rubric_versions v on v.id = a.rubric_version_id join practicals p on p.id = a.practical_id
+        where a.ended_at is null) as approved,
+      (select count(*)::int from rubric_versions where difference_reason is not null) as reasons`;
+    expect(found).toEqual({
+      offered: ['Bench-hook kit', 'Desk caddy', 'Gauge kit', 'Six-stick puzzle'],
+      adopted: 3,
+      approved: ['Desk caddy 1'],
+      reasons: 1,
+    });
   });
 
   test('has an account of every role to sign in with', () => {
