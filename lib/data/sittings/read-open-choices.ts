@@ -4,13 +4,16 @@ import { selectGivenPracticals, selectVersionsToGive } from '@/db/queries/sittin
 import { openChoicesInput } from '@/lib/contracts/sittings';
 import { asSectionView, type SectionView } from '../sections/section-view';
 import { defineVerb } from '../verb';
+import { type VariantFamily, variantFamilies } from './variant-families';
 
 export interface OpenChoicesView {
   sections: (SectionView & { versions: VersionChoice[] })[];
+  families: VariantFamily[];
 }
 
 export interface VersionChoice {
   versionId: string;
+  practicalId: string;
   title: string;
   number: number;
   latest: boolean;
@@ -34,7 +37,10 @@ export const readOpenChoices = defineVerb({
       if (departments.has(departmentId)) continue;
       departments.set(departmentId, await selectVersionsToGive(tx, schoolId, { departmentId, personId }));
     }
+    const periodOf = new Map(sections.map(({ sectionId, period }) => [sectionId, period]));
+    const have = given.map((row) => ({ ...row, period: periodOf.get(row.sectionId) ?? '' }));
     return {
+      families: await variantFamilies(tx, schoolId, [...departments.values()].flat(), have),
       sections: sections.map((section) => {
         const has = new Set(
           given.flatMap((row) => (row.sectionId === section.sectionId ? [row.practicalId] : [])),
@@ -54,7 +60,7 @@ function latestFirst(rows: readonly VersionRow[]): VersionChoice[] {
   const choices = rows.map(({ versionId, practicalId, title, number, approved, own, ownerName }) => {
     const latest = !seen.has(practicalId);
     seen.add(practicalId);
-    return { versionId, title, number, latest, approved, ownerName: own ? null : ownerName };
+    return { versionId, practicalId, title, number, latest, approved, ownerName: own ? null : ownerName };
   });
   return [...choices.filter(({ latest }) => latest), ...choices.filter(({ latest }) => !latest)];
 }
