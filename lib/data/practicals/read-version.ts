@@ -5,8 +5,8 @@ import type { Task } from '@/lib/practicals/task';
 import type { Rubric } from '@/lib/scoring';
 import type { RubricForm } from '@/lib/scoring/rubric-form';
 import { defineVerb } from '../verb';
-import { practicalSubject } from './practical-subject';
 import { storedVersion } from './stored';
+import { loadVersionSubject } from './version-subject';
 
 export interface VersionView {
   versionId: string;
@@ -24,7 +24,7 @@ export const readVersion = defineVerb({
   input: readVersionInput,
   async run({ actor, input, tx, found, authorize }): Promise<VersionView> {
     const row = found(await selectVersion(tx, actor.schoolId, input.versionId));
-    authorize(practicalSubject(row));
+    authorize(await loadVersionSubject(tx, row));
     const { versionId, practicalId, number, ownerName, publishedAt } = row;
     return {
       versionId,
