@@ -6,6 +6,7 @@ import { DeskShell } from '@/components/shell/desk-shell';
 const NAV = [
   { href: '/department', label: 'department' },
   { href: '/department/shared', label: 'shared' },
+  { href: '/department/modified', label: 'modified rubrics' },
   { href: '/gradebook', label: 'gradebook' },
 ];
 

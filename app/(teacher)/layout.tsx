@@ -19,6 +19,8 @@ const NAV: Partial<Record<Role, { href: string; label: string }[]>> = {
   aide: [ROUNDS],
   head: [
     { href: '/department', label: 'department' },
+    { href: '/department/shared', label: 'shared' },
+    { href: '/department/modified', label: 'modified rubrics' },
     { href: '/gradebook', label: 'gradebook' },
   ],
 };

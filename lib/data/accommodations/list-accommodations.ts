@@ -7,7 +7,6 @@ import { defineVerb } from '../verb';
 import { type AccommodationView, asAccommodationView } from './accommodation-view';
 
 export interface SectionAccommodationsView extends SectionView {
-  timeZone: string;
   standing: AccommodationView[];
   ended: AccommodationView[];
 }
@@ -20,7 +19,7 @@ export const listAccommodations = defineVerb({
     const { sectionId } = input;
     const section = found(await selectSection(tx, actor.schoolId, sectionId));
     authorize(sectionSubject(section));
-    const { departmentId, timeZone } = section;
+    const { departmentId } = section;
     const rows = await selectAccommodations(tx, actor.schoolId, { departmentId, sectionId });
     const views = rows.map(asAccommodationView);
     await logView({
@@ -30,7 +29,6 @@ export const listAccommodations = defineVerb({
     });
     return {
       ...asSectionView(section),
-      timeZone,
       standing: views.filter(({ ended }) => ended === null),
       ended: views.filter(({ ended }) => ended !== null),
     };

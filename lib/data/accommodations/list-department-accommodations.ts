@@ -7,7 +7,6 @@ import { defineVerb } from '../verb';
 import { type AccommodationView, asAccommodationView } from './accommodation-view';
 
 export interface DepartmentAccommodationsView {
-  timeZone: string;
   /** Sections with a modified rubric, as the department's list has them. */
   sections: (SectionView & { accommodations: AccommodationView[] })[];
   /** Those whose student is in none of the department's sections any more. */
@@ -31,7 +30,6 @@ export const listDepartmentAccommodations = defineVerb({
     });
     const known = new Set(sections.map(({ sectionId }) => sectionId));
     return {
-      timeZone: sections[0]?.timeZone ?? 'UTC',
       sections: sections
         .map((section) => ({
           ...asSectionView(section),

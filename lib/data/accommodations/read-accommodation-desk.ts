@@ -1,6 +1,11 @@
 import 'server-only';
 import type { Transaction } from '@/db/client';
-import { selectAccommodation, selectRecorded, selectSectionSittings } from '@/db/queries/accommodation-lists';
+import {
+  selectAccommodation,
+  selectAccommodations,
+  selectRecorded,
+  selectSectionSittings,
+} from '@/db/queries/accommodation-lists';
 import { selectRoster } from '@/db/queries/rosters';
 import { selectSection } from '@/db/queries/sections';
 import { accommodationDeskInput } from '@/lib/contracts/accommodations';
@@ -27,6 +32,8 @@ export interface AccommodationDeskView extends SectionView {
   students: { studentId: string; familyName: string; givenName: string }[];
   chosen: string | null;
   sittings: DeskSitting[];
+  /** What stands for the chosen student in this section already, by its sitting; null: for the term. */
+  standing: { accommodationId: string; sittingId: string | null }[];
   /** The one that is to be replaced; its student and its scope stay. */
   change: { accommodationId: string; sittingId: string | null; modification: Modification } | null;
 }
@@ -63,6 +70,9 @@ export const readAccommodationDesk = defineVerb({
       })),
       chosen,
       sittings: await readSittings(tx, schoolId, sectionId, chosen),
+      standing: (await selectAccommodations(tx, schoolId, { departmentId: section.departmentId, sectionId }))
+        .filter(({ studentId, endedAt }) => studentId === chosen && endedAt === null)
+        .map(({ accommodationId, sittingId }) => ({ accommodationId, sittingId })),
       change: change && {
         accommodationId: change.accommodationId,
         sittingId: change.sittingId,

@@ -16,6 +16,7 @@ export function RosterActions({ section: { sectionId }, here }: RosterActionsPro
       <AddStudent sectionId={sectionId} />
       <LinkButton href={`/periods/${sectionId}/import`}>import names</LinkButton>
       {waiting ? <LinkButton href={`/periods/${sectionId}/slips`}>make slips</LinkButton> : null}
+      <LinkButton href={`/periods/${sectionId}/modified`}>modified rubrics</LinkButton>
       <LinkButton href={`/gradebook/${sectionId}`}>gradebook</LinkButton>
       <LinkButton kind="act" href={`/sittings/new?section=${sectionId}`}>
         give a practical
