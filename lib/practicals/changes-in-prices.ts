@@ -1,4 +1,4 @@
-import type { Line } from '@/lib/scoring';
+import type { Line, Rubric } from '@/lib/scoring';
 import type { RubricForm } from '@/lib/scoring/rubric-form';
 import { capital, nowWas, rowChanges } from './change-words';
 import { changesInChecks, changesInPieceChecks } from './changes-in-checks';
@@ -11,10 +11,13 @@ import { priceSentences } from './compare-words';
 type Written = Omit<Compared, 'label'>;
 
 /** What another version prices, checks, totals or treats otherwise; lines that only one of the two has are left out. */
-export function changesInPrices(before: Written & { number: number }, now: Written): Phrase[] {
+export function changesInPrices(
+  before: Written & { number: number },
+  now: Written & { number?: number },
+): Phrase[] {
   const was = { ...before, label: `version ${before.number}` };
-  const is = { ...now, label: `version ${before.number + 1}` };
-  const lines = sameLines(before, now);
+  const is = { ...now, label: `version ${now.number ?? before.number + 1}` };
+  const lines = sameLines(before.rubric, now);
   const sizes = compareSizes(lines, [before.rubric.margin, now.rubric.margin]);
   const [lateWas, lateNow] = [before, now].map(({ form }) => lateWords(form.policies.late));
   return [
@@ -32,6 +35,12 @@ export function changesInPrices(before: Written & { number: number }, now: Writt
   ];
 }
 
+/** The sizes on which two versions of a practical part, with both prices, for a drawing of them. */
+export function changedSizes(before: Rubric, now: Pick<Written, 'task' | 'rubric'>): ComparedSizes[] {
+  const sizes = compareSizes(sameLines(before, now), [before.margin, now.rubric.margin]);
+  return sizes.filter(({ spans }) => spans.length > 0);
+}
+
 function lateWords(late: RubricForm['policies']['late']): string {
   return late ? `${late.perDay}% a day, ${late.max}% at most` : 'no loss';
 }
@@ -40,8 +49,8 @@ function lateWords(late: RubricForm['policies']['late']): string {
  * Each line of now with the one it was before: by id; one that was taken out and written anew is known by its name, else
  * by its pieces, so that its price can be set against the old one.
  */
-function sameLines(before: Written, now: Written): MatchedLine[] {
-  const left = [...before.rubric.lines];
+function sameLines(before: Rubric, now: Pick<Written, 'task' | 'rubric'>): MatchedLine[] {
+  const left = [...before.lines];
   const take = (line: Line, isSame: (old: Line) => boolean): MatchedLine[] => {
     const index = left.findIndex(isSame);
     const [old] = index < 0 ? [] : left.splice(index, 1);

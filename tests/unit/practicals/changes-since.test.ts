@@ -5,7 +5,7 @@ import { lengthAsTyped } from '@/lib/practicals/as-typed';
 import { changesSince } from '@/lib/practicals/changes-since';
 import type { Phrase } from '@/lib/practicals/compare-types';
 import { type Task, taskSchema } from '@/lib/practicals/task';
-import { compileRubric, type RubricForm, rubricFormSchema, type Share } from '@/lib/scoring';
+import { AXES, compileRubric, type RubricForm, rubricFormSchema, type Share } from '@/lib/scoring';
 import { comparedStarter } from '@/tests/support/compared';
 import { formArb } from '@/tests/support/form-arbitraries';
 import { type Change, changesOf } from '@/tests/support/one-change';
@@ -103,6 +103,19 @@ describe('a change in words', () => {
   const before = { ...comparedStarter('version 1'), number: 1 };
   const words = (change: Parameters<typeof comparedStarter>[1]) =>
     changesSince(before, comparedStarter('now', change)).map(inWords);
+
+  it('goes by the number of the version where it has one, else by the next', () => {
+    const dearer = (number?: number) => {
+      const now = comparedStarter('now', (draft) => {
+        for (const axis of AXES) draft.all.sizes[axis].under.beyond = '5';
+      });
+      return changesSince(before, { ...now, number })
+        .map(inWords)
+        .join(' ');
+    };
+    expect(dearer()).toContain('Version 2 ');
+    expect(dearer(7)).toContain('Version 7 ');
+  });
 
   it('names what is and what was, of the task', () => {
     expect(
