@@ -72,7 +72,8 @@ describe('the picture of who moves', () => {
           10_000,
           width,
         );
-        expect(layout.strokes.length + layout.squares.length).toBe(drawn.length);
+        const lower = layout.groups.reduce((sum, group) => sum + group.lower, 0);
+        expect(layout.strokes.length + layout.squares.length + lower).toBe(drawn.length);
         for (const { from, to, y, name, figure } of layout.strokes) {
           expect(Math.min(from, to)).toBeGreaterThanOrEqual(0);
           expect(Math.max(from, to)).toBeLessThanOrEqual(width);
@@ -92,6 +93,16 @@ describe('the picture of who moves', () => {
       }),
       { numRuns: 200 },
     );
+  });
+
+  it('says how many stay below its stretch instead of drawing them where they are not', () => {
+    const { squares, groups } = layOutMoves(
+      [mover('a', 92, 90), mover('zero', 0, 0), mover('b', 91, 91), mover('above', 102, 102)],
+      10_000,
+      640,
+    );
+    expect(squares.map(({ key }) => key)).toEqual(['b', 'above']);
+    expect(groups.at(-1)).toMatchObject({ words: 'stay', count: 3, lower: 1 });
   });
 
   it('marks any total without crowding the rule', () => {

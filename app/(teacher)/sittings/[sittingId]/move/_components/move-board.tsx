@@ -63,7 +63,7 @@ export function MoveBoard({ sittingId, versionId, toNumber, published, head, his
           />
         </div>
       ) : null}
-      <div className="grid gap-8 lg:col-start-2 lg:row-span-3 lg:row-start-1 xl:col-start-3">
+      <div className="max-lg:contents lg:col-start-2 lg:row-span-3 lg:row-start-1 lg:grid lg:gap-8 xl:col-start-3">
         {preview ? (
           <MoveDecision
             preview={preview}
@@ -73,7 +73,7 @@ export function MoveBoard({ sittingId, versionId, toNumber, published, head, his
             onMove={(holdHarmless) => move(preview, holdHarmless)}
           />
         ) : null}
-        {history}
+        <div className="max-lg:order-last">{history}</div>
       </div>
       {preview && preview.students.length > 0 ? (
         <div className="lg:col-start-1 xl:col-start-2 xl:row-start-2">

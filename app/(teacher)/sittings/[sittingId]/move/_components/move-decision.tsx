@@ -23,7 +23,7 @@ export function MoveDecision({ preview, published, held, onHeld, onMove }: MoveD
   const moveLabel = `move to version ${to.number}`;
   return (
     <section aria-label="the move" className="grid gap-4">
-      <ChoiceGroup legend="may anybody drop?">
+      <ChoiceGroup legend={<span className="text-heading text-ink">May anybody drop?</span>}>
         <RadioField
           name="held"
           value="no"

@@ -1,7 +1,14 @@
 import { hatchPath } from '@/components/rule/hatch';
 import { classNames } from '@/components/ui/class-names';
 import type { Points } from '@/lib/scoring';
-import { layOutMoves, type MoveLayout, type MoveMark, type Mover, type MoveStroke } from './move-layout';
+import {
+  layOutMoves,
+  type MoveGroup,
+  type MoveLayout,
+  type MoveMark,
+  type Mover,
+  type MoveStroke,
+} from './move-layout';
 
 interface MoveDrawingProps {
   movers: readonly Mover[];
@@ -16,7 +23,7 @@ interface MoveDrawingProps {
 export function MoveDrawing(props: MoveDrawingProps) {
   return (
     <>
-      <Drawing {...props} width={640} className="max-md:hidden" />
+      <Drawing {...props} width={580} className="max-md:hidden" />
       <Drawing {...props} width={358} className="md:hidden" />
     </>
   );
@@ -40,9 +47,9 @@ function Drawing({
     >
       <Guides layout={layout} />
       <Rule layout={layout} />
-      {layout.groups.map(({ words, count, y }) => (
-        <text key={words} x={1} y={y} fontSize={15} className="fill-ink font-[660]">
-          {groupWords(words, count, held)}
+      {layout.groups.map((group) => (
+        <text key={group.words} x={1} y={group.y} fontSize={15} className="fill-ink font-[660]">
+          {groupWords(group, held)}
         </text>
       ))}
       {layout.strokes.map((stroke) => (
@@ -61,10 +68,11 @@ function Drawing({
   );
 }
 
-function groupWords(words: 'drop' | 'gain' | 'stay', count: number, held: boolean): string {
+function groupWords({ words, count, lower }: MoveGroup, held: boolean): string {
   if (words === 'gain') return `${count} ${count === 1 ? 'gains' : 'gain'} +`;
-  if (words === 'stay') return `${count} ${count === 1 ? 'stays' : 'stay'}`;
-  return held ? `${count} held` : `${count} ${count === 1 ? 'drops' : 'drop'} −`;
+  if (words === 'drop') return held ? `${count} held` : `${count} ${count === 1 ? 'drops' : 'drop'} −`;
+  const further = lower > 0 ? `, ${lower} of them lower than this rule` : '';
+  return `${count} ${count === 1 ? 'stays' : 'stay'}${further}`;
 }
 
 /** Lines down from every numbered mark, so that a stroke far below can be read off. */

@@ -28,6 +28,8 @@ export interface MoveStroke {
 export interface MoveGroup {
   words: 'drop' | 'gain' | 'stay';
   count: number;
+  /** Of those who stay: how many have no square, as they stand below the rule's stretch. */
+  lower: number;
   y: number;
 }
 
@@ -97,7 +99,7 @@ export function layOutMoves(movers: readonly Mover[], total: Points, width: numb
   let y = EDGE;
   for (const [words, group] of [['drop', drops] as const, ['gain', gains] as const]) {
     if (group.length === 0) continue;
-    groups.push({ words, count: group.length, y: y + HEAD - 6 });
+    groups.push({ words, count: group.length, lower: 0, y: y + HEAD - 6 });
     y += HEAD;
     for (const mover of group) {
       strokes.push(strokeOf(mover, words, y + pitch / 2, pitch >= NAMED, place, width));
@@ -105,8 +107,12 @@ export function layOutMoves(movers: readonly Mover[], total: Points, width: numb
     }
     y += 4;
   }
-  if (stays.length > 0) groups.push({ words: 'stay', count: stays.length, y: y + HEAD - 6 });
-  const stacked = stack(stays, place, low, high, point);
+  const shown = stays.filter(({ after }) => after >= low * 100);
+  if (stays.length > 0) {
+    const lower = stays.length - shown.length;
+    groups.push({ words: 'stay', count: stays.length, lower, y: y + HEAD - 6 });
+  }
+  const stacked = stack(shown, place, point);
   const base = y + (stays.length > 0 ? HEAD + stacked.height + 2 : 6);
   return {
     width,
@@ -126,12 +132,17 @@ function fromHighest(a: Mover, b: Mover): number {
   return b.before - a.before || b.after - a.after;
 }
 
-/** A stretch of whole fives that holds who moves; only if nobody does, who stays. Never shorter than can be read. */
+/**
+ * A stretch of whole fives that holds who moves and is never too short to be read; upwards who stays too, for a score
+ * far below all others would press the rest together.
+ */
 function stretchOf(movers: readonly Mover[], total: Points): [low: number, high: number] {
+  if (movers.length === 0) return [0, Math.max(FEWEST, total / 100)];
   const moving = movers.filter(({ before, after }) => before !== after);
-  const points = (moving.length > 0 ? moving : movers).flatMap(({ before, after }) => [before, after]);
-  if (points.length === 0) return [0, Math.max(FEWEST, total / 100)];
-  const [least, most] = [Math.min(...points), Math.max(...points)];
+  const least = Math.min(
+    ...(moving.length > 0 ? moving : movers).map((each) => Math.min(each.before, each.after)),
+  );
+  const most = Math.max(...movers.map(({ before, after }) => Math.max(before, after)));
   const ends = Math.ceil(total / 500) * 5;
   const high = Math.ceil((most + 50) / 500) * 5;
   const low = Math.floor((least - 50) / 500) * 5;
@@ -217,17 +228,11 @@ function marksOf(low: number, high: number, place: (points: Points) => number, p
   });
 }
 
-/** Who stays, one square each on the nearest whole point; who lies outside the rule's stretch at its end. */
-function stack(
-  stays: readonly Mover[],
-  place: (points: Points) => number,
-  low: number,
-  high: number,
-  point: number,
-) {
+/** Who stays, one square each on the nearest whole point. */
+function stack(stays: readonly Mover[], place: (points: Points) => number, point: number) {
   const columns = new Map<number, string[]>();
   for (const { key, after } of stays) {
-    const at = Math.min(high, Math.max(low, Math.round(after / 100)));
+    const at = Math.round(after / 100);
     columns.set(at, [...(columns.get(at) ?? []), key]);
   }
   const tallest = Math.max(0, ...[...columns.values()].map((keys) => keys.length));
