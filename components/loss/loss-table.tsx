@@ -5,16 +5,18 @@ import { isOneScale } from '@/lib/practicals/both-scales';
 import type { ScoreExplanation } from '@/lib/practicals/explain-score';
 import type { Points, Rubric } from '@/lib/scoring';
 import { LossCause, LossSizes } from './loss-cause';
-import { restWords } from './loss-words';
+import { heldWords, restWords } from './loss-words';
 
 interface LossTableProps {
   rubric: Rubric;
   explanation: ScoreExplanation;
   heading: string;
+  /** The version that gave more, where a score is held. */
+  heldFrom?: number | undefined;
 }
 
 /** Every lost point in a row of its own: target, reading, band, points and their share; they add up to the score. */
-export function LossTable({ rubric, explanation, heading }: LossTableProps) {
+export function LossTable({ rubric, explanation, heading, heldFrom }: LossTableProps) {
   const { rows, total } = explanation;
   const one = isOneScale(rubric);
   return (
@@ -45,14 +47,14 @@ export function LossTable({ rubric, explanation, heading }: LossTableProps) {
             </tr>
           ))}
         </TableBody>
-        <Sums rubric={rubric} explanation={explanation} />
+        <Sums rubric={rubric} explanation={explanation} heldFrom={heldFrom} />
       </Table>
     </section>
   );
 }
 
-function Sums({ rubric, explanation }: { rubric: Rubric; explanation: ScoreExplanation }) {
-  const { lost, kept, possible, bonus, rest, score, floorGives, floorGivesOfTotal } = explanation;
+function Sums({ rubric, explanation, heldFrom }: Omit<LossTableProps, 'heading'>) {
+  const { lost, kept, possible, bonus, held, rest, score, floorGives, floorGivesOfTotal } = explanation;
   const one = isOneScale(rubric);
   return (
     <TableFoot className="[&_tr+tr]:border-t [&_tr+tr]:border-hair">
@@ -77,6 +79,7 @@ function Sums({ rubric, explanation }: { rubric: Rubric; explanation: ScoreExpla
       {rest !== 0 ? (
         <Sum label={restWords(rubric, rest)} points={null} ofTotal={rest} one={one} plus />
       ) : null}
+      {held > 0 ? <Sum label={heldWords(heldFrom)} points={null} ofTotal={held} one={one} plus /> : null}
       {score === null ? null : <Sum label="score" points={null} ofTotal={score} one={one} strong />}
     </TableFoot>
   );

@@ -31,3 +31,10 @@ export function restWords(rubric: Rubric, rest: Points): string {
   if (late) return 'days late, and rounding';
   return ceiling ? 'held at the ceiling' : 'rounding';
 }
+
+/** Why more is given than this version's prices come to. */
+export function heldWords(version: number | undefined): string {
+  return version === undefined
+    ? 'held: nobody drops'
+    : `held: version ${version} gave more, and nobody drops`;
+}

@@ -1,79 +1,82 @@
 import { classNames } from '@/components/ui/class-names';
 import { lengthParts } from '@/components/ui/length-parts';
-import type { Length } from '@/lib/length';
-import type { Side } from './price-steps';
-import { placeOnFace, type RuleLayout } from './rule-layout';
+import type { Unit } from '@/lib/length';
+import { deviationOf, type PlacedKnife } from './knife-layout';
+import type { RuleLayout } from './rule-layout';
 import { RuleNumber } from './rule-number';
-import type { RuleScale } from './rule-scale';
-
-/** A band's edge on the rule: `within` away from the target, on one side. */
-export interface KnifeEdge {
-  side: Side;
-  within: Length;
-  /** The edge being moved. */
-  inHand?: boolean;
-}
 
 interface KnifeTabsProps {
-  edges: readonly KnifeEdge[];
-  scale: RuleScale;
+  knives: readonly PlacedKnife[];
   layout: RuleLayout;
+  unit: Unit;
 }
 
-const TAB = { width: 62, height: 30 };
+const keyOf = ({ edge, x }: PlacedKnife) => `${edge.side}${x}${edge.inHand ?? false}`;
 
 /** The line each knife strikes through the face. */
-export function KnifeLines({ edges, scale, layout }: KnifeTabsProps) {
-  return edges.map((edge) => {
-    const x = placeOnFace(edge.side === 'under' ? -edge.within : edge.within, scale, layout);
-    return (
-      <path
-        key={`${edge.side}${edge.within}`}
-        d={`M${x} ${layout.edge}V${layout.foot}`}
-        strokeDasharray={edge.inHand ? undefined : '10 3 2 3'}
-        className={classNames(
-          'fill-none',
-          edge.inHand
-            ? 'stroke-act [stroke-width:var(--pen-edge)]'
-            : 'stroke-ink [stroke-width:var(--pen-inside)]',
-        )}
-      />
-    );
-  });
+export function KnifeLines({ knives, layout }: Omit<KnifeTabsProps, 'unit'>) {
+  return knives.map((knife) => (
+    <path
+      key={keyOf(knife)}
+      d={`M${knife.x} ${layout.edge}V${layout.foot}`}
+      strokeDasharray={knife.edge.inHand ? undefined : '10 3 2 3'}
+      className={classNames(
+        'fill-none',
+        knife.edge.inHand
+          ? 'stroke-act [stroke-width:var(--pen-edge)]'
+          : 'stroke-ink [stroke-width:var(--pen-inside)]',
+      )}
+    />
+  ));
 }
 
 /** Each band edge as a marking knife: flat side on the line, bevel to the waste, its value in the tab. */
-export function KnifeTabs({ edges, scale, layout }: KnifeTabsProps) {
-  return edges.map((edge) => <KnifeTab key={`${edge.side}${edge.within}`} {...{ edge, scale, layout }} />);
+export function KnifeTabs({ knives, layout, unit }: KnifeTabsProps) {
+  // The knife in hand lies on top of its neighbours.
+  const laid = [...knives].sort((a, b) => Number(a.edge.inHand ?? false) - Number(b.edge.inHand ?? false));
+  return laid.map((knife) => <KnifeTab key={keyOf(knife)} {...{ knife, layout, unit }} />);
 }
 
-function KnifeTab({ edge, scale, layout }: { edge: KnifeEdge; scale: RuleScale; layout: RuleLayout }) {
-  const deviation = edge.side === 'under' ? -edge.within : edge.within;
-  const x = placeOnFace(deviation, scale, layout);
+function KnifeTab({ knife, layout, unit }: { knife: PlacedKnife; layout: RuleLayout; unit: Unit }) {
+  const { edge, x, tab, size } = knife;
   const out = edge.side === 'under' ? -1 : 1;
-  const top = layout.edge - TAB.height - 24;
-  const low = top + TAB.height;
-  const far = x + out * TAB.width;
-  const blade = `M${x} ${layout.edge}V${top}H${far}V${low}H${x + out * 22}Z`;
+  const low = tab.y + tab.height;
+  const far = x + out * tab.width;
+  const bevel = Math.min(layout.edge, low + tab.width * 0.38);
+  const blade = `M${x} ${layout.edge}V${tab.y}H${far}V${low}H${x + out * tab.width * 0.35}L${x} ${bevel}Z`;
   const held = edge.inHand === true;
+  const leaving = edge.onNeighbour === true;
   return (
     <g>
       <path
         d={blade}
         strokeLinejoin="miter"
+        strokeDasharray={leaving ? '6 4' : undefined}
         className={classNames(
           '[stroke-width:var(--pen-outline)]',
-          held ? 'fill-act stroke-act' : 'fill-plate stroke-ink',
+          held && !leaving ? 'fill-act stroke-act' : 'fill-plate stroke-ink',
+          leaving && 'stroke-act',
         )}
       />
-      {held ? <Arrowheads x={x} far={far} y={top + TAB.height / 2} /> : null}
-      <RuleNumber
-        parts={lengthParts(deviation, scale.unit, {}, true)}
-        x={x + (out * TAB.width) / 2}
-        baseline={top + 22}
-        size={23}
-        className={held ? 'fill-on-act' : 'fill-ink'}
-      />
+      {held && !leaving ? <Arrowheads x={x} far={far} y={tab.y + tab.height / 2} /> : null}
+      {leaving ? (
+        <text
+          x={x + (out * tab.width) / 2}
+          y={tab.y + tab.height * 0.7}
+          fontSize={size * 0.82}
+          className="fill-act font-[660] [text-anchor:middle]"
+        >
+          out
+        </text>
+      ) : (
+        <RuleNumber
+          parts={lengthParts(deviationOf(edge), unit, {}, true)}
+          x={x + (out * tab.width) / 2}
+          baseline={tab.y + tab.height * 0.5 + size * 0.34}
+          size={size}
+          className={held ? 'fill-on-act' : 'fill-ink'}
+        />
+      )}
     </g>
   );
 }

@@ -1,7 +1,8 @@
 import { classNames } from '@/components/ui/class-names';
 import type { Length } from '@/lib/length';
 import type { SizeRule } from '@/lib/scoring';
-import { type KnifeEdge, KnifeLines, KnifeTabs } from './knife-tabs';
+import { type KnifeEdge, layOutKnives } from './knife-layout';
+import { KnifeLines, KnifeTabs } from './knife-tabs';
 import { dearest, type PriceStep, priceAt, priceSteps } from './price-steps';
 import { BreakLines, FarColumns, PieceStrip } from './rule-bench-parts';
 import { RuleColumn } from './rule-column';
@@ -21,6 +22,8 @@ export interface RuleFaceProps extends RuleScale {
   /** Band edges as marking knives, for the rubric editor. */
   edges?: readonly KnifeEdge[];
   showPrices?: boolean;
+  /** Write the price on each step; the editor writes them in fields of its own. */
+  showPriceNumbers?: boolean;
   /** The reading just pressed, at the bench. */
   pressed?: Length | null;
   /** What is measured: "end 2, width". Begins what a screen reader says. */
@@ -41,7 +44,8 @@ export function RuleFace(props: RuleFaceProps) {
     pressed = null,
   } = props;
   const scale = { unit, target, graduation, span };
-  const layout = layOutRule(variant, scale, edges !== undefined);
+  const laid = edges ? layOutKnives(variant, scale, edges) : null;
+  const layout = laid?.layout ?? layOutRule(variant, scale);
   const steps = priceSteps(props.rule, props.margin);
   const columns = graduationsOf(scale);
   const rise = risePerPoint(dearest(steps), layout.price.perPoint, layout.price.limit);
@@ -58,8 +62,10 @@ export function RuleFace(props: RuleFaceProps) {
     >
       <Ground layout={layout} />
       {layout.far ? <PieceStrip layout={layout} scale={scale} reading={pressed} /> : null}
-      {showPrices ? <Prices {...{ layout, scale, steps, columns, rise }} /> : null}
-      {edges ? <KnifeLines edges={edges} scale={scale} layout={layout} /> : null}
+      {showPrices ? (
+        <Prices {...{ layout, scale, steps, columns, rise }} numbers={props.showPriceNumbers ?? true} />
+      ) : null}
+      {laid ? <KnifeLines {...laid} /> : null}
       {columns.map((column) => (
         <RuleColumn
           key={column.step}
@@ -71,7 +77,7 @@ export function RuleFace(props: RuleFaceProps) {
       {layout.far ? <FarColumns {...{ layout, steps, scale, rise, showPrices }} /> : null}
       <Frame layout={layout} />
       {layout.far ? <BreakLines layout={layout} /> : null}
-      {edges ? <KnifeTabs edges={edges} scale={scale} layout={layout} /> : null}
+      {laid ? <KnifeTabs {...laid} unit={unit} /> : null}
       <RulePointers pointers={props.pointers ?? []} scale={scale} layout={layout} />
     </svg>
   );
@@ -101,9 +107,10 @@ interface PricesProps {
   steps: readonly PriceStep[];
   columns: readonly Graduation[];
   rise: number;
+  numbers: boolean;
 }
 
-function Prices({ layout, scale, steps, columns, rise }: PricesProps) {
+function Prices({ layout, scale, steps, columns, rise, numbers }: PricesProps) {
   const { centre, pitch, price, foot, far } = layout;
   const treads = far
     ? treadsByColumn(steps, columns, (step) => centre + (step - 0.5) * pitch, pitch)
@@ -113,7 +120,7 @@ function Prices({ layout, scale, steps, columns, rise }: PricesProps) {
       treads={treads}
       foot={foot}
       rise={rise}
-      priceSize={far ? undefined : price.size}
+      priceSize={far || !numbers ? undefined : price.size}
       toneDepth={price.perPoint}
     />
   );

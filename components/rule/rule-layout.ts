@@ -56,7 +56,12 @@ const CUTS: Record<RuleVariant, Cut> = {
 };
 
 /** In the editor the knives carry the deviations, and the numbers take their room. */
-const KNIFE_CUT = { number: { size: 30, baseline: 88, stacked: false }, step: null };
+const KNIFE_CUTS: Record<RuleVariant, Partial<Cut>> = {
+  bench: {},
+  wide: { number: { size: 30, baseline: 88, stacked: false }, step: null },
+  card: { number: { size: 24, baseline: 70, stacked: false }, step: null, body: 168 },
+  phone: { body: 140, price: { size: 16, perPoint: 12, limit: 44 } },
+};
 
 /** Where everything on one rule face stands, in the px of its own drawing. */
 export interface RuleLayout extends Cut {
@@ -100,9 +105,17 @@ function widestNumber(scale: RuleScale, stacked: boolean): number {
   return Math.max(DIGIT, ...widths);
 }
 
-/** Lays out a rule face. Numbers that would not fit their column are set smaller at the bench, thinned out elsewhere. */
-export function layOutRule(variant: RuleVariant, scale: RuleScale, knives = false): RuleLayout {
-  const cut = knives ? { ...CUTS[variant], ...KNIFE_CUT } : CUTS[variant];
+/**
+ * Lays out a rule face. Numbers that would not fit their column are set smaller at the bench, thinned out elsewhere.
+ * `knifeHead` is the room that the knives of the rubric editor take above the edge; null where there are none.
+ */
+export function layOutRule(
+  variant: RuleVariant,
+  scale: RuleScale,
+  knifeHead: number | null = null,
+): RuleLayout {
+  const knives = knifeHead !== null;
+  const cut = knives ? { ...CUTS[variant], ...KNIFE_CUTS[variant], head: knifeHead } : CUTS[variant];
   const columns = 2 * scale.span + 1;
   const far = variant === 'bench';
   const width = far ? (columns + 2) * BENCH_COLUMN : cut.width;

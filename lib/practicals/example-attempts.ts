@@ -3,6 +3,7 @@ import {
   type Attempt,
   AXES,
   type Axis,
+  type Check,
   type Line,
   type Piece,
   projectAttempt,
@@ -14,7 +15,7 @@ import type { Phrase } from './compare-types';
 
 /** An invented attempt that shows what a rubric gives. */
 export interface ExampleAttempt {
-  id: 'free' | 'one' | 'line' | 'fence' | 'step' | 'missing' | 'gross';
+  id: 'perfect' | 'typical' | 'poor' | 'one' | 'line' | 'fence' | 'step' | 'missing' | 'gross';
   label: Phrase;
   attempt: Attempt;
 }
@@ -28,10 +29,12 @@ export interface ExampleSize {
 type Deviate = (line: Line, ordinal: number, axis: Axis) => Length;
 
 /**
- * Attempts that show the price of usual errors under this rubric: nothing wrong; one size short and the same size of
- * the whole line shorter still; every width out by a fence; every size one step over; one piece missing; one so far
- * off that it is not that part. Deviations are edges of the rubric's own bands, so that each example changes
- * when the bands do. Pure; without a gross limit, or for a limit that leaves no length, that example is left out.
+ * Attempts that show what a rubric gives: a perfect one; a typical one, with every third size one step off, by turns
+ * under and over; a poor one, with every second size at the end of its last band, by turns, and the dearest fault of
+ * the first check on every second piece. Then usual errors: one size short and the same size of the whole line shorter
+ * still; every width out by a fence; every size one step over; one piece missing; one so far off that it is not
+ * that part. Deviations are edges of the rubric's own bands, so that each example changes when the bands do. Sizes are
+ * counted through the cut list. Pure; without a gross limit, or for one that leaves no length, that one is left out.
  */
 export function exampleAttempts(rubric: Rubric, about?: ExampleSize): ExampleAttempt[] {
   const line = rubric.lines.find(({ id }) => id === about?.lineId) ?? rubric.lines[0];
@@ -44,7 +47,17 @@ export function exampleAttempts(rubric: Rubric, about?: ExampleSize): ExampleAtt
   const one: Deviate = (each, ordinal, on) => (isOf(each) && ordinal === 1 && on === axis ? -near : 0);
   const all: Deviate = (each, _, on) => (isOf(each) && on === axis ? -far : 0);
   return [
-    { id: 'free', label: ['every size in its free band'], attempt: attemptOf(rubric, () => 0) },
+    { id: 'perfect', label: ['perfect: every size in its free band'], attempt: targetAttempt(rubric) },
+    {
+      id: 'typical',
+      label: ['typical: every third size a step off'],
+      attempt: attemptOf(rubric, byTurns(rubric, 3, 0)),
+    },
+    {
+      id: 'poor',
+      label: ['poor: every second size far off, and a check failed'],
+      attempt: poorAttempt(rubric),
+    },
     {
       id: 'one',
       label: shortBy(nameOne(line), axis, near),
@@ -72,16 +85,12 @@ export function exampleAttempts(rubric: Rubric, about?: ExampleSize): ExampleAtt
     {
       id: 'missing',
       label: [`${nameOne(last)} missing`],
-      attempt: withPiece(
-        attemptOf(rubric, () => 0),
-        last.id,
-        (piece) => ({
-          ...piece,
-          state: 'missing',
-          sizes: {},
-          checks: {},
-        }),
-      ),
+      attempt: withPiece(targetAttempt(rubric), last.id, (piece) => ({
+        ...piece,
+        state: 'missing',
+        sizes: {},
+        checks: {},
+      })),
     },
     ...grossExample(rubric, last),
   ];
@@ -112,6 +121,41 @@ function pricedEdges(
   const priced = bands.filter(({ lose }) => lose > 0);
   const near = priced[0]?.within ?? Math.max(free * 2, FINE[unit]);
   return [near, priced.at(-1)?.within ?? near];
+}
+
+/** Every n-th size of the cut list off by its first (0) or last (1) priced edge, by turns under and over. */
+function byTurns(rubric: Rubric, every: number, edge: 0 | 1): Deviate {
+  const before = new Map<string, number>();
+  rubric.lines.reduce((pieces, line) => {
+    before.set(line.id, pieces);
+    return pieces + line.quantity;
+  }, 0);
+  return (line, ordinal, axis) => {
+    const count = ((before.get(line.id) ?? 0) + ordinal - 1) * AXES.length + AXES.indexOf(axis) + 1;
+    if (count % every !== 0) return 0;
+    const side = (count / every) % 2 === 1 ? 'under' : 'over';
+    const off = pricedEdges(rubric, line, axis, side)[edge];
+    return side === 'under' ? -off : off;
+  };
+}
+
+function poorAttempt(rubric: Rubric): Attempt {
+  const attempt = attemptOf(rubric, byTurns(rubric, 2, 1));
+  attempt.pieces.forEach((piece, index) => {
+    const check = rubric.lines.find(({ id }) => id === piece.lineId)?.checks[0];
+    if (check && index % 2 === 0) piece.checks[check.id] = dearestLevel(check);
+  });
+  return attempt;
+}
+
+function dearestLevel({ levels }: Check): number {
+  const most = Math.max(...levels.map(({ lose }) => lose));
+  return levels.findIndex(({ lose }) => lose === most);
+}
+
+/** Every piece there and every size on its target, every check passed. */
+export function targetAttempt(rubric: Rubric): Attempt {
+  return attemptOf(rubric, () => 0);
 }
 
 function attemptOf(rubric: Rubric, deviate: Deviate): Attempt {

@@ -1,5 +1,6 @@
-import type { Axis } from '@/lib/scoring';
+import type { Axis, Rubric } from '@/lib/scoring';
 import type { PracticalDraft } from './draft';
+import { type FindingFix, fixOf } from './finding-fixes';
 
 /** What a review of the compiled rubric says, by line and axis. */
 export interface RubricFinding {
@@ -9,12 +10,12 @@ export interface RubricFinding {
   text: string;
 }
 
-/** The same at the field that causes it; `setTo` settles it when typed there. `isNote`: for information only. */
+/** The same at the field that causes it. `isNote`: for information only. */
 export interface PlacedFinding {
   path: string;
   code: string;
   text: string;
-  setTo: string | null;
+  fix: FindingFix | null;
   isNote: boolean;
 }
 
@@ -27,23 +28,29 @@ const AT_FIELD: Record<string, string> = {
 
 /**
  * Puts each finding at the field of the draft that it comes from: at all lines' field where the line has no exception
- * of its own. The same finding of several lines stands once at a shared field. Pure.
+ * of its own, with the one press that settles it where that is clear. The same finding of several lines stands once at
+ * a shared field, and its press settles all of them. `rubric` is what the draft compiles to. Pure.
  */
-export function placeFindings(draft: PracticalDraft, findings: readonly RubricFinding[]): PlacedFinding[] {
-  const placed = new Map<string, PlacedFinding>();
-  for (const { code, text, lineId, axis } of findings) {
-    const path = AT_FIELD[code] ?? pathOf(draft, code, lineId, axis);
-    const key = `${path} ${code}`;
-    if (placed.has(key)) continue;
-    placed.set(key, {
-      path,
-      code,
-      text: withoutPlace(text),
-      setTo: code === 'missing-is-cheaper' ? 'worth' : null,
-      isNote: code === 'symmetric-undersize',
-    });
+export function placeFindings(
+  draft: PracticalDraft,
+  rubric: Rubric,
+  findings: readonly RubricFinding[],
+): PlacedFinding[] {
+  const groups = new Map<string, { path: string; first: RubricFinding; all: RubricFinding[] }>();
+  for (const finding of findings) {
+    const path = AT_FIELD[finding.code] ?? pathOf(draft, finding);
+    const key = `${path} ${finding.code}`;
+    const group = groups.get(key) ?? { path, first: finding, all: [] };
+    group.all.push(finding);
+    groups.set(key, group);
   }
-  return [...placed.values()];
+  return [...groups.values()].map(({ path, first, all }) => ({
+    path,
+    code: first.code,
+    text: withoutPlace(first.text),
+    fix: fixOf(path, all, draft, rubric),
+    isNote: first.code === 'symmetric-undersize',
+  }));
 }
 
 /** Beside its field a finding need not name the line and axis again. */
@@ -52,7 +59,7 @@ function withoutPlace(text: string): string {
   return rest.charAt(0).toUpperCase() + rest.slice(1);
 }
 
-function pathOf(draft: PracticalDraft, code: string, lineId?: string, axis?: Axis): string {
+function pathOf(draft: PracticalDraft, { code, lineId, axis }: RubricFinding): string {
   const index = draft.lines.findIndex(({ id }) => id === lineId);
   const line = draft.lines[index];
   if (code === 'missing-is-cheaper') {

@@ -8,11 +8,15 @@ const GRADUATIONS: Record<Unit, Length[]> = {
 
 /**
  * The stretch of rule on which every band edge of the prices can be seen: the coarsest graduation that all edges stand
- * on and that shows them within 13 graduations, and three more to each side; never fewer than six. Pure.
+ * on and that shows them within 13 graduations, and `room` more to each side; never fewer than twice that. Pure.
  *
  * @example ruleScaleOf([defaultRule], 'in') // { graduation: 7_937_500, span: 6 }: 1/32 in
  */
-export function ruleScaleOf(rules: readonly SizeRule[], unit: Unit): { graduation: Length; span: number } {
+export function ruleScaleOf(
+  rules: readonly SizeRule[],
+  unit: Unit,
+  room = 3,
+): { graduation: Length; span: number } {
   const bands = rules.flatMap(({ over, under }) => [...over, ...under]);
   const edges = bands.map(({ within }) => within).filter((within) => within > 0);
   const [coarse = 1, ...finer] = GRADUATIONS[unit];
@@ -21,5 +25,5 @@ export function ruleScaleOf(rules: readonly SizeRule[], unit: Unit): { graduatio
   const seen = [coarse, ...finer].filter((graduation) => farthest / graduation <= 13);
   const graduation =
     seen.find(fits) ?? (seen.length > 0 ? coarse : Math.ceil(farthest / 8 / coarse) * coarse);
-  return { graduation, span: Math.max(6, Math.ceil(farthest / graduation) + 3) };
+  return { graduation, span: Math.max(2 * room, Math.ceil(farthest / graduation) + room) };
 }

@@ -30,6 +30,11 @@ export function countTask(task: Task): { pieces: number; sizes: number } {
   return { pieces, sizes: pieces * AXES.length };
 }
 
+/** How many sizes one attempt under a price list has. */
+export function countSizes({ lines }: { lines: readonly { quantity: number }[] }): number {
+  return lines.reduce((sum, { quantity }) => sum + quantity, 0) * AXES.length;
+}
+
 /** "side 2", or the bare label when the line is a single piece. */
 export function pieceLabel(line: { label: string; quantity: number }, ordinal: number): string {
   return line.quantity > 1 ? `${line.label} ${ordinal}` : line.label;

@@ -19,15 +19,20 @@ function dearestFirst(rubric: Rubric): Points[] {
     .sort((a, b) => b - a);
 }
 
+/** What the dearest half of the pieces can lose together. */
+export function loseByDearestHalf(rubric: Rubric): { half: number; of: number; lost: Points } {
+  const pieces = dearestFirst(rubric);
+  const half = Math.ceil(pieces.length / 2);
+  return { half, of: pieces.length, lost: pieces.slice(0, half).reduce((sum, lose) => sum + lose, 0) };
+}
+
 export const findShortStart: ReviewRule = (rubric) => {
   const { start } = rubric;
   if (rubric.basis !== 'start' || start === null) return [];
-  const pieces = dearestFirst(rubric);
-  const half = Math.ceil(pieces.length / 2);
-  const lost = pieces.slice(0, half).reduce((sum, lose) => sum + lose, 0);
+  const { half, of, lost } = loseByDearestHalf(rubric);
   if (lost <= start) return [];
   const text =
-    `The score starts at ${sayPoints(start)}, but ${half} of ${pieces.length} pieces can lose ${sayPoints(lost)}: ` +
+    `The score starts at ${sayPoints(start)}, but ${half} of ${of} pieces can lose ${sayPoints(lost)}: ` +
     'after that nothing more can be lost. Raise the starting score, or lower the prices.';
   return [{ text }];
 };

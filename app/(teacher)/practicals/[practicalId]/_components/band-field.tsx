@@ -1,12 +1,11 @@
 'use client';
 
-import { useId } from 'react';
 import { classNames } from '@/components/ui/class-names';
 import { Fraction } from '@/components/ui/fraction';
 import { lengthParts } from '@/components/ui/length-parts';
 import { parseLength } from '@/lib/length';
 import { textAt, typeAt } from '@/lib/practicals/draft-paths';
-import { useEditor } from './editor-context';
+import { fieldId, useEditor } from './editor-context';
 import type { SizeRuleDesk } from './use-size-rule';
 
 interface BandFieldProps {
@@ -22,8 +21,8 @@ interface BandFieldProps {
 /** A figure of a price. It types into every size that is priced together with this one. */
 export function BandField({ size, suffix, label, showLabel, isLength, placeholder }: BandFieldProps) {
   const { desk, unit, errorsAt, focused, setFocused } = useEditor();
-  const id = useId();
   const path = `${size.base}.${suffix}`;
+  const id = fieldId(path);
   const text = textAt(desk.draft, path);
   const errors = errorsAt(path);
   const read = isLength && text !== '' ? parseLength(text, unit) : null;

@@ -11,11 +11,18 @@ export function readSize(text: string, unit: Unit): Length | null {
 
 const SOME_SIZE = { in: 4 * TICKS_PER_INCH, mm: 100 * TICKS_PER_MM };
 
-/** The target that a price is drawn for: the line's own, the first that can be read for all lines, else any. */
+/** The line that a price is drawn and tried for: its own, or of all lines the first that is priced so. */
+export function exampleLineOf(draft: PracticalDraft, lineId: string | null, axis: Axis): DraftLine | null {
+  const lines = draft.lines.filter(({ id, sizes }) =>
+    lineId === null ? sizes[axis] === null : id === lineId,
+  );
+  return lines.find((line) => readSize(line[axis], draft.unit) !== null) ?? null;
+}
+
+/** The target that a price is drawn for: that line's, else any. */
 export function targetOf(draft: PracticalDraft, lineId: string | null, axis: Axis): Length {
-  const lines = lineId === null ? draft.lines : draft.lines.filter(({ id }) => id === lineId);
-  const sizes = lines.map((line) => readSize(line[axis], draft.unit));
-  return sizes.find((size) => size !== null) ?? SOME_SIZE[draft.unit];
+  const line = exampleLineOf(draft, lineId, axis) ?? draft.lines[0];
+  return (line && readSize(line[axis], draft.unit)) ?? SOME_SIZE[draft.unit];
 }
 
 export function marginOf(draft: PracticalDraft): Length {

@@ -1,29 +1,31 @@
 'use client';
 
-import { classNames } from '@/components/ui/class-names';
+import type { ReactNode } from 'react';
 import { SelectField } from '@/components/ui/select-field';
 import { Heading } from '@/components/ui/titles';
+import { ruleEffects } from '@/lib/practicals/rule-effects';
 import { ChecksFields } from './checks-fields';
 import { DraftField } from './draft-field';
 import { useEditor } from './editor-context';
+import { PieceRules } from './piece-rules';
 import { PredictionFields } from './prediction-fields';
+import { ReadingRules } from './reading-rules';
+import { RuleEffect } from './rule-effect';
 import { TotalFields } from './total-fields';
-
-const GROUP = 'grid content-start gap-4';
 
 /** What holds for the attempt as a whole: how losses become a score, and what lateness, a redo and a prediction do. */
 export function RulesStep() {
-  const { desk } = useEditor();
+  const { desk, parsed } = useEditor();
   const { draft } = desk;
+  const effects =
+    parsed.ok && parsed.rubric.lines.length > 0 ? ruleEffects(parsed.rubric, parsed.form) : null;
   return (
-    <div className="grid gap-x-12 gap-y-10 lg:grid-cols-2">
+    <div className="grid gap-x-12 gap-y-10 lg:grid-cols-[repeat(2,minmax(0,1fr))]">
       <div className="grid content-start gap-10">
-        <section aria-labelledby="total-heading" className={GROUP}>
-          <Heading id="total-heading">Total</Heading>
-          <TotalFields />
-        </section>
-        <section aria-labelledby="redo-heading" className={GROUP}>
-          <Heading id="redo-heading">Redo</Heading>
+        <Group id="total" title="Total">
+          <TotalFields effects={effects} />
+        </Group>
+        <Group id="redo" title="Redo">
           <SelectField
             label="of the first attempt and its redo counts"
             className="max-w-72"
@@ -54,56 +56,63 @@ export function RulesStep() {
               label="a redo counts up to, in percent"
               kind="number"
               className="max-w-56"
+              hint="A first attempt above it keeps its score."
             />
           )}
-        </section>
-        <section aria-labelledby="late-heading" className={GROUP}>
-          <Heading id="late-heading">Late</Heading>
-          <p className="text-label text-ink-2">Days late are recorded. Empty: they cost nothing.</p>
+          <RuleEffect effects={effects} rule="redo" />
+        </Group>
+        <Group id="late" title="Late">
+          <p className="max-w-[52ch] text-label text-ink-2">
+            Days late are recorded either way. Leave both empty and they cost nothing.
+          </p>
           <div className="grid max-w-96 grid-cols-2 gap-4">
             <DraftField path="late.perDay" label="percent a day" kind="number" />
             <DraftField path="late.max" label="percent at most" kind="number" />
           </div>
-        </section>
+          <RuleEffect effects={effects} rule="late" />
+        </Group>
       </div>
       <div className="grid content-start gap-10">
-        <section aria-labelledby="reading-heading" className={GROUP}>
-          <Heading id="reading-heading">Reading</Heading>
-          <DraftField
-            path="reading.margin"
-            label="reading margin"
-            className="max-w-56"
-            hint="The small free distance past every band’s edge that covers the instrument."
-          />
-          <DraftField
-            path="reading.grossLimit"
-            label="gross limit"
-            optional
-            className="max-w-56"
-            hint="A size further off than this is not that part: the piece loses its worth."
-          />
-          <DraftField
-            path="reading.readTo"
-            label="deviations rounded to"
-            optional
-            className="max-w-56"
-            hint="Empty: scored as read."
-          />
-        </section>
-        <section aria-labelledby="prediction-heading" className={GROUP}>
-          <Heading id="prediction-heading">Prediction</Heading>
-          <PredictionFields />
-        </section>
+        <Group id="reading" title="Reading">
+          <ReadingRules effects={effects} />
+        </Group>
+        <Group id="pieces" title="Pieces, all lines">
+          <PieceRules effects={effects} />
+        </Group>
+        <Group id="prediction" title="Prediction">
+          <PredictionFields effects={effects} />
+        </Group>
       </div>
-      <section aria-labelledby="work-heading" className={classNames(GROUP, 'lg:col-span-2')}>
-        <Heading id="work-heading">Checks of the whole work</Heading>
+      <Group id="work" title="Checks of the whole work" className="lg:col-span-2">
+        <p className="max-w-[52ch] text-label text-ink-2">
+          Judged once for each student. One that nobody records is taken as you say here, or keeps the sheet
+          open until somebody does.
+        </p>
         <ChecksFields
           base="workChecks"
           checks={draft.workChecks}
           listIn={(next) => next.workChecks}
           emptyText="None. Add one for what is judged once for each student, such as a label."
         />
-      </section>
+      </Group>
     </div>
+  );
+}
+
+interface GroupProps {
+  id: string;
+  title: string;
+  className?: string;
+  children: ReactNode;
+}
+
+function Group({ id, title, className, children }: GroupProps) {
+  return (
+    <section aria-labelledby={`${id}-heading`} className={`grid content-start gap-4 ${className ?? ''}`}>
+      <Heading id={`${id}-heading`} className="border-b-outline border-ink pb-1">
+        {title}
+      </Heading>
+      {children}
+    </section>
   );
 }

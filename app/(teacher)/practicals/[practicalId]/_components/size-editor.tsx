@@ -1,29 +1,41 @@
 'use client';
 
+import { useState } from 'react';
 import { Button } from '@/components/ui/button';
 import { CheckboxField } from '@/components/ui/choice';
 import { LengthText } from '@/components/ui/fraction';
+import { pointsAsText } from '@/components/ui/points-text';
 import { Heading } from '@/components/ui/titles';
 import { readSizeRule } from '@/lib/practicals/parse-size-rule';
-import type { Axis } from '@/lib/scoring';
+import { ON_TARGET, type TriedPiece, tryPiece } from '@/lib/practicals/try-piece';
+import type { Axis, SizeRule } from '@/lib/scoring';
 import { BandFields } from './band-fields';
 import { lineOf, useEditor } from './editor-context';
+import { FindingNotes } from './finding-text';
 import { PresetKeys } from './preset-keys';
 import { OFF, PriceOnRule } from './price-on-rule';
-import { readSize, targetOf } from './read-draft';
-import { FindingText } from './row-notes';
+import { exampleLineOf, readSize, targetOf } from './read-draft';
+import { TryPiece } from './try-piece';
 import { type SizeRuleDesk, useSizeRule } from './use-size-rule';
 
-/** The price of one size on its rule: what is typed below stands on it at once. */
-export function SizeEditor({ lineId, axis }: { lineId: string | null; axis: Axis }) {
-  const { desk, unit, findings } = useEditor();
+interface SizeEditorProps {
+  lineId: string | null;
+  axis: Axis;
+  /** What was tried of each line so far. */
+  tried: Readonly<Record<string, TriedPiece>>;
+  onTry(lineId: string, piece: TriedPiece): void;
+}
+
+/** The price of one size on its rule: what is typed or drawn stands on it at once, and a reading can be tried. */
+export function SizeEditor({ lineId, axis, tried, onTry }: SizeEditorProps) {
+  const { desk, unit } = useEditor();
   const size = useSizeRule(lineId, axis);
   const found = lineOf(desk.draft.lines, lineId);
-  const target = targetOf(desk.draft, lineId, axis);
   const name = found ? found.line.label || `line ${found.index + 1}` : 'all lines';
   const ofLine = found ? readSize(found.line[axis], unit) : null;
   const read = readSizeRule(size.rule, unit);
-  const here = findings.filter(({ path }) => path === size.base);
+  const drawn = useLastRead(read);
+  const trial = useTrial(exampleLineOf(desk.draft, lineId, axis)?.id ?? null, axis, tried, onTry);
   return (
     <section aria-labelledby="size-heading" className="mt-8">
       <div className="mb-3 flex flex-wrap items-center gap-x-4 gap-y-2">
@@ -43,23 +55,78 @@ export function SizeEditor({ lineId, axis }: { lineId: string | null; axis: Axis
         )}
         {size.isOwn ? <PresetKeys size={size} read={read} /> : null}
       </div>
-      {read ? (
-        <PriceOnRule rule={read} name={`${name}, ${axis}`} {...{ size, axis, target }} />
+      {drawn ? (
+        <PriceOnRule
+          rule={drawn}
+          name={`${name}, ${axis}`}
+          reading={trial?.reading ?? null}
+          target={targetOf(desk.draft, lineId, axis)}
+          {...{ size, axis }}
+        />
       ) : (
         <p className="border-y border-hair py-6 text-ink-2">
-          The rule is drawn again as soon as every band below can be read.
+          The rule is drawn as soon as every band below can be read.
         </p>
       )}
-      {here.length > 0 ? (
-        <div className={here.every(({ isNote }) => isNote) ? 'mt-3' : 'mt-3 border-t-edge border-ink pt-2'}>
-          {here.map((finding) => (
-            <FindingText key={finding.code} {...finding} />
-          ))}
-        </div>
+      {drawn && !read ? (
+        <p className="mt-1 text-label text-ink-2">
+          The rule shows the last price that could be read. Mend the field below that is marked.
+        </p>
       ) : null}
-      {size.isOwn ? <BandFields size={size} axis={axis} off={OFF[axis]} /> : null}
+      <FindingNotes path={size.base} className="mt-3" />
+      {trial ? <TryPiece {...trial.panel} axis={axis} /> : <NotTried lineId={lineId} />}
+      <BandFields size={size} axis={axis} off={OFF[axis]} read={read} />
     </section>
   );
+}
+
+/** The last price that could be read stays on the rule while a figure of it is being typed. */
+function useLastRead(read: SizeRule | null): SizeRule | null {
+  const [last, setLast] = useState(read);
+  if (read && JSON.stringify(read) !== JSON.stringify(last)) setLast(read);
+  return read ?? last;
+}
+
+/** One piece of a line priced by the engine as it would be read, and what moves the reading on this axis. */
+function useTrial(
+  lineId: string | null,
+  axis: Axis,
+  tried: SizeEditorProps['tried'],
+  onTry: SizeEditorProps['onTry'],
+) {
+  const { parsed } = useEditor();
+  const line = parsed.ok && lineId !== null ? parsed.rubric.lines.find(({ id }) => id === lineId) : null;
+  if (!parsed.ok || !line) return null;
+  const piece = tried[line.id] ?? ON_TARGET;
+  const result = tryPiece(parsed.rubric, line.id, piece);
+  if (!result) return null;
+  const onMove = (deviation: number) =>
+    onTry(line.id, { ...piece, deviations: { ...piece.deviations, [axis]: deviation } });
+  return {
+    reading: {
+      deviation: piece.deviations[axis],
+      price: `loses ${pointsAsText(result.piece.sizes?.[axis].lose ?? 0)}`,
+      onMove,
+    },
+    panel: {
+      rubric: parsed.rubric,
+      line,
+      tried: piece,
+      result,
+      onChange: (next: TriedPiece) => onTry(line.id, next),
+    },
+  };
+}
+
+/** Why no reading can be tried now. */
+function NotTried({ lineId }: { lineId: string | null }) {
+  const { parsed, desk } = useEditor();
+  const text = !parsed.ok
+    ? 'A reading can be tried on the rule as soon as every field can be read.'
+    : lineId === null && desk.draft.lines.length > 0
+      ? 'Every line has a price of its own for this size, so this one is used by none.'
+      : 'A reading can be tried on the rule as soon as the cut list has a line.';
+  return <p className="mt-4 text-label text-ink-2">{text}</p>;
 }
 
 function Owner({ size }: { size: SizeRuleDesk }) {

@@ -2,12 +2,16 @@
 
 import { Segmented } from '@/components/ui/segmented';
 import { SelectField } from '@/components/ui/select-field';
+import type { RuleEffects } from '@/lib/practicals/rule-effects';
 import { DraftField } from './draft-field';
 import { fieldId, useEditor } from './editor-context';
+import { FindingText } from './finding-text';
+import { RuleEffect } from './rule-effect';
 
 const ROUNDINGS = ['1', '0.5', '0.1', '0.01'];
 
-export function TotalFields() {
+/** How losses become a score. */
+export function TotalFields({ effects }: { effects: RuleEffects | null }) {
   const { desk, errorsAt, findings } = useEditor();
   const { total } = desk.draft;
   const isStart = total.basis === 'start';
@@ -34,15 +38,27 @@ export function TotalFields() {
           })
         }
       />
-      <div className="grid max-w-96 grid-cols-2 gap-4">
+      <p className="max-w-[52ch] text-label text-ink-2">
+        {isStart
+          ? 'Losses come off one starting score, whatever the pieces are worth.'
+          : 'Each piece is worth so many points; what is not lost of them is kept.'}
+      </p>
+      <div className="grid max-w-96 grid-cols-2 items-start gap-4">
         {isStart ? <DraftField path="total.start" label="start from" kind="number" /> : null}
         <DraftField path="total.outOf" label="scaled to" kind="number" hint="Empty: as counted." />
+      </div>
+      <RuleEffect effects={effects} rule="scale" />
+      <div className="max-w-96">
         <SelectField
           id={fieldId('total.roundTo')}
           label="score rounded to"
           value={total.roundTo}
           error={errorsAt('total.roundTo')}
-          finding={findings.find(({ path }) => path === 'total.roundTo')?.text}
+          finding={findings
+            .filter(({ path }) => path === 'total.roundTo')
+            .map((finding) => <FindingText key={finding.code} {...finding} />)
+            .at(0)}
+          hint="Once, at the very end, half up."
           onChange={({ target: { value } }) =>
             desk.edit((draft) => {
               draft.total.roundTo = value;
@@ -50,43 +66,26 @@ export function TotalFields() {
           }
           options={ROUNDINGS.map((value) => ({ value, label: value }))}
         />
+      </div>
+      <RuleEffect effects={effects} rule="rounding" />
+      <div className="max-w-96">
         <DraftField
           path="total.floor"
           label="floor, in percent"
           kind="number"
-          hint="No score falls below it."
+          hint="What is kept never falls below so much of the total; days late still take from it."
         />
-        <DraftField path="total.ceiling" label="bonus counts up to, in percent" kind="number" />
       </div>
-      <fieldset className="grid max-w-96 gap-4">
-        <legend className="sr-only">how pieces are taken, all lines</legend>
-        <SelectField
-          label="thickness and width"
-          value={desk.draft.all.swap ? 'yes' : 'no'}
-          onChange={({ target: { value } }) =>
-            desk.edit((draft) => {
-              draft.all.swap = value === 'yes';
-            })
-          }
-          options={[
-            { value: 'yes', label: 'may be read either way round' },
-            { value: 'no', label: 'each as it is' },
-          ]}
+      <RuleEffect effects={effects} rule="floor" />
+      <div className="max-w-96">
+        <DraftField
+          path="total.ceiling"
+          label="bonus counts up to, in percent"
+          kind="number"
+          hint="100: a bonus never lifts a score above the total."
         />
-        <SelectField
-          label="pieces of a line"
-          value={desk.draft.all.set}
-          onChange={({ target: { value } }) =>
-            desk.edit((draft) => {
-              draft.all.set = value === 'worst' ? 'worst' : 'each';
-            })
-          }
-          options={[
-            { value: 'each', label: 'each by itself' },
-            { value: 'worst', label: 'all as the worst of them' },
-          ]}
-        />
-      </fieldset>
+      </div>
+      <RuleEffect effects={effects} rule="ceiling" />
     </>
   );
 }

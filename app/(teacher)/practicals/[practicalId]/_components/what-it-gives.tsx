@@ -1,12 +1,14 @@
 'use client';
 
+import { useState } from 'react';
 import { classNames } from '@/components/ui/class-names';
 import { PhraseText } from '@/components/ui/phrase-text';
 import { pointsAsText } from '@/components/ui/points-text';
 import { Heading } from '@/components/ui/titles';
+import { isOneScale, pointsOfTotal, possiblePoints, totalPoints } from '@/lib/practicals/both-scales';
 import { type ExampleAttempt, exampleAttempts, scoreExample } from '@/lib/practicals/example-attempts';
-import { scoreAttempt } from '@/lib/scoring';
 import { type Editor, useEditor } from './editor-context';
+import { ExampleDialog } from './example-dialog';
 
 /** Example attempts under the draft, priced as it is typed, beside the version before it. */
 export function WhatItGives() {
@@ -46,6 +48,8 @@ function Examples({ rubric, latest, number, selection }: ExamplesProps) {
     selection.kind === 'size' && selection.lineId !== null
       ? { lineId: selection.lineId, axis: selection.axis }
       : undefined;
+  const [opened, setOpened] = useState<ExampleAttempt['id'] | null>(null);
+  const open = (example: ExampleAttempt | null) => setOpened(example?.id ?? null);
   const examples = exampleAttempts(rubric, about);
   const scored = examples.map((example) => ({
     example,
@@ -54,7 +58,7 @@ function Examples({ rubric, latest, number, selection }: ExamplesProps) {
   }));
   return (
     <>
-      <Scale rubric={rubric} example={examples[0]} />
+      <Scale rubric={rubric} />
       <table className="tnum mt-2 w-full border-b-outline border-ink text-left">
         <caption className="sr-only">scores of example attempts</caption>
         <thead className="border-y border-ink">
@@ -75,8 +79,15 @@ function Examples({ rubric, latest, number, selection }: ExamplesProps) {
         <tbody className="[&>tr]:border-b [&>tr]:border-hair">
           {scored.map(({ example, draft, before }) => (
             <tr key={example.id}>
-              <th scope="row" className="py-2 pr-2 text-label font-[440]">
-                <PhraseText phrase={example.label} unit={rubric.unit} />
+              <th scope="row" className="py-1 pr-2 text-label font-[440]">
+                <button
+                  type="button"
+                  aria-haspopup="dialog"
+                  onClick={() => open(example)}
+                  className="min-h-8 py-1 text-left underline decoration-rule decoration-1 underline-offset-4 hover:decoration-ink"
+                >
+                  <PhraseText phrase={example.label} unit={rubric.unit} />
+                </button>
               </th>
               {latest ? <td className="px-2 py-2 text-right">{scoreText(before)}</td> : null}
               <td
@@ -91,7 +102,13 @@ function Examples({ rubric, latest, number, selection }: ExamplesProps) {
           ))}
         </tbody>
       </table>
+      <p className="mt-1 text-small text-ink-2">Press one to see where its points go.</p>
       <LeavingOut scored={scored} />
+      <ExampleDialog
+        rubric={rubric}
+        example={scored.find(({ example }) => example.id === opened)?.example ?? null}
+        onClose={() => open(null)}
+      />
     </>
   );
 }
@@ -101,22 +118,14 @@ function scoreText(points: number | null): string {
 }
 
 /** "of 100. 1 of 63 is 1.59 of 100." */
-function Scale({
-  rubric,
-  example,
-}: {
-  rubric: ExamplesProps['rubric'];
-  example: ExampleAttempt | undefined;
-}) {
-  if (!example) return null;
-  const { possible, total } = scoreAttempt(rubric, example.attempt);
-  const one = Math.round((100 * total) / Math.max(1, possible));
+function Scale({ rubric }: { rubric: ExamplesProps['rubric'] }) {
+  const total = pointsAsText(totalPoints(rubric));
   return (
     <p className="text-label text-ink-2">
-      of {pointsAsText(total)}.{' '}
-      {possible === total
+      of {total}.{' '}
+      {isOneScale(rubric)
         ? 'A point is a point of the total.'
-        : `1 of ${pointsAsText(possible)} is ${pointsAsText(one)} of ${pointsAsText(total)}.`}
+        : `1 of ${pointsAsText(possiblePoints(rubric))} is ${pointsAsText(pointsOfTotal(rubric, 100))} of ${total}.`}
     </p>
   );
 }
