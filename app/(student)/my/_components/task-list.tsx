@@ -38,6 +38,7 @@ function TaskRow({ task }: { task: OwnTaskRow }) {
           Attempt {task.attemptNumber} is open to you: cut again what lost points, and hand it in.
         </p>
       ) : null}
+      {task.scoreChanged ? <p className="mt-1 font-[620]">Your result changed.</p> : null}
       {task.stage === 'to do' && task.sizes.done > 0 ? <Measured sizes={task.sizes} /> : null}
       {href ? (
         <Link

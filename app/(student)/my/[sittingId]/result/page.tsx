@@ -3,6 +3,7 @@ import { readResult } from '@/lib/data/own/read-result';
 import { pageActor, pageValue } from '@/lib/transport/page';
 import { TaskHead } from '../../_components/task-head';
 import { BigScore } from './_components/big-score';
+import { Corrected } from './_components/corrected';
 import { MeasuredResult } from './_components/measured-result';
 import { StatusWords } from './_components/status-words';
 
@@ -20,11 +21,7 @@ export default async function ResultPage({ params }: PageProps<'/my/[sittingId]/
         aside={result.score === null ? null : <BigScore score={result.score} total={result.total} />}
       />
       <div className="mt-3 grid grid-cols-[minmax(0,1fr)] gap-6">
-        {result.corrected ? (
-          <p className="border-l-edge border-ink pl-3">
-            Your teacher corrected this after it was first published. What stands here is what counts.
-          </p>
-        ) : null}
+        {result.corrected ? <Corrected result={result} /> : null}
         {result.status === 'scored' && result.sheet ? (
           <MeasuredResult result={result} sheet={result.sheet} />
         ) : (

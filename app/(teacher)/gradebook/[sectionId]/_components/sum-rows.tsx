@@ -9,7 +9,7 @@ export interface SumProps {
 
 /** What was lost and kept, the prediction, what rounding does, and the score: kept and all below it add up to it. */
 export function SumRows({ explanation, both }: SumProps) {
-  const { lost, kept, possible, rest, score, floorGives, published } = explanation;
+  const { lost, kept, possible, rest, held, score, floorGives, published } = explanation;
   return (
     <tfoot>
       <Sum label="lost" points={lost.points} ofTotal={lost.ofTotal} both={both} />
@@ -24,6 +24,14 @@ export function SumRows({ explanation, both }: SumProps) {
       />
       <Prediction explanation={explanation} both={both} />
       {rest === 0 ? null : <Sum label={restOf(explanation)} ofTotal={rest} both={both} signed />}
+      {held ? (
+        <Sum
+          label={`held: version ${held.versionNumber} gave more`}
+          ofTotal={held.points}
+          both={both}
+          signed
+        />
+      ) : null}
       <tr className="border-t border-ink text-text font-[700]">
         <th scope="row" colSpan={both ? 5 : 4} className="pt-1.5 text-left">
           {published ? 'score' : 'so far'}, to the nearest {nearest(explanation.roundTo)}

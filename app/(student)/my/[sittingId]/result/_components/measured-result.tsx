@@ -16,8 +16,8 @@ const MOST_DISAGREEMENTS = 3;
 
 /** A measured result: the score beside the prediction, what they disagree about, and where every point went. */
 export function MeasuredResult({ result, sheet }: { result: OwnResultView; sheet: ScoreSheet }) {
-  const { rubric, policies, ownSheet, bonus, judgement, predicted } = result;
-  const explanation = explainScore(rubric, sheet, bonus);
+  const { rubric, policies, ownSheet, bonus, held, judgement, predicted } = result;
+  const explanation = explainScore(rubric, sheet, bonus, held?.points);
   const own = ownSheet && predicted !== null ? explainScore(rubric, ownSheet, 0).kept.ofTotal : null;
   const pairs = pairReadings(rubric, ownSheet, sheet, policies.prediction.agreeWithin);
   const pattern = lengthPattern(rubric, sheet);
@@ -27,6 +27,7 @@ export function MeasuredResult({ result, sheet }: { result: OwnResultView; sheet
         <p className="text-label text-ink-2">
           {pointsAsText(explanation.kept.ofTotal)} of {pointsAsText(sheet.total)}
           {bonus > 0 ? `, and ${pointsAsText(bonus)} for how well you measured` : ''}
+          {held ? `, and ${pointsAsText(held.points)} held from version ${held.versionNumber}` : ''}
           {predicted === null ? '' : `; you predicted ${pointsAsText(predicted)}`}
         </p>
         <ScoreRule bench={explanation.kept.ofTotal} own={own} total={sheet.total} className="mt-1" />
@@ -41,7 +42,12 @@ export function MeasuredResult({ result, sheet }: { result: OwnResultView; sheet
         />
       ) : null}
       <WherePointsWent sheet={sheet} />
-      <LossTable rubric={rubric} explanation={explanation} heading="Every lost point" />
+      <LossTable
+        rubric={rubric}
+        explanation={explanation}
+        heading="Every lost point"
+        heldFrom={held?.versionNumber}
+      />
       {ownSheet ? <AllReadings rubric={rubric} pairs={pairs} /> : null}
     </>
   );
