@@ -3,6 +3,7 @@ import postgres from 'postgres';
 import type { Transaction } from '@/db/client';
 import * as schema from '@/db/schema';
 import { hashPassword } from '@/lib/auth/password';
+import { seedSittingAccommodation, seedTermAccommodation } from './accommodations';
 import { demoAccounts, STAFF_PASSWORD, STUDENT_PASSPHRASE } from './accounts';
 import { makeNames } from './names';
 import { type SeededSchool, seedSchool } from './people';
@@ -16,6 +17,7 @@ import { seedSitting } from './sittings';
 const SEED = 20_261_201;
 /** Of its own, so that what is shared can change without changing what was measured. */
 const SHARING_SEED = 20_261_202;
+const MODIFIED_SEED = 20_261_203;
 
 /**
  * Loads the invented demo into an empty, migrated database through the owner's connection and gives back the
@@ -48,8 +50,12 @@ export async function seedDemo(databaseUrl: string) {
 /** Everything the people of a school have made and recorded so far. */
 async function seedWork(tx: Transaction, random: Random, school: SeededSchool): Promise<void> {
   const versions = await seedPracticals(tx, random, school);
+  const modified = makeRandom(MODIFIED_SEED);
+  await seedTermAccommodation(tx, modified, school);
   for (const plan of SITTINGS.filter(({ section }) => school.sections.has(section))) {
-    await seedPublication(tx, random, school, await seedSitting(tx, random, school, versions, plan));
+    const sitting = await seedSitting(tx, random, school, versions, plan);
+    await seedSittingAccommodation(tx, modified, school, sitting);
+    await seedPublication(tx, random, school, sitting);
   }
   if (school.plan === CEDAR_FORK) await seedSharing(tx, makeRandom(SHARING_SEED), school, versions);
 }

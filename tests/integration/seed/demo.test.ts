@@ -2,6 +2,8 @@ import { beforeAll, describe, expect, test } from 'vitest';
 import { seedDemo } from '@/db/seed';
 import { scoreSheetSchema } from '@/lib/contracts/results';
 import { scoreAttempt } from '@/lib/scoring';
+import { modifyAttempt, modifyRubric } from '@/lib/scoring/modification';
+import { modificationSchema } from '@/lib/scoring/modification-schema';
 import { attemptSchema, rubricSchema } from '@/lib/scoring/schemas';
 import { databaseUrl, ownerSql } from '../../support/database';
 
@@ -15,6 +17,8 @@ const FINGERPRINT_TABLES = [
   'attempts',
   'reading_events',
   'results',
+  'accommodations',
+  'accommodation_reasons',
 ];
 
 /** The rows of a table as one hash, without the columns that salt or the clock fill. */
@@ -88,14 +92,32 @@ describe('the demo', () => {
   });
 
   test('stores the sheets that the engine makes of what is recorded', async () => {
-    const rows = await ownerSql()`select h.recorded, h.sheet, v.rubric
-      from score_sheets h join rubric_versions v on v.id = h.rubric_version_id`;
+    const rows = await ownerSql()`select h.recorded, h.sheet, v.rubric, a.modification
+      from score_sheets h join rubric_versions v on v.id = h.rubric_version_id
+      left join accommodations a on a.id = h.accommodation_id`;
     expect(rows.length).toBeGreaterThan(300);
-    for (const { recorded, sheet, rubric } of rows) {
+    for (const { recorded, sheet, rubric, modification } of rows) {
+      const [prices, attempt] = [rubricSchema.parse(rubric), attemptSchema.parse(recorded)];
+      const modified = modification === null ? null : modificationSchema.parse(modification);
       expect(scoreSheetSchema.parse(sheet)).toEqual(
-        scoreAttempt(rubricSchema.parse(rubric), attemptSchema.parse(recorded)),
+        modified
+          ? scoreAttempt(modifyRubric(prices, modified), modifyAttempt(prices, attempt, modified))
+          : scoreAttempt(prices, attempt),
       );
     }
+  });
+
+  test('prices one student by a modified rubric for the term and one in a sitting, each with its reason', async () => {
+    const rows = await ownerSql()`
+      select a.sitting_id is null as term, length(r.reason) > 20 as reasoned,
+        (select count(*)::int from score_sheets h where h.accommodation_id = a.id and h.side = 'bench') as sheets,
+        (select count(*)::int from results t where t.accommodation_id = a.id) as results
+      from accommodations a join accommodation_reasons r on r.accommodation_id = a.id
+      where a.ended_at is null order by term`;
+    expect(rows).toEqual([
+      { term: false, reasoned: true, sheets: 1, results: 0 },
+      { term: true, reasoned: true, sheets: 4, results: 2 },
+    ]);
   });
 
   test('shares practicals: on offer, copied, one approved, and a difference with its reason', async () => {
