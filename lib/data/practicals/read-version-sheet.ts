@@ -25,7 +25,7 @@ export interface VersionSheet {
   form: RubricForm;
   rubric: Rubric;
   /** What it changes of the version before it, and that one's prices; null when there is none to be read. */
-  since: { number: number; changes: Phrase[]; rubric: Rubric } | null;
+  since: { versionId: string; number: number; changes: Phrase[]; rubric: Rubric } | null;
   /** The numbers of the versions that may be read, newest first. */
   numbers: number[];
   mayCopy: boolean;
@@ -54,7 +54,12 @@ export const readVersionSheet = defineVerb({
       ...storedVersion(row),
       since:
         before && changes
-          ? { number: before.row.number, changes, rubric: storedVersion(before.row).rubric }
+          ? {
+              versionId: before.row.id,
+              number: before.row.number,
+              changes,
+              rubric: storedVersion(before.row).rubric,
+            }
           : null,
       numbers: versions.map((each) => each.row.number),
       mayCopy: may(actor, 'practical.copy', subject),

@@ -37,13 +37,8 @@ export const takeNewerVersion = defineVerb({
     const draft = found(await selectDraft(tx, schoolId, row.id));
     if (draft.revision !== input.revision) refuse('stale', STALE_DRAFT);
     const before = storedDraft(draft.content);
-    const { kind, sourceVersionId, newer } = await loadNewer(context, row);
-    const content =
-      takeOver(storedVersion(newer), before, kind) ??
-      refuse(
-        'conflict',
-        `Version ${newer.number} has other lines than this variant. Make the variant anew from it.`,
-      );
+    const { sourceVersionId, newer } = await loadNewer(context, row);
+    const content = takeOver(storedVersion(newer), before);
     const replaced: ReplacedDraft = { content: before, sourceVersionId, takenNumber: newer.number };
     const kept = { content, savedBy: personId, replaced };
     const saved = found(await updateDraft(tx, schoolId, row.id, input.revision, kept));
@@ -64,10 +59,16 @@ async function loadNewer(
 ) {
   const { schoolId } = actor;
   const { copiedFromVersionId, sourceKind } = row;
-  if (!copiedFromVersionId || !sourceKind) {
+  if (!copiedFromVersionId) {
     return refuse(
       'conflict',
       'This practical was not taken from a version, so there is nothing to take over.',
+    );
+  }
+  if (sourceKind === 'variant') {
+    return refuse(
+      'conflict',
+      'A variant has sizes of its own. Take the prices over where its variants stand.',
     );
   }
   const source = found(await selectVersion(tx, schoolId, copiedFromVersionId));
@@ -77,5 +78,5 @@ async function loadNewer(
   if (newer.number <= source.number) {
     refuse('conflict', `This practical stands on version ${source.number} already.`);
   }
-  return { kind: sourceKind, sourceVersionId: copiedFromVersionId, newer };
+  return { sourceVersionId: copiedFromVersionId, newer };
 }

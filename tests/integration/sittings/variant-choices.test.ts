@@ -22,6 +22,7 @@ it('tells of a practical with published variants which of one’s own periods ha
   };
   await give(teacher, '2', versionId);
   await give(teacher, '6', later.versionId);
+  await ownerSql()`update practicals set offered_at = now() where id = ${c ?? ''}`;
   await give(colleague, '7', later.versionId);
   const { families, sections } = valueFrom(await readOpenChoices(teacher, {}));
   expect(families).toEqual([

@@ -51,6 +51,12 @@ function Versions({ view }: { view: PracticalView }) {
         <p className="mt-2 text-label">A sitting keeps its version, whatever you change here.</p>
       ) : null}
       <Offer view={view} />
+      <p className="mt-3 text-label">
+        <Link className="link inline-block py-1" href={`/practicals/${practicalId}/variants`}>
+          variants with other sizes
+        </Link>
+        , one for each period.
+      </p>
     </section>
   );
 }
