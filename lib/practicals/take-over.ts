@@ -1,7 +1,7 @@
 import type { RubricForm } from '@/lib/scoring/rubric-form';
 import { changesSince } from './changes-since';
 import type { Phrase } from './compare-types';
-import type { DraftLine, PracticalDraft } from './draft';
+import type { PracticalDraft } from './draft';
 import { draftOf } from './draft-of';
 import { draftDifferences } from './field-names';
 import { parseDraft } from './parse-draft';
@@ -16,29 +16,13 @@ interface Published {
 }
 
 /**
- * A draft as it reads when a version of its original is taken over into it. The title stays the teacher's. A variant
- * keeps its own sizes and blank too and takes the rest; null when that cannot be done, as the version has other lines.
+ * A draft as it reads when a version of its original is taken over into it: the title stays the teacher's.
  * Pure; does not change its arguments.
  *
- * @example takeOver(version2, draft, 'adopted') // version 2 as a draft, under the draft's title
+ * @example takeOver(version2, draft) // version 2 as a draft, under the draft's title
  */
-export function takeOver(
-  original: Published,
-  draft: PracticalDraft,
-  kind: SourceKind,
-): PracticalDraft | null {
-  const taken: PracticalDraft = { ...draftOf(original.task, original.form), title: draft.title };
-  if (kind !== 'variant') return taken;
-  const lines = taken.lines.map((line) => withSizesOf(line, draft.lines));
-  if (taken.lines.length !== draft.lines.length) return null;
-  if (!lines.every((line) => line !== null)) return null;
-  return { ...taken, blank: draft.blank, lines };
-}
-
-function withSizesOf(line: DraftLine, own: readonly DraftLine[]): DraftLine | null {
-  const mine = own.find(({ id }) => id === line.id);
-  if (!mine || mine.quantity.trim() !== line.quantity) return null;
-  return { ...line, thickness: mine.thickness, width: mine.width, length: mine.length };
+export function takeOver(original: Published, draft: PracticalDraft): PracticalDraft {
+  return { ...draftOf(original.task, original.form), title: draft.title };
 }
 
 const MOST_FIELDS = 12;
@@ -48,11 +32,10 @@ const MOST_FIELDS = 12;
  * all that goes when another version is taken over. A draft that cannot be read yet is told by its fields.
  * Pure; never fails.
  *
- * @example ownDifferences(draftOf(task, form), { task, form }, 'adopted') // []
+ * @example ownDifferences(draftOf(task, form), { task, form }) // []
  */
-export function ownDifferences(draft: PracticalDraft, source: Published, kind: SourceKind): Phrase[] {
-  const base = takeOver(source, draft, kind) ?? takeOver(source, draft, 'adopted');
-  if (!base) return [];
+export function ownDifferences(draft: PracticalDraft, source: Published): Phrase[] {
+  const base = takeOver(source, draft);
   const [before, now] = [parseDraft(withTitle(base)), parseDraft(withTitle(draft))];
   if (before.ok && now.ok) return changesSince({ ...before, number: 1 }, now);
   const fields = draftDifferences(draft, base).filter(({ path }) => path !== 'title');

@@ -14,7 +14,9 @@ export function SourceLine({ practicalId, unit, source }: SourceLineProps) {
   const { kind, ownerName, title, number, newest } = source;
   const from = ownerName ? `${ownerName}’s version ${number}` : `version ${number} of your “${title}”`;
   const words = kind === 'variant' ? `a variant of ${from}` : `from ${from}`;
-  if (!newest) return <span className="block text-small font-[440] text-ink-2">{words}</span>;
+  if (!newest || kind === 'variant') {
+    return <span className="block text-small font-[440] text-ink-2">{words}</span>;
+  }
   return (
     <div className="text-small font-[440]">
       <details>

@@ -14,6 +14,9 @@ import { putBackDraftAction } from '../actions';
 import { useEditor } from './editor-context';
 import { useDraftPress } from './use-draft-press';
 
+/** A variant goes on standing on the version it was made from, so what is new in it cannot be told apart. */
+const SINCE: Phrase = ['The prices that were taken over, and all that was typed since.'];
+
 interface PutBackProps {
   view: PracticalView;
   source: SourceView;
@@ -34,14 +37,17 @@ export function PutBack({ view, source, tookOver }: PutBackProps) {
   }
 
   function ask() {
-    const since = ownDifferences(desk.draft, source, source.kind);
+    const since = source.kind === 'variant' ? [SINCE] : ownDifferences(desk.draft, source);
     if (since.length === 0) putBack();
     else setGiving(since);
   }
 
   return (
     <div className="mt-3 grid justify-items-start gap-2 text-label">
-      <p>Version {tookOver} was taken over. Your draft from before is kept.</p>
+      <p>
+        {source.kind === 'variant' ? `The prices of version ${tookOver} were` : `Version ${tookOver} was`}{' '}
+        taken over. Your draft from before is kept.
+      </p>
       <Button size="small" disabled={press.pending} onClick={ask}>
         {press.pending ? 'putting it back …' : 'put my draft back'}
       </Button>
@@ -52,7 +58,7 @@ export function PutBack({ view, source, tookOver }: PutBackProps) {
           if (!open) setGiving(null);
         }}
         title="Put your earlier draft back?"
-        description={`Since you took version ${tookOver} over you made this otherwise. It goes, and is not kept.`}
+        description="This was made otherwise since. It goes, and is not kept."
         closeLabel="leave it"
       >
         <PhraseList phrases={giving ?? []} unit={view.unit} />

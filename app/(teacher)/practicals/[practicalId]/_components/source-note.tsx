@@ -1,5 +1,6 @@
 'use client';
 
+import Link from 'next/link';
 import { Notice } from '@/components/ui/notice';
 import { PhraseList } from '@/components/ui/phrase-list';
 import { Heading } from '@/components/ui/titles';
@@ -10,7 +11,7 @@ import { TakeNewer } from './take-newer';
 
 /** The version this practical was taken from; when its original has moved on, what that changes and a press to follow. */
 export function SourceNote({ view, source }: { view: PracticalView; source: SourceView }) {
-  const { newest } = source;
+  const newest = source.kind === 'variant' ? null : source.newest;
   return (
     <section aria-labelledby="source-heading">
       <Heading id="source-heading">Where it comes from</Heading>
@@ -18,6 +19,13 @@ export function SourceNote({ view, source }: { view: PracticalView; source: Sour
         From {saySource(source)}.
         {source.isOpen ? '' : ' It is not on offer any more; your copy stays as it is.'}
       </p>
+      {source.kind === 'variant' ? (
+        <p className="mt-1 text-label">
+          <Link className="link" href={`/practicals/${view.practicalId}/variants`}>
+            its prices beside the original’s
+          </Link>
+        </p>
+      ) : null}
       {newest ? (
         <div className="mt-3 text-label">
           <Notice title={`Version ${newest.number} is out.`} />

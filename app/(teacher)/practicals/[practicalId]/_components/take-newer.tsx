@@ -9,7 +9,7 @@ import { Refusal } from '@/components/ui/refusal';
 import type { NewerVersion, SourceView } from '@/lib/data/practicals/practical-source';
 import type { PracticalView } from '@/lib/data/practicals/read-practical';
 import type { Phrase } from '@/lib/practicals/compare-types';
-import { ownDifferences, takeOver } from '@/lib/practicals/take-over';
+import { ownDifferences } from '@/lib/practicals/take-over';
 import { takeNewerVersionAction } from '../actions';
 import { useEditor } from './editor-context';
 import { useDraftPress } from './use-draft-press';
@@ -27,7 +27,6 @@ export function TakeNewer({ view, source, newest }: TakeNewerProps) {
   const press = useDraftPress(desk, (revision) =>
     takeNewerVersionAction(view.practicalId, revision, newest.versionId),
   );
-  const fits = takeOver(source, desk.draft, source.kind) !== null;
   const label = `take version ${newest.number} over`;
 
   function take() {
@@ -38,21 +37,14 @@ export function TakeNewer({ view, source, newest }: TakeNewerProps) {
   }
 
   function ask() {
-    const own = ownDifferences(desk.draft, source, source.kind);
+    const own = ownDifferences(desk.draft, source);
     if (own.length === 0) take();
     else setGiving(own);
   }
 
   return (
     <>
-      <Button
-        size="small"
-        notYet={
-          fits ? null : 'this variant has other lines than its original; make it anew from the new version'
-        }
-        disabled={press.pending}
-        onClick={ask}
-      >
+      <Button size="small" disabled={press.pending} onClick={ask}>
         {press.pending ? 'taking it over …' : label}
       </Button>
       {press.refused && giving === null ? <Refusal title={press.refused} className="mt-2" /> : null}
@@ -62,9 +54,7 @@ export function TakeNewer({ view, source, newest }: TakeNewerProps) {
           if (!open) setGiving(null);
         }}
         title={`Take version ${newest.number} over?`}
-        description={`Your draft differs from version ${source.number}. These differences give way; the title stays yours${
-          source.kind === 'variant' ? ', and so do the sizes' : ''
-        }.`}
+        description={`Your draft differs from version ${source.number}. These differences give way; the title stays yours.`}
         closeLabel="leave it"
       >
         <PhraseList phrases={giving ?? []} unit={view.unit} />
