@@ -3,7 +3,7 @@ import type { EffectScale } from '@/lib/practicals/rubric-effect';
 import { sayPeriod, tenths } from '../../_components/words';
 
 /** The effect in a sentence: which sections would stand higher, lower or as they do now, in the mean. */
-export function sayVerdict({ sections, scale }: SharedVersionView): string {
+export function sayVerdict({ sections, scale }: Pick<SharedVersionView, 'sections' | 'scale'>): string {
   const told = sections.flatMap(({ effect, period }) => (effect ? [{ period, change: effect.change }] : []));
   if (told.length === 0) return 'Every section has too few students to show what it would do.';
   if (told.every(({ change }) => change === 0)) {
