@@ -1,6 +1,7 @@
 import type { Metadata } from 'next';
 import { actorInRole } from '@/app/account/_components/actor-in-role';
 import { DeskPage } from '@/components/shell/desk-page';
+import { LinkButton } from '@/components/ui/link-button';
 import { Heading } from '@/components/ui/titles';
 import { listPracticals } from '@/lib/data/practicals/list-practicals';
 import { pageValue } from '@/lib/transport/page';
@@ -12,7 +13,7 @@ export const metadata: Metadata = { title: 'New practical' };
 export default async function NewPracticalPage() {
   const { own } = pageValue(await listPracticals(await actorInRole('teacher'), {}));
   return (
-    <DeskPage title="New practical">
+    <DeskPage title="New practical" actions={<LinkButton href="/practicals/import">from a file</LinkButton>}>
       <div className="grid grid-cols-[minmax(0,1fr)] gap-10">
         <section aria-labelledby="empty-heading">
           <Heading id="empty-heading" className="mb-3">
