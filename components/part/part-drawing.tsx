@@ -10,8 +10,10 @@ import { type DimensionLine, layOutPart, type PartLayout } from './part-layout';
 interface PartDrawingProps {
   size: Record<Axis, Length>;
   unit: Unit;
-  /** The axis being measured; without it no instrument is drawn. */
+  /** The axis being measured, picked out; without it no instrument is drawn. */
   axis?: Axis | null;
+  /** Whether the instrument is drawn at that axis, or the dimension only picked out. */
+  withInstrument?: boolean;
   /** How far the caliper at hand opens. */
   reach?: Length;
   /** Say where to hold the instrument, with a leader to it. */
@@ -31,6 +33,7 @@ export function PartDrawing(props: PartDrawingProps) {
     size,
     unit,
     axis = null,
+    withInstrument = true,
     reach,
     note = false,
     label,
@@ -40,13 +43,13 @@ export function PartDrawing(props: PartDrawingProps) {
     className,
   } = props;
   const layout = layOutPart(size, { width, height, corner });
-  const instrument = axis ? instrumentFor(size[axis], unit, reach) : null;
+  const instrument = axis && withInstrument ? instrumentFor(size[axis], unit, reach) : null;
   const drawing = axis && instrument ? drawInstrument(axis, instrument, layout) : null;
   const sizes = AXES.map((each) => `${each} ${lengthInWords(size[each], unit)}`).join(', ');
   const hold = axis && instrument ? howToHold(axis, instrument) : null;
   const words = [
     label ? `${label}: ${sizes}` : sizes,
-    axis ? `measure the ${axis}, ${hold?.join(' ')}` : null,
+    hold ? `measure the ${axis}, ${hold.join(' ')}` : null,
   ];
   return (
     <svg

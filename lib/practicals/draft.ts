@@ -2,7 +2,15 @@ import { z } from 'zod';
 import { AXES } from '@/lib/scoring';
 import { PRESET_IDS } from '@/lib/scoring/rubric-form';
 
-const typed = z.string().max(120, 'This is longer than 120 characters.');
+/** More than any field can use: what is too long is kept as typed and told at the field, up to here. */
+export const MOST_TYPED = { cell: 400, title: 400, note: 1000, instructions: 20_000 };
+
+/** A rubric has at most half as many; a draft keeps a list that is still to be shortened. */
+export const MOST_DRAFT_LINES = 400;
+
+const upTo = (most: number) => z.string().max(most, `This is longer than ${most} characters.`);
+
+const typed = upTo(MOST_TYPED.cell);
 
 const bandSchema = z.strictObject({ within: typed, lose: typed });
 
@@ -37,7 +45,7 @@ const lineSchema = z.strictObject({
   label: typed,
   quantity: typed,
   ...axesSchema.shape,
-  note: z.string().max(400, 'This is longer than 400 characters.'),
+  note: upTo(MOST_TYPED.note),
   worth: typed,
   missing: typed,
   sizes: z.strictObject({
@@ -53,13 +61,13 @@ const lineSchema = z.strictObject({
 /** What a teacher is writing: every figure as it was typed, so that nothing is lost before it can be read. */
 export const practicalDraftSchema = z.strictObject({
   format: z.literal(1),
-  title: z.string().max(200, 'This is longer than 200 characters.'),
+  title: upTo(MOST_TYPED.title),
   unit: z.enum(['in', 'mm']),
-  instructions: z.string().max(8000, 'This is longer than 8000 characters.'),
+  instructions: upTo(MOST_TYPED.instructions),
   material: typed,
   blank: axesSchema,
   kerf: typed,
-  lines: z.array(lineSchema).max(400, 'A draft keeps at most 400 lines.'),
+  lines: z.array(lineSchema).max(MOST_DRAFT_LINES, `A draft keeps at most ${MOST_DRAFT_LINES} lines.`),
   all: z.strictObject({
     worth: typed,
     missing: typed,
@@ -101,6 +109,11 @@ export type DraftLine = PracticalDraft['lines'][number];
 export type DraftSizeRule = z.infer<typeof sizeRuleSchema>;
 export type DraftSide = z.infer<typeof sideSchema>;
 export type DraftCheck = z.infer<typeof checkSchema>;
+
+/** The columns of a cut list in the order they stand, are typed and are pasted in. */
+export const SHEET_COLUMNS = ['label', 'quantity', 'thickness', 'width', 'length', 'note'] as const;
+
+export type SheetColumn = (typeof SHEET_COLUMNS)[number];
 
 /** The first of `line-1`, `line-2` … (or another stem) that no line or check of the list is called. */
 export function freshId(stem: string, taken: readonly { id: string }[]): string {

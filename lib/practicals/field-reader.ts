@@ -38,6 +38,22 @@ export function readShare(text: string): Share | null {
   return { num: num / divisor, den: den / divisor };
 }
 
+const QUANTITY = /^(?:[x×] ?)?(\d{1,6})(?:[.,]0+)?(?: ?(?:[x×]|pcs?\.?|pieces?|ea\.?|off))?$/i;
+
+/** A number of pieces typed as `2`, `x2`, `2 pcs` or as a spreadsheet gives it, `2.00`; null for anything else. */
+export function readQuantity(text: string): number | null {
+  const digits = QUANTITY.exec(text.trim())?.[1];
+  return digits === undefined ? null : Number(digits);
+}
+
+const MONTH = '(?:jan|feb|mar|apr|may|jun|jul|aug|sep|oct|nov|dec)[a-z]*';
+const DATE = new RegExp(
+  `^(?:\\d{1,2}[-/ .]?)?${MONTH}[-/ .]?\\d{0,4}$|^\\d{4}-\\d\\d-\\d\\d|^\\d{1,2}/\\d{1,2}/\\d{2,4}$`,
+  'i',
+);
+const MADE_A_DATE =
+  'A spreadsheet made a date of this size. Type it again, or set that column to text and paste anew.';
+
 function greatestDivisor(a: number, b: number): number {
   return b === 0 ? a : greatestDivisor(b, a % b);
 }
@@ -95,6 +111,13 @@ export class FieldReader {
     return least;
   }
 
+  quantity(path: string, text: string, most: number): number {
+    const quantity = readQuantity(text);
+    if (quantity !== null && quantity >= 1 && quantity <= most) return quantity;
+    this.refuse(path, `The number of pieces is a whole number from 1 to ${most}.`);
+    return 1;
+  }
+
   share(path: string, text: string): Share {
     const share = readShare(text);
     if (!share) this.refuse(path, 'Type a share above none, up to the whole: 90% or 2/3.');
@@ -116,7 +139,7 @@ export class FieldReader {
   private length(path: string, text: string): Length {
     const read = parseLength(text, this.unit);
     if (read.ok) return read.ticks;
-    this.refuse(path, read.reason);
+    this.refuse(path, DATE.test(text.trim()) ? MADE_A_DATE : read.reason);
     return 0;
   }
 }

@@ -10,6 +10,10 @@ export type ParsedDraft =
   | { ok: true; task: Task; form: RubricForm; rubric: Rubric }
   | { ok: false; errors: DraftErrors };
 
+export const MOST_LINES = 200;
+const MOST_OF_A_LINE = 200;
+const MOST_PIECES = 400;
+
 /**
  * Reads a whole draft: the task, the rubric as authored and as compiled. Otherwise every field that cannot be used,
  * with its messages, by dotted path into the draft (`lines.2.width`, `all.sizes.length.over.bands.1.within`); the
@@ -59,13 +63,18 @@ function parseBlank(reader: FieldReader, blank: Record<Axis, string>): Task['bla
 
 function parseLines(reader: FieldReader, lines: readonly DraftLine[]): Task['cutList']['lines'] {
   if (lines.length === 0) reader.refuse('lines', 'A cut list has at least one line.');
-  if (lines.length > 200) reader.refuse('lines', 'A cut list has at most 200 lines.');
+  if (lines.length > MOST_LINES) {
+    reader.refuse(
+      'lines',
+      `A cut list has at most ${MOST_LINES} lines; these are ${lines.length}. All are kept as typed: remove ${lines.length - MOST_LINES} before you publish.`,
+    );
+  }
   const parsed = lines.map((line, index) => {
     const at = `lines.${index}`;
     return {
       id: line.id,
       label: reader.text(`${at}.label`, line.label, 60, 'Name the part.'),
-      quantity: reader.whole(`${at}.quantity`, line.quantity, [1, 200], 'The number of pieces'),
+      quantity: reader.quantity(`${at}.quantity`, line.quantity, MOST_OF_A_LINE),
       target: {
         thickness: reader.size(`${at}.thickness`, line.thickness),
         width: reader.size(`${at}.width`, line.width),
@@ -74,6 +83,8 @@ function parseLines(reader: FieldReader, lines: readonly DraftLine[]): Task['cut
     };
   });
   const pieces = parsed.reduce((sum, { quantity }) => sum + quantity, 0);
-  if (pieces > 400) reader.refuse('lines', `A cut list has at most 400 pieces in all; these are ${pieces}.`);
+  if (pieces > MOST_PIECES) {
+    reader.refuse('lines', `A cut list has at most ${MOST_PIECES} pieces in all; these are ${pieces}.`);
+  }
   return parsed;
 }

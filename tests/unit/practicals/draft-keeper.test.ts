@@ -80,6 +80,19 @@ describe('keeping a draft while it is typed', () => {
     expect(saves.map(({ revision }) => revision)).toEqual([1, 1, 1, 1]);
   });
 
+  it('says that one is signed out, and goes on by itself after signing in', async () => {
+    const out = { kind: 'refused', message: 'Sign in first.', signIn: true } as const;
+    const { keeper, saves, states, copy } = makeDesk([out, out]);
+    keeper.change(titled('Box'));
+    await vi.advanceTimersByTimeAsync(1_000);
+    expect(states.at(-1)).toBe('waiting');
+    expect(copy()).toMatchObject({ content: { title: 'Box' } });
+    expect(await keeper.keepNow()).toBe(false);
+    expect(await keeper.keepNow()).toBe(true);
+    expect(saves).toHaveLength(3);
+    expect(copy()).toBeNull();
+  });
+
   it('stops at a stale answer until a person chooses, and then keeps on top of the other', async () => {
     const there = { content: titled('theirs'), revision: 7, at: '2026-12-01T10:40:00Z' };
     const { keeper, saves, states } = makeDesk([{ kind: 'stale', message: 'changed', there }]);

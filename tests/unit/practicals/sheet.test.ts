@@ -89,17 +89,19 @@ describe('findings stand at the field that causes them', () => {
     change?.(draft);
     const read = parseDraft(draft);
     if (!read.ok) throw new Error(JSON.stringify(read.errors));
-    return placeFindings(draft, reviewRubric(read.rubric, { graduation: ticksOf('1/64') })).filter(
-      ({ isNote }) => !isNote,
-    );
+    return placeFindings(
+      draft,
+      read.rubric,
+      reviewRubric(read.rubric, { graduation: ticksOf('1/64') }),
+    ).filter(({ isNote }) => !isNote);
   };
 
   it('once at all lines, when all lines share the price', () => {
     const found = place((draft) => {
       draft.all.missing = '6';
     });
-    expect(found.map(({ path, code, setTo }) => [path, code, setTo])).toEqual([
-      ['all.missing', 'missing-is-cheaper', 'worth'],
+    expect(found.map(({ path, code, fix }) => [path, code, fix?.label])).toEqual([
+      ['all.missing', 'missing-is-cheaper', 'set it to the worth'],
     ]);
     expect(found[0]?.text).toMatch(/^A missing piece loses 6 points/);
   });

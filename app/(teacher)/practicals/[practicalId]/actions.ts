@@ -9,7 +9,7 @@ import { saveDraft } from '@/lib/data/practicals/save-draft';
 import { type TakenDraft, takeNewerVersion } from '@/lib/data/practicals/take-newer-version';
 import type { PracticalDraft } from '@/lib/practicals/draft';
 import type { DraftErrors } from '@/lib/practicals/field-reader';
-import { isTemporary, type Result } from '@/lib/result';
+import type { Result } from '@/lib/result';
 import type { KeptDraft, SaveReply } from './_components/draft-keeper';
 
 /** Keeps a draft; when another was kept in between, that one comes back so that both can be offered. */
@@ -25,9 +25,9 @@ export async function saveDraftAction(
     return { kind: 'kept', revision: result.value.revision, at: result.value.savedAt };
   }
   const { code, message } = result.problem;
-  if (code !== 'stale') return { kind: 'refused', message, temporary: isTemporary(code) };
+  if (code !== 'stale') return { kind: 'refused', message, signIn: code === 'unauthenticated' };
   const kept = await readPractical(actor, { practicalId });
-  if (!kept.ok) return { kind: 'refused', message: kept.problem.message, temporary: true };
+  if (!kept.ok) return { kind: 'refused', message: kept.problem.message, signIn: false };
   const { draft } = kept.value;
   return {
     kind: 'stale',

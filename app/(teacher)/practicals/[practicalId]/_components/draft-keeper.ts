@@ -9,13 +9,13 @@ export interface KeptDraft {
 export type SaveReply =
   | { kind: 'kept'; revision: number; at: string }
   | { kind: 'stale'; message: string; there: KeptDraft }
-  | { kind: 'refused'; message: string; temporary: boolean };
+  | { kind: 'refused'; message: string; signIn: boolean };
 
 /** Where what is typed stands: kept on the server, on its way, or on this device alone. */
 export type KeepState =
   | { kind: 'kept'; at: string }
   | { kind: 'keeping' }
-  | { kind: 'waiting'; message: string }
+  | { kind: 'waiting'; message: string; signIn: boolean }
   | { kind: 'stale'; message: string; there: KeptDraft };
 
 /** What was typed on this device and the server has not confirmed; `sent` went out, and may have arrived unheard. */
@@ -40,6 +40,7 @@ const PAUSE = 800;
 const FIRST_RETRY = 2_000;
 const LONGEST_RETRY = 30_000;
 const MOVED_ON = 'This practical was changed in another place since you typed here.';
+const SIGNED_OUT = 'You are signed out. What you typed is on this device and is sent when you are back:';
 const NOT_REACHED = 'The server does not answer. What you typed is on this device and is sent when it does.';
 
 /** Whether two drafts say the same; a database gives keys back in its own order. */
@@ -154,14 +155,15 @@ export class DraftKeeper {
     this.to.onState({ kind: 'keeping' });
     const reply = await this.to
       .save(this.revision, sent)
-      .catch((): SaveReply => ({ kind: 'refused', message: NOT_REACHED, temporary: true }));
+      .catch((): SaveReply => ({ kind: 'refused', message: NOT_REACHED, signIn: false }));
     if (reply.kind === 'kept') this.onKept(sent, reply);
     else if (reply.kind === 'stale' && isSameDraft(sent, reply.there.content)) this.onKept(sent, reply.there);
     else if (reply.kind === 'stale') {
       this.stale = true;
       this.to.onState(reply);
     } else {
-      this.to.onState({ kind: 'waiting', message: reply.message });
+      const { signIn } = reply;
+      this.to.onState({ kind: 'waiting', message: signIn ? SIGNED_OUT : reply.message, signIn });
       this.schedule(this.retry);
       this.retry = Math.min(this.retry * 2, LONGEST_RETRY);
     }

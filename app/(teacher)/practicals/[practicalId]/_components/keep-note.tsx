@@ -13,7 +13,12 @@ export function KeepNote({ keep }: { keep: KeepState }) {
         </>
       ) : null}
       {keep.kind === 'keeping' ? 'keeping …' : null}
-      {keep.kind === 'waiting' ? `not kept yet. ${keep.message}` : null}
+      {keep.kind === 'waiting' ? `not kept yet. ${keep.message} ` : null}
+      {keep.kind === 'waiting' && keep.signIn ? (
+        <a href="/sign-in" target="_blank" rel="noreferrer" className="link">
+          sign in in another tab
+        </a>
+      ) : null}
       {keep.kind === 'stale' ? 'changed in another place' : null}
     </p>
   );

@@ -6,10 +6,9 @@ import { ButtonRow } from '@/components/ui/button-row';
 import { SelectField } from '@/components/ui/select-field';
 import { Heading } from '@/components/ui/titles';
 import type { DraftLine } from '@/lib/practicals/draft';
-import { DraftField } from './draft-field';
 import { lineOf, useEditor } from './editor-context';
 import { sizesOf } from './read-draft';
-import type { Sheet } from './use-sheet';
+import type { SheetDesk } from './sheet-desk';
 
 const YES_NO = { '': null, yes: true, no: false } as const;
 const SET = { '': null, each: 'each', worst: 'worst' } as const;
@@ -18,8 +17,8 @@ function isKey<Keys extends object>(keys: Keys, key: string): key is Extract<key
   return Object.hasOwn(keys, key);
 }
 
-/** One line by itself: its drawing, its note, how its pieces are read, its place in the list. */
-export function LineDetail({ lineId, sheet }: { lineId: string; sheet: Sheet }) {
+/** One line by itself: its drawing, how its pieces are read, its place in the list. */
+export function LineDetail({ lineId, sheet }: { lineId: string; sheet: SheetDesk }) {
   const { desk, unit } = useEditor();
   const found = lineOf(desk.draft.lines, lineId);
   if (!found) return null;
@@ -36,24 +35,24 @@ export function LineDetail({ lineId, sheet }: { lineId: string; sheet: Sheet }) 
     <section aria-labelledby="line-heading" className="mt-8">
       <div className="mb-3 flex flex-wrap items-center gap-x-4 gap-y-2">
         <Heading id="line-heading" className="text-[1.4375rem] leading-7 font-[660] first-letter:uppercase">
-          {name}
+          {name}, how its pieces are read
         </Heading>
         <ButtonRow className="lg:ml-auto">
           <Button
             size="small"
             notYet={index === 0 ? 'it is the first line' : null}
-            onClick={() => sheet.moveLine(index, -1, 'label')}
+            onClick={() => sheet.move(index, index - 1, null)}
           >
             move up
           </Button>
           <Button
             size="small"
-            notYet={index === sheet.lines.length - 1 ? 'it is the last line' : null}
-            onClick={() => sheet.moveLine(index, 1, 'label')}
+            notYet={index === desk.draft.lines.length - 1 ? 'it is the last line' : null}
+            onClick={() => sheet.move(index, index + 1, null)}
           >
             move down
           </Button>
-          <Button size="small" kind="refuse" onClick={() => sheet.removeLine(index)}>
+          <Button size="small" kind="refuse" onClick={() => sheet.remove(index)}>
             remove this line
           </Button>
         </ButtonRow>
@@ -67,7 +66,6 @@ export function LineDetail({ lineId, sheet }: { lineId: string; sheet: Sheet }) 
           </p>
         )}
         <div className="grid gap-4">
-          <DraftField path={`lines.${index}.note`} label="note for the students" optional />
           <SelectField
             label="thickness and width"
             value={line.swap === null ? '' : line.swap ? 'yes' : 'no'}

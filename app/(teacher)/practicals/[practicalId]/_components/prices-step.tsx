@@ -1,8 +1,10 @@
 'use client';
 
+import { type RefObject, useEffect, useRef, useState } from 'react';
+import type { TriedPiece } from '@/lib/practicals/try-piece';
 import { ChecksEditor } from './checks-editor';
 import { CutList } from './cut-list';
-import { useEditor } from './editor-context';
+import { type Selection, useEditor } from './editor-context';
 import { LineDetail } from './line-detail';
 import { SizeEditor } from './size-editor';
 import { useSheet } from './use-sheet';
@@ -11,16 +13,50 @@ import { useSheet } from './use-sheet';
 export function PricesStep() {
   const { selection } = useEditor();
   const sheet = useSheet();
+  const [tried, setTried] = useState<Record<string, TriedPiece>>({});
+  const detail = useRef<HTMLDivElement>(null);
+  useWayBack(selection, detail);
   return (
     <>
-      <CutList sheet={sheet} />
-      {selection.kind === 'size' ? (
-        <SizeEditor key={`${selection.lineId} ${selection.axis}`} {...selection} />
-      ) : selection.kind === 'checks' ? (
-        <ChecksEditor lineId={selection.lineId} />
-      ) : (
-        <LineDetail lineId={selection.lineId} sheet={sheet} />
-      )}
+      <CutList {...sheet} />
+      <div ref={detail} tabIndex={-1} className="scroll-mt-4">
+        {selection.kind === 'size' ? (
+          <SizeEditor
+            key={`${selection.lineId} ${selection.axis}`}
+            {...selection}
+            tried={tried}
+            onTry={(lineId, piece) => setTried({ ...tried, [lineId]: piece })}
+          />
+        ) : selection.kind === 'checks' ? (
+          <ChecksEditor lineId={selection.lineId} />
+        ) : (
+          <LineDetail lineId={selection.lineId} sheet={sheet.sheet} />
+        )}
+      </div>
     </>
   );
+}
+
+/** What was opened by keyboard takes the cursor along, and Escape brings it back to the cell. */
+function useWayBack(selection: Selection, detail: RefObject<HTMLElement | null>): void {
+  const from = useRef<HTMLElement | null>(null);
+  const seen = useRef(selection);
+  useEffect(() => {
+    if (seen.current === selection) return;
+    seen.current = selection;
+    const cell = document.activeElement;
+    const isCell = cell instanceof HTMLElement && cell.closest('table') !== null;
+    if (isCell && cell.matches(':focus-visible')) {
+      from.current = cell;
+      detail.current?.focus();
+    } else detail.current?.scrollIntoView({ block: 'nearest' });
+  }, [selection, detail]);
+  useEffect(() => {
+    const sheet = detail.current;
+    const goBack = (event: KeyboardEvent) => {
+      if (event.key === 'Escape' && !event.defaultPrevented) from.current?.focus();
+    };
+    sheet?.addEventListener('keydown', goBack);
+    return () => sheet?.removeEventListener('keydown', goBack);
+  }, [detail]);
 }

@@ -12,7 +12,7 @@ import { LONGEST_REASON } from '@/lib/contracts/practicals';
 import type { DepartmentRubric } from '@/lib/data/practicals/department-rubric';
 import { changesSince } from '@/lib/practicals/changes-since';
 import { departmentDifferences } from '@/lib/practicals/department-differences';
-import type { ParsedDraft } from '@/lib/practicals/parse-draft';
+import { type ParsedDraft, parseDraft } from '@/lib/practicals/parse-draft';
 import { sameInEffect } from '@/lib/practicals/same-in-effect';
 import { publishVersionAction } from '../actions';
 import type { Editor } from './editor-context';
@@ -39,7 +39,7 @@ export function PublishButton(props: PublishButtonProps) {
   const unchanged = parsed.ok && latest !== null && sameInEffect(latest, parsed);
 
   async function ask() {
-    if (!parsed.ok) {
+    if (!parseDraft(desk.now()).ok) {
       onBadFields();
       return;
     }

@@ -1,22 +1,35 @@
 'use client';
 
-import { Button } from '@/components/ui/button';
 import { classNames } from '@/components/ui/class-names';
-import { typeAt } from '@/lib/practicals/draft-paths';
 import { fieldName } from '@/lib/practicals/field-names';
 import type { PlacedFinding } from '@/lib/practicals/place-findings';
 import { NOTE_START, ROW } from './cut-list-layout';
+import type { RowNote } from './cut-list-row';
 import { fieldId, useEditor } from './editor-context';
+import { FindingText } from './finding-text';
 
-/** What is wrong or worth seeing in a row, below it, hung from the field by a leader. */
+/** What is wrong or worth seeing in a row outside the lines, hung below it. */
 export function RowNotes({ base, fields }: { base: string; fields: readonly string[] }) {
   const { errorsAt, findings } = useEditor();
-  const notes = fields.flatMap((field) => {
+  return <NotesBelow notes={notesOf(base, fields, errorsAt, findings)} />;
+}
+
+export function notesOf(
+  base: string,
+  fields: readonly string[],
+  errorsAt: (path: string) => string[],
+  findings: readonly PlacedFinding[],
+): RowNote[] {
+  return fields.flatMap((field) => {
     const path = `${base}.${field}`;
     const errors = errorsAt(path);
     const found = findings.filter((finding) => finding.path === path);
     return errors.length > 0 || found.length > 0 ? [{ field, path, errors, found }] : [];
   });
+}
+
+/** Notes below a row, each hung from its field by a leader. */
+export function NotesBelow({ notes }: { notes: readonly RowNote[] }) {
   if (notes.length === 0) return null;
   return (
     <tr className={classNames(ROW, 'border-b border-hair pb-3')}>
@@ -40,25 +53,5 @@ export function RowNotes({ base, fields }: { base: string; fields: readonly stri
         </td>
       ))}
     </tr>
-  );
-}
-
-/** A finding with the press that settles it, where one does. */
-export function FindingText({ path, text, setTo, isNote }: PlacedFinding) {
-  const { desk } = useEditor();
-  return (
-    <p className={classNames('max-w-[72ch] text-label', isNote ? 'text-ink-2' : 'font-[520]')}>
-      {text}{' '}
-      {setTo === null ? null : (
-        <Button
-          kind="quiet"
-          size="small"
-          className="min-h-6 px-0 py-0"
-          onClick={() => desk.edit((draft) => typeAt(draft, path, setTo))}
-        >
-          set it to the {setTo}
-        </Button>
-      )}
-    </p>
   );
 }

@@ -1,12 +1,13 @@
 'use client';
 
 import { Heading } from '@/components/ui/titles';
+import { CopyThis } from './copy-this';
 import { DraftField } from './draft-field';
 import { useEditor } from './editor-context';
 
 /** What students are given: the title, the wood, and what to do with it. */
 export function TaskStep() {
-  const { unit } = useEditor();
+  const { unit, desk, practicalId } = useEditor();
   const inWords = unit === 'in' ? 'inches' : 'millimetres';
   return (
     <div className="grid gap-x-12 gap-y-8 lg:grid-cols-[minmax(0,5fr)_minmax(0,4fr)]">
@@ -36,6 +37,8 @@ export function TaskStep() {
           <DraftField path="blank.length" label="length" />
         </div>
         <DraftField path="kerf" label="kerf" optional className="max-w-40" hint="How wide the saw cuts." />
+        <Heading className="mt-4">Another one like it</Heading>
+        <CopyThis {...{ practicalId, desk }} />
       </section>
     </div>
   );

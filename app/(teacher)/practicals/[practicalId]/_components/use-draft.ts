@@ -3,6 +3,7 @@
 import { useEffect, useRef, useState } from 'react';
 import { toast } from 'sonner';
 import type { PracticalDraft } from '@/lib/practicals/draft';
+import { shareDraft } from '@/lib/practicals/share-unchanged';
 import { saveDraftAction } from '../actions';
 import { DraftKeeper, type KeepState, type KeptDraft } from './draft-keeper';
 import { localStoreOf, readLocalCopy } from './local-copy';
@@ -10,7 +11,9 @@ import { localStoreOf, readLocalCopy } from './local-copy';
 export interface DraftDesk {
   draft: PracticalDraft;
   keep: KeepState;
-  /** Changes a copy of the draft and keeps it. */
+  /** The draft as it is this moment, for what happens between two drawings. */
+  now(): PracticalDraft;
+  /** Changes a copy of the draft and keeps it; lines that say the same stay the same objects. */
   edit(change: (draft: PracticalDraft) => void): void;
   replace(draft: PracticalDraft): void;
   /** Saves what is not kept yet; the kept revision, or null when it could not be kept. */
@@ -42,37 +45,44 @@ export function useDraft(practicalId: string, opened: KeptDraft): DraftDesk {
       toast('What you typed before is here again.');
       keeper.bringBack(copy, first);
     }
+    const again = () => void keeper.keepNow();
+    const leaving = () => document.visibilityState === 'hidden' && again();
+    window.addEventListener('online', again);
+    window.addEventListener('focus', again);
+    document.addEventListener('visibilitychange', leaving);
     return () => {
+      window.removeEventListener('online', again);
+      window.removeEventListener('focus', again);
+      document.removeEventListener('visibilitychange', leaving);
       void keeper.keepNow();
       keeper.stop();
     };
   }, [practicalId, keeper, first]);
 
-  function replace(next: PracticalDraft) {
-    latest.current = next;
-    showDraft(next);
-    keeper.change(next);
-  }
+  const [verbs] = useState(() => {
+    const replace = (next: PracticalDraft) => {
+      const shared = shareDraft(latest.current, next);
+      latest.current = shared;
+      showDraft(shared);
+      keeper.change(shared);
+    };
+    return {
+      replace,
+      now: () => latest.current,
+      edit(change: (draft: PracticalDraft) => void) {
+        const next = structuredClone(latest.current);
+        change(next);
+        replace(next);
+      },
+      keepNow: async () => ((await keeper.keepNow()) ? keeper.keptRevision : null),
+      keepHere: (there: KeptDraft) => keeper.settle(latest.current, there.revision),
+      takeThere(there: KeptDraft) {
+        latest.current = there.content;
+        showDraft(there.content);
+        keeper.take(there);
+      },
+    };
+  });
 
-  return {
-    draft,
-    keep,
-    replace,
-    edit(change) {
-      const next = structuredClone(latest.current);
-      change(next);
-      replace(next);
-    },
-    async keepNow() {
-      return (await keeper.keepNow()) ? keeper.keptRevision : null;
-    },
-    keepHere(there) {
-      keeper.settle(latest.current, there.revision);
-    },
-    takeThere(there) {
-      latest.current = there.content;
-      showDraft(there.content);
-      keeper.take(there);
-    },
-  };
+  return { draft, keep, ...verbs };
 }
