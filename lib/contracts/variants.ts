@@ -28,6 +28,8 @@ export const makeVariantsInput = z.strictObject({
   variants: z
     .array(
       z.strictObject({
+        /** As it was proposed: "B". */
+        letter: z.string().regex(/^[A-Z]{1,2}$/, 'A variant has a letter.'),
         lines: z
           .array(z.strictObject({ lineId: z.string().max(64), width: size, length: size }))
           .min(1)

@@ -4,6 +4,7 @@ import type { Phrase } from './compare-types';
 import { fitsInStrips, isLikeWood, woodChange, woodOfAll } from './propose-variants-fit';
 import { type NearestLent, nearestLent, withReach } from './propose-variants-lent';
 import { type OtherCutList, WOOD_PERCENT } from './propose-variants-types';
+import { lentWords, wordsOfProposal } from './propose-variants-words';
 import type { Task } from './task';
 
 export interface VariantJudgement {
@@ -11,6 +12,8 @@ export interface VariantJudgement {
   lent: Map<string, NearestLent>;
   /** Where it leaves the rule that variants are proposed by; none of it keeps anyone from making it. */
   remarks: Phrase[];
+  /** What it changes and keeps, and what becomes of a borrowed piece where none passes. */
+  words: Phrase[];
 }
 
 /** Holds sizes that a teacher chose against the rule of the proposals, and each line against what could be lent to it. */
@@ -28,7 +31,13 @@ export function judgeVariant(
       return nearest ? [[line.id, nearest] as const] : [];
     }),
   );
-  return { lent, remarks: [...passRemarks(lines, lent), ...stockRemarks(task, cutList)] };
+  const passes = passRemarks(lines, lent);
+  const apart = passes.length === 0 ? [lentWords(rubric)] : [];
+  return {
+    lent,
+    remarks: [...passes, ...stockRemarks(task, cutList)],
+    words: [...wordsOfProposal(task, cutList), ...apart],
+  };
 }
 
 function passRemarks(lines: Rubric['lines'], lent: VariantJudgement['lent']): Phrase[] {

@@ -7,9 +7,9 @@ import { woodChange, woodOfAll } from './propose-variants-fit';
 import { type Stop, WOOD_PERCENT } from './propose-variants-types';
 import type { Task } from './task';
 
-/** What a variant moves, what it takes of the wood, and what becomes of a borrowed piece. */
-export function wordsOfProposal(task: Task, rubric: Rubric, cutList: CutList): Phrase[] {
-  return [...moveWords(task.cutList, cutList), woodWords(task, cutList), lentWords(rubric)];
+/** What a variant moves, and what it takes of the wood. */
+export function wordsOfProposal(task: Task, cutList: CutList): Phrase[] {
+  return [...moveWords(task.cutList, cutList), woodWords(task, cutList)];
 }
 
 interface Move {
@@ -53,10 +53,15 @@ function woodWords(task: Task, cutList: CutList): Phrase {
   return [`It takes ${percent} percent ${tenths > 0 ? 'more' : 'less'} wood than the original.`];
 }
 
-function lentWords({ grossLimit }: Rubric): Phrase {
+/** What becomes of a borrowed piece where none passes. */
+export function lentWords({ grossLimit }: Rubric): Phrase {
   return grossLimit === null
-    ? ['A borrowed piece is past the last band twice over on one size at least.']
-    : ['A borrowed piece is past the gross limit of ', { ticks: grossLimit }, ': not that part.'];
+    ? ['Any piece borrowed from another is past the last band twice over somewhere.']
+    : [
+        'Any piece borrowed from another is past the gross limit of ',
+        { ticks: grossLimit },
+        ': not that part.',
+      ];
 }
 
 /** Which line stops the next variant, why, and what gives it room. */

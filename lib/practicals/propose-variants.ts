@@ -37,7 +37,7 @@ export function proposeVariants(question: VariantQuestion): VariantProposals {
   const choice = chooseApart(candidates, count);
   const proposals = choice.chosen.map(({ lines }) => {
     const cutList = cutListOf(lines);
-    return { cutList, words: wordsOfProposal(task, rubric, cutList) };
+    return { cutList, words: wordsOfProposal(task, cutList) };
   });
   return { proposals, step, stopped: stoppedBy(stop ?? choice.stop) };
 

@@ -15,7 +15,8 @@ export function asProposed({ practicalId, original, proposals }: ProposedVariant
   return {
     practicalId,
     versionId: original.versionId,
-    variants: proposals.map(({ cutList }) => ({
+    variants: proposals.map(({ letter, cutList }) => ({
+      letter,
       lines: cutList.lines.map(({ id, target: { width, length } }) => ({ lineId: id, width, length })),
     })),
   };

@@ -19,6 +19,9 @@ export interface MadeVariant {
   title: string;
 }
 
+/** The most that are proposed at a time. */
+const MOST_AT_ONCE = 6;
+
 /** Makes practicals of other sizes from the latest version, as drafts; letters go on after those that there are. */
 export const makeVariants = defineVerb({
   action: 'practical.change',
@@ -33,11 +36,13 @@ export const makeVariants = defineVerb({
     if (original.versionId !== input.versionId) {
       return refuse('stale', 'Another version was published since. Nothing was made: propose again from it.');
     }
+    const titles = variants.map(({ title }) => title);
+    const letters = input.variants.map(({ letter }) => letter);
+    const free = nextLetters(titles, MOST_AT_ONCE);
+    if (new Set(letters).size < letters.length || !letters.every((letter) => free.includes(letter))) {
+      refuse('stale', 'Other variants were made since. Nothing was made: propose again beside them.');
+    }
     const cutLists = readCutLists(context, original);
-    const letters = nextLetters(
-      variants.map(({ title }) => title),
-      cutLists.length,
-    );
     const made: MadeVariant[] = [];
     for (const [index, cutList] of cutLists.entries()) {
       const title = variantTitle(original.task.title, letters[index] ?? '');

@@ -73,9 +73,9 @@ describe('making variants', () => {
       { lineId: 'key', width, length },
     ];
     for (const variants of [
-      [first, first],
-      [{ lines: lines(1, 2).slice(1) }],
-      [{ lines: [...lines(1, 2), ...lines(1, 2)] }],
+      [first, { ...first, letter: 'C' }],
+      [{ letter: 'B', lines: lines(1, 2).slice(1) }],
+      [{ letter: 'B', lines: [...lines(1, 2), ...lines(1, 2)] }],
     ]) {
       expect(await makeVariants(teacher, { ...input, variants })).toMatchObject({
         ok: false,
@@ -84,13 +84,30 @@ describe('making variants', () => {
     }
     expect(await countPracticals(school)).toEqual(before);
     const [made] = valueFrom(
-      await makeVariants(teacher, { ...input, variants: [{ lines: lines(25_400_000, 254_000_000) }] }),
+      await makeVariants(teacher, {
+        ...input,
+        variants: [{ letter: 'B', lines: lines(25_400_000, 254_000_000) }],
+      }),
     );
     const { draft } = valueFrom(await readPractical(teacher, { practicalId: made?.practicalId }));
     expect(draft.content.lines).toMatchObject([
       { thickness: '3/4', width: '0.1', length: '1' },
       { thickness: '3/4', width: '0.1', length: '1' },
     ]);
+  });
+
+  it('keeps the letters of those chosen, and refuses one that is taken or not next', async () => {
+    const { practicalId } = await publishedStarter(teacher, 'desk-caddy');
+    const input = asProposed(await propose(practicalId, 3));
+    const [first, , third] = input.variants;
+    const made = valueFrom(await makeVariants(teacher, { ...input, variants: [first, third] }));
+    expect(made.map(({ title }) => title)).toEqual(['Desk caddy, variant B', 'Desk caddy, variant D']);
+    for (const variants of [[first], [{ ...first, letter: 'A' }], [{ ...first, letter: 'Q' }]]) {
+      expect(await makeVariants(teacher, { ...input, variants })).toMatchObject({
+        problem: { code: 'stale' },
+      });
+    }
+    expect((await propose(practicalId, 1)).proposals.map(({ letter }) => letter)).toEqual(['E']);
   });
 
   it('refuses sizes of a version that is no longer the latest', async () => {
@@ -142,8 +159,11 @@ describe('making variants', () => {
   it.each([
     ['no practical', { practicalId: 'mine' }],
     ['nothing chosen', { variants: [] }],
-    ['a size of nothing', { variants: [{ lines: [{ lineId: 'stick', width: 0, length: 1 }] }] }],
-    ['a thickness', { variants: [{ lines: [{ lineId: 'stick', width: 1, length: 1, thickness: 1 }] }] }],
+    ['a size of nothing', { variants: [{ letter: 'B', lines: [{ lineId: 'stick', width: 0, length: 1 }] }] }],
+    [
+      'a thickness',
+      { variants: [{ letter: 'B', lines: [{ lineId: 'stick', width: 1, length: 1, thickness: 1 }] }] },
+    ],
   ])('refuses %s', async (_, wrong) => {
     const { practicalId } = await publishedStarter(teacher, 'six-stick');
     const input = { ...asProposed(await propose(practicalId)), ...wrong };

@@ -129,7 +129,6 @@ describe('proposing', () => {
       ['Length of stick: ', { ticks: ticksOf('3 3/4') }, ' becomes ', { ticks: ticksOf('4 1/8') }, '.'],
       ['Length of key: ', { ticks: ticksOf('1 1/2') }, ' becomes ', { ticks: ticksOf('1 1/8') }, '.'],
       ['It takes 7.5 percent more wood than the original.'],
-      ['A borrowed piece is past the gross limit of ', { ticks: ticksOf('1/4') }, ': not that part.'],
     ]);
   });
 
@@ -239,6 +238,18 @@ describe('strips from the blank', () => {
 });
 
 describe('sizes changed by hand', () => {
+  it('say that nothing passes as long as it is so', () => {
+    const [proposal] = proposeVariants({ task, rubric, others: [], count: 1, graduation: EIGHTH }).proposals;
+    const lent = [
+      'Any piece borrowed from another is past the gross limit of ',
+      { ticks: ticksOf('1/4') },
+      ': not that part.',
+    ];
+    const judged = judgeVariant(task, rubric, proposal?.cutList ?? changed('4'), original);
+    expect(judged).toMatchObject({ remarks: [], words: [...(proposal?.words ?? []), lent] });
+    expect(judgeVariant(task, rubric, changed('4'), original).words).not.toContainEqual(lent);
+  });
+
   const { task, rubric } = starter('desk-caddy');
   const changed = (size: string): CutList => ({
     lines: task.cutList.lines.map((line) =>

@@ -37,8 +37,8 @@ export function VariantTable({ list, original }: VariantTableProps) {
           />
           <DrawingCell original={cutList} variant={cutList} />
           <SizesCell original={cutList} variant={cutList} unit={unit} />
-          <Cell>{sayPeriods(periods)}</Cell>
-          <Cell className="max-sm:hidden">its own</Cell>
+          <Cell className="pt-3 align-top">{sayPeriods(periods)}</Cell>
+          <Cell className="pt-3 align-top max-sm:hidden">its own</Cell>
         </tr>
         {variants.map((variant) => (
           <VariantRow key={variant.practicalId} variant={variant} original={original} unit={unit} />
@@ -59,14 +59,15 @@ function VariantRow({ variant, original, unit }: VariantRowProps) {
   return (
     <tr>
       <NameCell href={`/practicals/${variant.practicalId}`} name={variant.name} state={stateOf(variant)}>
-        <div className="mt-1 sm:hidden">
-          <PricesCell variant={variant} original={original} unit={unit} />
+        <SizesUnder original={cutList} variant={variant.cutList} unit={unit} />
+        <div className="mt-1 text-label font-[440] sm:hidden">
+          prices: <PricesCell variant={variant} original={original} unit={unit} />
         </div>
       </NameCell>
       <DrawingCell original={cutList} variant={variant.cutList} />
       <SizesCell original={cutList} variant={variant.cutList} unit={unit} />
-      <Cell>{sayPeriods(variant.periods)}</Cell>
-      <Cell className="max-sm:hidden">
+      <Cell className="pt-3 align-top">{sayPeriods(variant.periods)}</Cell>
+      <Cell className="pt-3 align-top max-sm:hidden">
         <PricesCell variant={variant} original={original} unit={unit} />
       </Cell>
     </tr>
@@ -82,7 +83,7 @@ interface NameCellProps {
 
 function NameCell({ href, name, state, children }: NameCellProps) {
   return (
-    <RowHead className="whitespace-nowrap">
+    <RowHead className="align-top whitespace-nowrap">
       <Link className="link inline-block py-1 font-title text-lead font-[620]" href={href}>
         {name}
       </Link>
@@ -94,15 +95,31 @@ function NameCell({ href, name, state, children }: NameCellProps) {
 
 function DrawingCell({ original, variant }: { original: CutList; variant: CutList | null }) {
   return (
-    <Cell className="max-lg:hidden">
+    <Cell className="align-top max-lg:hidden">
       {variant ? <VariantDrawing original={original} variant={variant} width={190} height={96} /> : null}
     </Cell>
   );
 }
 
-function SizesCell({ original, variant, unit }: { original: CutList; variant: CutList | null; unit: Unit }) {
+interface SizesProps {
+  original: CutList;
+  variant: CutList | null;
+  unit: Unit;
+}
+
+/** On a phone the sizes stand below the name. */
+function SizesUnder({ original, variant, unit }: SizesProps) {
+  if (!variant) return null;
   return (
-    <Cell className="max-md:hidden">
+    <div className="mt-1 text-label font-[440] md:hidden">
+      <SizesOfList original={original} variant={variant} unit={unit} />
+    </div>
+  );
+}
+
+function SizesCell({ original, variant, unit }: SizesProps) {
+  return (
+    <Cell className="pt-3 align-top max-md:hidden">
       {variant ? (
         <SizesOfList original={original} variant={variant} unit={unit} />
       ) : (

@@ -3,7 +3,6 @@
 import { CheckboxField } from '@/components/ui/choice';
 import { PhraseList } from '@/components/ui/phrase-list';
 import type { ProposedVariantsView } from '@/lib/data/practicals/propose-variants';
-import type { Phrase } from '@/lib/practicals/compare-types';
 import { VariantDrawing } from '../../_components/variant-drawing';
 import { ReviewOfVariant } from './review-of-variant';
 import { SizeTable } from './size-table';
@@ -12,13 +11,12 @@ import type { MovingAxis, Proposed } from './use-proposals';
 interface ProposalSheetProps {
   view: ProposedVariantsView;
   proposed: Proposed;
-  words: readonly Phrase[];
   onType(lineId: string, axis: MovingAxis, text: string): void;
   onTake(isTaken: boolean): void;
 }
 
 /** One proposal: its sizes beside the original's, its pieces over the original's, what is to be said of it. */
-export function ProposalSheet({ view, proposed, words, onType, onTake }: ProposalSheetProps) {
+export function ProposalSheet({ view, proposed, onType, onTake }: ProposalSheetProps) {
   const { original, unit } = view;
   const name = `variant ${proposed.letter}`;
   const id = `proposal-${proposed.letter}`;
@@ -47,11 +45,8 @@ export function ProposalSheet({ view, proposed, words, onType, onTake }: Proposa
           <p className="mt-1 text-small text-ink-2">
             One piece of each line; the original dashed where it differs.
           </p>
-          {proposed.isChanged ? (
-            <p className="mt-3 font-[580]">Changed by hand.</p>
-          ) : (
-            <PhraseList phrases={words} unit={unit} className="mt-3 text-label" />
-          )}
+          {proposed.isChanged ? <p className="mt-3 font-[580]">Changed by hand.</p> : null}
+          <PhraseList phrases={proposed.judgement.words} unit={unit} className="mt-3 text-label" />
           <ReviewOfVariant view={view} proposed={proposed} />
         </div>
       </div>

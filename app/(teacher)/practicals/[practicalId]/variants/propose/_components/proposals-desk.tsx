@@ -11,7 +11,7 @@ import { Refusal } from '@/components/ui/refusal';
 import type { ProposedVariantsView } from '@/lib/data/practicals/propose-variants';
 import { makeVariantsAction } from '../../actions';
 import { ProposalSheet } from './proposal-sheet';
-import { useProposals } from './use-proposals';
+import { type Proposed, useProposals } from './use-proposals';
 
 /** The proposals beside the original: looked at, changed by hand, chosen and made. */
 export function ProposalsDesk({ view }: { view: ProposedVariantsView }) {
@@ -34,12 +34,11 @@ export function ProposalsDesk({ view }: { view: ProposedVariantsView }) {
           <PhraseText phrase={stopped.words} unit={unit} />
         </Notice>
       ) : null}
-      {shown.map((proposed, index) => (
+      {shown.map((proposed) => (
         <ProposalSheet
           key={proposed.letter}
           view={view}
           proposed={proposed}
-          words={proposals[index]?.words ?? []}
           onType={(lineId, axis, text) => type(proposed.letter, lineId, axis, text)}
           onTake={(isTaken) => take(proposed.letter, isTaken)}
         />
@@ -52,7 +51,7 @@ export function ProposalsDesk({ view }: { view: ProposedVariantsView }) {
             notYet={whyNotYet(taken)}
             disabled={making.pending}
             aria-busy={making.pending}
-            onClick={() => making.make(taken.map(({ cutList }) => cutList))}
+            onClick={() => making.make(taken)}
           >
             {making.pending ? 'making them …' : sayMake(taken.map(({ letter }) => letter))}
           </Button>
@@ -72,10 +71,11 @@ function useMaking(practicalId: string, versionId: string) {
   const [pending, start] = useTransition();
   const [refused, setRefused] = useState<string | null>(null);
 
-  function make(cutLists: ReturnType<typeof useProposals>['shown'][number]['cutList'][]) {
+  function make(taken: readonly Proposed[]) {
     setRefused(null);
-    const variants = cutLists.map(({ lines }) => ({
-      lines: lines.map(({ id, target: { width, length } }) => ({ lineId: id, width, length })),
+    const variants = taken.map(({ letter, cutList }) => ({
+      letter,
+      lines: cutList.lines.map(({ id, target: { width, length } }) => ({ lineId: id, width, length })),
     }));
     start(async () => {
       const reply = await makeVariantsAction({ practicalId, versionId, variants }).catch(() => null);
