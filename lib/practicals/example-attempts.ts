@@ -148,7 +148,8 @@ function poorAttempt(rubric: Rubric): Attempt {
   return attempt;
 }
 
-function dearestLevel({ levels }: Check): number {
+/** The level of a check that loses most. */
+export function dearestLevel({ levels }: Check): number {
   const most = Math.max(...levels.map(({ lose }) => lose));
   return levels.findIndex(({ lose }) => lose === most);
 }

@@ -1,6 +1,7 @@
 import type { Length } from '@/lib/length';
 import {
   type Attempt,
+  type Check,
   combineAttempts,
   type Line,
   type Points,
@@ -11,7 +12,7 @@ import type { RubricForm, Share } from '@/lib/scoring/rubric-form';
 import { pointsAsTyped } from './as-typed';
 import { isOneScale, pointsOfTotal, possiblePoints, totalPoints } from './both-scales';
 import type { Phrase } from './compare-types';
-import { exampleAttempts, targetAttempt } from './example-attempts';
+import { dearestLevel, exampleAttempts, targetAttempt } from './example-attempts';
 import { explainScore } from './explain-score';
 import { countSizes, pieceLabel } from './task';
 
@@ -30,6 +31,7 @@ export interface RuleEffects {
   late: Phrase;
   prediction: Phrase;
   close: Phrase;
+  work: Phrase;
 }
 
 const DAYS = 3;
@@ -53,6 +55,7 @@ export function ruleEffects(rubric: Rubric, form: RubricForm): RuleEffects {
     late: lateEffect(rubric),
     prediction: predictionEffect(rubric, form),
     close: closeEffect(form),
+    work: workEffect(rubric),
   };
 }
 
@@ -78,8 +81,11 @@ function nothing(rubric: Rubric): Attempt {
     sizes: {},
     checks: {},
   }));
-  const work = Object.fromEntries(rubric.workChecks.map(({ id, levels }) => [id, levels.length - 1]));
-  return { ...attempt, pieces, work };
+  return { ...attempt, pieces, work: worstOf(rubric.workChecks) };
+}
+
+function worstOf(checks: readonly Check[]): Record<string, number> {
+  return Object.fromEntries(checks.map((check) => [check.id, dearestLevel(check)]));
 }
 
 /** The first piece of a line off its targets, all else on target. */
@@ -253,4 +259,30 @@ function closeEffect({ policies }: RubricForm): Phrase {
       ? 'Guessing the total alone earns nothing.'
       : `Else, predicted 85 and measured ${say(8500 - closeWithin)}: ${say(close)} more; a point further off: nothing.`,
   ];
+}
+
+function workEffect(rubric: Rubric): Phrase {
+  if (rubric.workChecks.length === 0) return [];
+  const lost = lostBy(rubric, { ...targetAttempt(rubric), work: worstOf(rubric.workChecks) });
+  return [`Failing ${rubric.workChecks.length === 1 ? 'it' : 'all of them'} loses ${inBoth(rubric, lost)}.`];
+}
+
+/** "2 of 63, 3.17 of 100". */
+function inBoth(rubric: Rubric, lost: Points): string {
+  const own = `${say(lost)} of ${say(possiblePoints(rubric))}`;
+  return isOneScale(rubric)
+    ? own
+    : `${own}, ${say(pointsOfTotal(rubric, lost))} of ${say(totalPoints(rubric))}`;
+}
+
+/** What one piece of a line loses that is on target and fails each of its checks at its dearest; empty without checks. */
+export function checksEffect(rubric: Rubric, lineId: string): string {
+  const line = rubric.lines.find(({ id }) => id === lineId);
+  if (!line || line.checks.length === 0) return '';
+  const attempt = targetAttempt(rubric);
+  const piece = attempt.pieces.find((each) => each.lineId === lineId && each.ordinal === 1);
+  if (piece) piece.checks = worstOf(line.checks);
+  const faults =
+    line.checks.length === 1 ? `fails ${line.checks[0]?.label}` : `fails all ${line.checks.length} checks`;
+  return `${pieceLabel(line, 1)} on target that ${faults} loses ${inBoth(rubric, lostBy(rubric, attempt))}.`;
 }

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { lengthAsTyped } from '@/lib/practicals/as-typed';
 import type { PracticalDraft } from '@/lib/practicals/draft';
-import { type RuleEffects, ruleEffects } from '@/lib/practicals/rule-effects';
+import { checksEffect, type RuleEffects, ruleEffects } from '@/lib/practicals/rule-effects';
 import { comparedStarter } from '@/tests/support/compared';
 
 function say(rule: keyof RuleEffects, change: (draft: PracticalDraft) => void = () => {}): string {
@@ -73,6 +73,12 @@ describe('what a rule of the whole does, on the desk caddy', () => {
     expect(say('prediction')).toBe(
       'Of 21 sizes, 19 within 1/32 of yours, 11 of them read by number, and of 6 off-band sizes 4 caught: 2 more.',
     );
+    expect(say('work')).toBe('Failing it loses 1 of 63, 1.59 of 100.');
+    const { rubric } = comparedStarter('caddy');
+    expect(checksEffect(rubric, 'end')).toBe(
+      'end 1 on target that fails all 2 checks loses 2 of 63, 3.17 of 100.',
+    );
+    expect(checksEffect(rubric, 'none')).toBe('');
     expect(say('close')).toBe('Else, predicted 85 and measured 82: 1 more; a point further off: nothing.');
   });
 });

@@ -4,7 +4,6 @@ import { Segmented } from '@/components/ui/segmented';
 import type { Axis, SizeRule } from '@/lib/scoring';
 import { BandField } from './band-field';
 import { BandRows } from './band-rows';
-import { InstrumentNote } from './instrument-note';
 import type { SizeRuleDesk } from './use-size-rule';
 
 interface BandFieldsProps {
@@ -20,9 +19,9 @@ export function BandFields({ size, axis, off: [under, over], read }: BandFieldsP
   const { rule } = size;
   const shared = { size, axis, read };
   return (
-    <div className="mt-6 border-t border-hair pt-4">
+    <div className="min-w-0">
       {size.isOwn ? (
-        <div className="mb-4 flex flex-wrap items-end gap-x-8 gap-y-3">
+        <div className="mb-4 flex flex-wrap items-end gap-x-4 gap-y-3">
           <Segmented
             label="sides"
             showLabel
@@ -33,18 +32,18 @@ export function BandFields({ size, axis, off: [under, over], read }: BandFieldsP
             value={rule.mirrored ? 'alike' : 'apart'}
             onChange={(value) => size.change((each) => Object.assign(each, { mirrored: value === 'alike' }))}
           />
-          <div className="w-56">
+          <div className="w-40">
             <BandField
               size={size}
               suffix="cap"
-              label="most that this size loses, in points"
+              label="most this size loses"
               showLabel
               placeholder="no limit"
             />
           </div>
         </div>
       ) : null}
-      <div className="grid gap-x-10 gap-y-6 xl:grid-cols-[repeat(2,minmax(0,1fr))]">
+      <div className="grid grid-cols-[minmax(0,1fr)] gap-y-6">
         {rule.mirrored ? (
           <BandRows side="over" title={`over and under: ${over} and ${under}`} {...shared} />
         ) : (
@@ -53,7 +52,6 @@ export function BandFields({ size, axis, off: [under, over], read }: BandFieldsP
             <BandRows side="over" title={`over: ${over}`} {...shared} />
           </>
         )}
-        <InstrumentNote />
       </div>
     </div>
   );

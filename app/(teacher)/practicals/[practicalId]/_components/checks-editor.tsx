@@ -2,6 +2,7 @@
 
 import { Button } from '@/components/ui/button';
 import { Heading } from '@/components/ui/titles';
+import { checksEffect } from '@/lib/practicals/rule-effects';
 import { ChecksFields } from './checks-fields';
 import { lineOf, useEditor } from './editor-context';
 
@@ -12,6 +13,7 @@ export function ChecksEditor({ lineId }: { lineId: string | null }) {
   const found = lineOf(draft.lines, lineId);
   const own = found ? found.line.checks : draft.all.checks;
   const name = found ? found.line.label || `line ${found.index + 1}` : 'all lines';
+  const exampleId = lineId ?? draft.lines.find(({ checks }) => checks === null)?.id ?? null;
   const setOwn = (isOwn: boolean) =>
     desk.edit((next) => {
       const line = lineOf(next.lines, lineId)?.line;
@@ -32,6 +34,11 @@ export function ChecksEditor({ lineId }: { lineId: string | null }) {
           </p>
         ) : null}
       </div>
+      <p className="mb-4 max-w-[62ch] text-label text-ink-2">
+        What a rule cannot read. A fault loses its points beside the sizes; a piece never loses more than it
+        is worth.
+      </p>
+      <ChecksWorst lineId={exampleId} />
       {own ? (
         <ChecksFields
           base={found ? `lines.${found.index}.checks` : 'all.checks'}
@@ -41,5 +48,17 @@ export function ChecksEditor({ lineId }: { lineId: string | null }) {
         />
       ) : null}
     </section>
+  );
+}
+
+/** What a piece loses that fails every check at its dearest. */
+function ChecksWorst({ lineId }: { lineId: string | null }) {
+  const { parsed } = useEditor();
+  const phrase = parsed.ok && lineId !== null ? checksEffect(parsed.rubric, lineId) : '';
+  if (phrase === '') return null;
+  return (
+    <p className="mb-4 max-w-[62ch] border-l-edge border-ink pl-3 text-label font-[560] first-letter:uppercase">
+      {phrase}
+    </p>
   );
 }

@@ -1,6 +1,6 @@
 'use client';
 
-import { useState } from 'react';
+import { type ReactNode, useState } from 'react';
 import { layOutKnives } from '@/components/rule/knife-layout';
 import { RuleFace } from '@/components/rule/rule-face';
 import type { RuleVariant } from '@/components/rule/rule-layout';
@@ -14,7 +14,7 @@ import { KnifeHandles } from './knife-handles';
 import { marginOf } from './read-draft';
 import { ReadingTrack } from './reading-track';
 import { StairFields } from './stair-fields';
-import { useEdges } from './use-edges';
+import { type EdgeDesk, useEdges } from './use-edges';
 import type { SizeRuleDesk } from './use-size-rule';
 
 export const OFF: Record<Axis, [under: string, over: string]> = {
@@ -37,12 +37,12 @@ interface PriceOnRuleProps {
   target: Length;
   name: string;
   /** A reading to try on it; none while the draft cannot be priced. */
-  reading: { deviation: Length; price: string; onMove(deviation: Length): void } | null;
+  reading: { deviation: Length; price: string; said: ReactNode; onMove(deviation: Length): void } | null;
 }
 
 /** A price on its rule: its edges are knives, its prices stand on the steps, a reading slides along its foot. */
 export function PriceOnRule(props: PriceOnRuleProps) {
-  const { desk, unit } = useEditor();
+  const { desk } = useEditor();
   const margin = marginOf(desk.draft);
   const [under, over] = OFF[props.axis];
   return (
@@ -56,11 +56,6 @@ export function PriceOnRule(props: PriceOnRuleProps) {
           <RuleBoard {...props} {...{ variant, room, margin }} />
         </div>
       ))}
-      {margin > 0 ? (
-        <p className="mt-1 text-small text-ink-2">
-          reading margin <LengthText ticks={margin} unit={unit} />: each price begins this far past its edge
-        </p>
-      ) : null}
     </div>
   );
 }
@@ -89,25 +84,46 @@ function RuleBoard({ size, rule, target, name, reading, variant, room, margin }:
         <StairFields {...{ size, edges, rule, margin, layout, name }} />
         {size.isOwn ? <KnifeHandles {...{ edges, knives, layout, name }} /> : null}
       </div>
-      {reading ? <ReadingTrack {...reading} {...{ scale, layout, name }} /> : null}
-      {size.isOwn ? (
-        <p className="mt-1 flex min-h-6 flex-wrap items-center gap-x-2 text-small text-ink-2">
-          <output>
-            {edges.drag?.onto != null ? 'Let go here and the band between is taken out.' : edges.news?.text}
-          </output>
-          {edges.news?.before && !edges.drag ? (
-            <Button kind="quiet" size="small" className="min-h-6 px-0 py-0" onClick={edges.takeBack}>
-              take that back
-            </Button>
-          ) : null}
-          {edges.news || edges.drag ? null : (
-            <span>
-              Draw a knife along the rule; laid on its neighbour, it takes the band between out. Press the
-              stair to strike another.
-            </span>
-          )}
-        </p>
+      {reading ? (
+        <ReadingTrack
+          deviation={reading.deviation}
+          price={reading.price}
+          onMove={reading.onMove}
+          {...{ scale, layout, name }}
+        />
       ) : null}
+      {reading ? <output className="mt-1 block min-h-7 text-lead font-[620]">{reading.said}</output> : null}
+      <div className="mt-1 flex flex-wrap items-baseline justify-between gap-x-8 gap-y-1 text-small text-ink-2">
+        {size.isOwn ? <EdgeNews edges={edges} /> : null}
+        {margin > 0 ? (
+          <p>
+            reading margin <LengthText ticks={margin} unit={unit} />: each price begins this far past its edge
+          </p>
+        ) : null}
+      </div>
     </>
+  );
+}
+
+/** What was just done to the bands, with the way back; else how they are moved. */
+function EdgeNews({ edges }: { edges: EdgeDesk }) {
+  const { drag, news } = edges;
+  if (!drag && !news) {
+    return (
+      <p>
+        Draw a knife along the rule: it stops at its neighbours, and laid on one it takes the band between
+        out. Press the stair to strike another.
+      </p>
+    );
+  }
+  return (
+    <p className="flex min-h-6 flex-wrap items-center gap-x-2 text-ink">
+      <output>{drag?.onto != null ? 'Let go here and the band between is taken out.' : news?.text}</output>
+      {news?.before && !drag ? (
+        <Button kind="quiet" size="small" className="min-h-6 px-0 py-0" onClick={edges.takeBack}>
+          take that back
+        </Button>
+      ) : null}
+    </p>
   );
 }

@@ -89,7 +89,7 @@ export function ReadingTrack({ deviation, onMove, scale, layout, name, price }: 
         className="block h-auto w-full overflow-visible"
       >
         <path
-          d={`M${x} ${layout.edge - layout.foot}V0`}
+          d={deviation === 0 ? '' : `M${x} ${-layout.body * 0.42}V0`}
           className={classNames('[stroke-width:var(--pen-outline)]', focused ? 'stroke-act' : 'stroke-ink')}
         />
         <path

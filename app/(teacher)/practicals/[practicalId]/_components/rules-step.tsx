@@ -88,6 +88,7 @@ export function RulesStep() {
           Judged once for each student. One that nobody records is taken as you say here, or keeps the sheet
           open until somebody does.
         </p>
+        <RuleEffect effects={effects} rule="work" />
         <ChecksFields
           base="workChecks"
           checks={draft.workChecks}

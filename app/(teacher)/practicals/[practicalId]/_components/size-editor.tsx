@@ -12,9 +12,11 @@ import type { Axis, SizeRule } from '@/lib/scoring';
 import { BandFields } from './band-fields';
 import { lineOf, useEditor } from './editor-context';
 import { FindingNotes } from './finding-text';
+import { InstrumentNote } from './instrument-note';
 import { PresetKeys } from './preset-keys';
 import { OFF, PriceOnRule } from './price-on-rule';
 import { exampleLineOf, readSize, targetOf } from './read-draft';
+import { TriedSentence } from './tried-sentence';
 import { TryPiece } from './try-piece';
 import { type SizeRuleDesk, useSizeRule } from './use-size-rule';
 
@@ -74,8 +76,13 @@ export function SizeEditor({ lineId, axis, tried, onTry }: SizeEditorProps) {
         </p>
       ) : null}
       <FindingNotes path={size.base} className="mt-3" />
-      {trial ? <TryPiece {...trial.panel} axis={axis} /> : <NotTried lineId={lineId} />}
-      <BandFields size={size} axis={axis} off={OFF[axis]} read={read} />
+      <div className="mt-6 grid items-start gap-x-10 gap-y-8 lg:grid-cols-[minmax(0,1fr)_minmax(0,1fr)]">
+        <BandFields size={size} axis={axis} off={OFF[axis]} read={read} />
+        <div className="grid min-w-0 content-start gap-8">
+          {trial ? <TryPiece {...trial.panel} axis={axis} /> : <NotTried lineId={lineId} />}
+          <InstrumentNote />
+        </div>
+      </div>
     </section>
   );
 }
@@ -106,6 +113,7 @@ function useTrial(
     reading: {
       deviation: piece.deviations[axis],
       price: `loses ${pointsAsText(result.piece.sizes?.[axis].lose ?? 0)}`,
+      said: <TriedSentence {...{ rubric: parsed.rubric, line, axis, result }} />,
       onMove,
     },
     panel: {
@@ -126,7 +134,7 @@ function NotTried({ lineId }: { lineId: string | null }) {
     : lineId === null && desk.draft.lines.length > 0
       ? 'Every line has a price of its own for this size, so this one is used by none.'
       : 'A reading can be tried on the rule as soon as the cut list has a line.';
-  return <p className="mt-4 text-label text-ink-2">{text}</p>;
+  return <p className="text-label text-ink-2">{text}</p>;
 }
 
 function Owner({ size }: { size: SizeRuleDesk }) {

@@ -2,7 +2,8 @@
 
 import { useSearchParams } from 'next/navigation';
 import { classNames } from '@/components/ui/class-names';
-import type { EditorStep } from '@/lib/practicals/field-names';
+import { type EditorStep, stepOfPath } from '@/lib/practicals/field-names';
+import { useEditor } from './editor-context';
 
 const STEPS: { step: EditorStep; label: string }[] = [
   { step: 'task', label: 'task' },
@@ -25,6 +26,9 @@ interface StepsProps {
 }
 
 export function Steps({ current, wrong, onStep }: StepsProps) {
+  const { findings } = useEditor();
+  const found = { task: 0, prices: 0, rules: 0 };
+  for (const { path, isNote } of findings) if (!isNote) found[stepOfPath(path)] += 1;
   return (
     <nav aria-label="sheets of this practical">
       <ol className="flex flex-wrap gap-x-4 gap-y-1">
@@ -46,6 +50,15 @@ export function Steps({ current, wrong, onStep }: StepsProps) {
               {label}
               {wrong[step] > 0 ? (
                 <span className="text-label font-[640] text-refuse">{wrong[step]} to mend</span>
+              ) : null}
+              {wrong[step] === 0 && found[step] > 0 ? (
+                <span className="text-label font-[560]">
+                  <span
+                    aria-hidden
+                    className="mr-1 inline-block size-[7px] rounded-[50%] bg-ink align-middle"
+                  />
+                  {found[step]} to look at
+                </span>
               ) : null}
             </a>
           </li>

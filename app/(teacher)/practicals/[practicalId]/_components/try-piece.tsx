@@ -3,14 +3,14 @@
 import { useId } from 'react';
 import { KIND_WORDS } from '@/components/loss/loss-words';
 import { classNames } from '@/components/ui/class-names';
-import { LengthText } from '@/components/ui/fraction';
 import { pointsAsText } from '@/components/ui/points-text';
 import { Heading } from '@/components/ui/titles';
 import { isOneScale, pointsOfTotal } from '@/lib/practicals/both-scales';
 import { pieceLabel } from '@/lib/practicals/task';
 import type { TriedPiece, TriedResult } from '@/lib/practicals/try-piece';
-import { AXES, type Axis, type Line, type Points, type Rubric, type SizeSheet } from '@/lib/scoring';
+import { AXES, type Axis, type Line, type Rubric } from '@/lib/scoring';
 import { ReadingField } from './reading-field';
+import { Band, CELL, Loss, NUMBER, Sum } from './try-rows';
 
 interface TryPieceProps {
   rubric: Rubric;
@@ -20,9 +20,6 @@ interface TryPieceProps {
   result: TriedResult;
   onChange(tried: TriedPiece): void;
 }
-
-const CELL = 'py-1 pr-3 align-baseline last:pr-0';
-const NUMBER = `${CELL} text-right whitespace-nowrap`;
 
 /** One piece as it would be read: each size, each check, what each loses, and how it adds up in both scales. */
 export function TryPiece({ rubric, line, axis, tried, result, onChange }: TryPieceProps) {
@@ -36,7 +33,7 @@ export function TryPiece({ rubric, line, axis, tried, result, onChange }: TryPie
   );
   const name = pieceLabel(line, 1);
   return (
-    <section aria-labelledby={id} className="@container mt-4">
+    <section aria-labelledby={id} className="@container min-w-0">
       <div className="flex flex-wrap items-baseline gap-x-4 gap-y-1">
         <Heading id={id} className="first-letter:uppercase">
           {name}, if it reads so
@@ -48,7 +45,7 @@ export function TryPiece({ rubric, line, axis, tried, result, onChange }: TryPie
             : `1 of ${pointsAsText(sheet.possible)} is ${pointsAsText(pointsOfTotal(rubric, 100))} of ${pointsAsText(sheet.total)}.`}
         </p>
       </div>
-      <table className="tnum mt-1 w-full max-w-[52rem] border-t border-ink text-left text-text">
+      <table className="tnum mt-1 w-full border-t border-ink text-left text-text">
         <caption className="sr-only">what this piece loses</caption>
         <thead className="text-small text-ink-2">
           <tr className="border-b border-hair">
@@ -73,8 +70,8 @@ export function TryPiece({ rubric, line, axis, tried, result, onChange }: TryPie
         </thead>
         <tbody className="[&>tr]:border-b [&>tr]:border-hair">
           {AXES.map((each) => (
-            <tr key={each} className={each === axis ? 'font-[620]' : undefined}>
-              <th scope="row" className={classNames(CELL, 'font-[inherit]')}>
+            <tr key={each} className={each === axis ? 'font-[640]' : 'font-[440]'}>
+              <th scope="row" className={classNames(CELL, '[font-weight:inherit]')}>
                 {each}
               </th>
               <td className={CELL}>
@@ -166,67 +163,4 @@ export function TryPiece({ rubric, line, axis, tried, result, onChange }: TryPie
 
 function isOf(row: { lineId: string; ordinal: number }, line: Line): boolean {
   return row.lineId === line.id && row.ordinal === 1;
-}
-
-interface LossProps {
-  points: Points | null;
-  ofTotal: Points;
-  one: boolean;
-  signed?: boolean;
-}
-
-function Loss({ points, ofTotal, one, signed = false }: LossProps) {
-  const plus = signed && (points ?? 0) > 0 ? '+' : '';
-  return (
-    <>
-      <td className={NUMBER}>{points === null ? '' : `${plus}${pointsAsText(points)}`}</td>
-      {one ? null : <td className={NUMBER}>{`${plus}${pointsAsText(ofTotal)}`}</td>}
-    </>
-  );
-}
-
-function Sum({ label, strong, ...loss }: LossProps & { label: string; strong?: boolean }) {
-  return (
-    <tr className={strong ? 'font-[660]' : undefined}>
-      <th scope="row" colSpan={3} className={classNames(CELL, 'font-[inherit]')}>
-        {label}
-      </th>
-      <Loss {...loss} />
-    </tr>
-  );
-}
-
-interface BandProps {
-  rubric: Rubric;
-  line: Line;
-  axis: Axis;
-  size: SizeSheet | null;
-}
-
-/** Which band a reading fell in, whether the most that a size loses held it, and whether it is gross. */
-function Band({ rubric, line, axis, size }: BandProps) {
-  if (!size || size.deviation === null) return null;
-  const rule = line.sizes[axis];
-  const [bands, beyond] = size.deviation < 0 ? [rule.under, rule.beyondUnder] : [rule.over, rule.beyondOver];
-  const band = typeof size.band === 'number' ? bands[size.band] : undefined;
-  const edge = band?.within ?? bands.at(-1)?.within ?? 0;
-  const full = band?.lose ?? beyond;
-  const { grossLimit, margin, unit } = rubric;
-  const isGross = grossLimit !== null && Math.abs(size.deviation) > grossLimit + margin;
-  return (
-    <>
-      {size.deviation === 0 ? 'on target' : <LengthText ticks={size.deviation} unit={unit} signed />}
-      {size.deviation === 0 ? null : (
-        <>
-          , {band ? 'within' : 'past'} <LengthText ticks={edge} unit={unit} />
-        </>
-      )}
-      {full > size.lose ? `, held at the most, ${pointsAsText(size.lose)}` : ''}
-      {isGross && grossLimit !== null ? (
-        <strong className="font-[640]">
-          , gross: past <LengthText ticks={grossLimit} unit={unit} />
-        </strong>
-      ) : null}
-    </>
-  );
 }

@@ -7,6 +7,8 @@ import { pointsAsText } from '@/components/ui/points-text';
 import { Heading } from '@/components/ui/titles';
 import { isOneScale, pointsOfTotal, possiblePoints, totalPoints } from '@/lib/practicals/both-scales';
 import { type ExampleAttempt, exampleAttempts, scoreExample } from '@/lib/practicals/example-attempts';
+import { explainScore } from '@/lib/practicals/explain-score';
+import { scoreAttempt } from '@/lib/scoring';
 import { type Editor, useEditor } from './editor-context';
 import { ExampleDialog } from './example-dialog';
 
@@ -88,11 +90,14 @@ function Examples({ rubric, latest, number, selection }: ExamplesProps) {
                 >
                   <PhraseText phrase={example.label} unit={rubric.unit} />
                 </button>
+                <Kept rubric={rubric} example={example} />
               </th>
-              {latest ? <td className="px-2 py-2 text-right">{scoreText(before)}</td> : null}
+              {latest ? (
+                <td className="px-2 py-2 text-right align-top leading-7">{scoreText(before)}</td>
+              ) : null}
               <td
                 className={classNames(
-                  'py-2 text-right text-heading',
+                  'py-2 text-right align-top text-heading',
                   latest && before !== draft && 'text-act',
                 )}
               >
@@ -115,6 +120,18 @@ function Examples({ rubric, latest, number, selection }: ExamplesProps) {
 
 function scoreText(points: number | null): string {
   return points === null ? '–' : pointsAsText(points);
+}
+
+/** "keeps 56 of 63, 88.89 of 100": what the score comes from before it is rounded. */
+function Kept({ rubric, example }: { rubric: ExamplesProps['rubric']; example: ExampleAttempt }) {
+  if (isOneScale(rubric)) return null;
+  const { kept, possible, total } = explainScore(rubric, scoreAttempt(rubric, example.attempt), 0);
+  return (
+    <span className="block text-small text-ink-2">
+      keeps {pointsAsText(kept.points)} of {pointsAsText(possible)}, {pointsAsText(kept.ofTotal)} of{' '}
+      {pointsAsText(total)}
+    </span>
+  );
 }
 
 /** "of 100. 1 of 63 is 1.59 of 100." */
