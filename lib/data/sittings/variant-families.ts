@@ -22,6 +22,7 @@ interface PublishedVersion {
   versionId: string;
   practicalId: string;
   title: string;
+  number: number;
 }
 
 interface Given {
@@ -29,16 +30,14 @@ interface Given {
   period: string;
 }
 
-/** Those practicals of which several sizes are published; `versions` have the latest of each practical first. */
+/** Those practicals of which several sizes are published. */
 export async function variantFamilies(
   tx: Transaction,
   schoolId: string,
   versions: readonly PublishedVersion[],
   given: readonly Given[],
 ): Promise<VariantFamily[]> {
-  const latest = [
-    ...new Map([...versions].reverse().map((row) => [row.practicalId, row])).values(),
-  ].reverse();
+  const latest = latestOf(versions);
   const ids = latest.map(({ practicalId }) => practicalId);
   const originals = ids.length > 0 ? await selectOriginals(tx, schoolId, ids) : [];
   const rootOf = new Map(originals.map(({ practicalId, of }) => [practicalId, of]));
@@ -57,6 +56,15 @@ export async function variantFamilies(
       practicalIds: members.map(({ practicalId }) => practicalId),
       members: members.sort((a, b) => rank(a.name) - rank(b.name) || (a.name < b.name ? -1 : 1)),
     }));
+}
+
+function latestOf(versions: readonly PublishedVersion[]): PublishedVersion[] {
+  const latest = new Map<string, PublishedVersion>();
+  for (const version of versions) {
+    const known = latest.get(version.practicalId);
+    if (!known || known.number < version.number) latest.set(version.practicalId, version);
+  }
+  return [...latest.values()];
 }
 
 const rank = (name: string) => (name === 'original' ? 0 : 1);

@@ -10,8 +10,8 @@ import { OpenForm } from './_components/open-form';
 export const metadata: Metadata = { title: 'Give a practical' };
 
 export default async function NewSittingPage({ searchParams }: PageProps<'/sittings/new'>) {
-  const { sections } = pageValue(await readOpenChoices(await actorInRole('teacher'), {}));
-  const { section } = await searchParams;
+  const { sections, families } = pageValue(await readOpenChoices(await actorInRole('teacher'), {}));
+  const { section, practical } = await searchParams;
   return (
     <DeskPage title="Give a practical">
       {sections.length === 0 ? (
@@ -26,7 +26,12 @@ export default async function NewSittingPage({ searchParams }: PageProps<'/sitti
           A practical is given to a period. Make one and paste its names; then come back.
         </EmptyState>
       ) : (
-        <OpenForm sections={sections} chosen={typeof section === 'string' ? section : null} />
+        <OpenForm
+          sections={sections}
+          families={families}
+          chosen={typeof section === 'string' ? section : null}
+          practicalId={typeof practical === 'string' ? practical : null}
+        />
       )}
     </DeskPage>
   );

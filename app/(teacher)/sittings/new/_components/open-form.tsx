@@ -14,14 +14,18 @@ import { openSittingInput } from '@/lib/contracts/sittings';
 import type { OpenChoicesView, VersionChoice } from '@/lib/data/sittings/read-open-choices';
 import { count, sayPeriod } from '../../../_components/names';
 import { openSittingAction } from '../../actions';
+import { VariantChoice } from './variant-choice';
 
 interface OpenFormProps {
   sections: OpenChoicesView['sections'];
+  families: OpenChoicesView['families'];
   chosen: string | null;
+  /** The practical that the person comes from. */
+  practicalId: string | null;
 }
 
 /** Which period gets which version, by when. What a section has already is not offered to it. */
-export function OpenForm({ sections, chosen }: OpenFormProps) {
+export function OpenForm({ sections, families, chosen, practicalId }: OpenFormProps) {
   const [lastResult, action] = useActionState(openSittingAction, undefined);
   const first =
     sections.find(({ sectionId }) => sectionId === chosen) ??
@@ -29,10 +33,15 @@ export function OpenForm({ sections, chosen }: OpenFormProps) {
   const [form, fields] = useForm({
     id: 'sitting',
     lastResult,
-    defaultValue: { sectionId: first?.sectionId, versionId: first?.versions[0]?.versionId },
+    defaultValue: {
+      sectionId: first?.sectionId,
+      versionId: firstVersion(first ? [first] : sections, practicalId),
+    },
     onValidate: ({ formData }) => parseWithZod(formData, { schema: openSittingInput }),
   });
   const section = sections.find(({ sectionId }) => sectionId === fields.sectionId.value);
+  const version = section?.versions.find(({ versionId }) => versionId === fields.versionId.value);
+  const family = version && families.find(({ practicalIds }) => practicalIds.includes(version.practicalId));
   return (
     <form {...getFormProps(form)} action={action} onReset={keepTyped} className="grid max-w-[34rem] gap-4">
       <FormRefusal errors={form.errors} />
@@ -48,6 +57,14 @@ export function OpenForm({ sections, chosen }: OpenFormProps) {
         error={fields.sectionId.errors}
       />
       <VersionChoices section={section} field={fields.versionId} />
+      {section && family ? (
+        <VariantChoice
+          family={family}
+          open={section.versions}
+          versionId={fields.versionId.value}
+          onChoose={(value) => form.update({ name: fields.versionId.name, value })}
+        />
+      ) : null}
       <TextField
         label="due"
         optional
@@ -65,6 +82,13 @@ export function OpenForm({ sections, chosen }: OpenFormProps) {
       </div>
     </form>
   );
+}
+
+/** The latest version of the practical that the person comes from; else the first of the only period. */
+function firstVersion(sections: OpenFormProps['sections'], practicalId: string | null): string | undefined {
+  const versions = sections.flatMap((section) => section.versions);
+  if (practicalId) return versions.find((version) => version.practicalId === practicalId)?.versionId;
+  return sections.length === 1 ? versions[0]?.versionId : undefined;
 }
 
 interface VersionChoicesProps {

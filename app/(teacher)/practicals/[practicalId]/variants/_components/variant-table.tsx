@@ -22,7 +22,7 @@ export function VariantTable({ list, original }: VariantTableProps) {
       <TableHead>
         <tr>
           <HeadCell>practical</HeadCell>
-          <HeadCell className="max-lg:hidden">pieces</HeadCell>
+          <HeadCell className="w-56 max-lg:hidden">pieces</HeadCell>
           <HeadCell className="max-md:hidden">sizes</HeadCell>
           <HeadCell>given to</HeadCell>
           <HeadCell className="max-sm:hidden">prices</HeadCell>
@@ -30,11 +30,9 @@ export function VariantTable({ list, original }: VariantTableProps) {
       </TableHead>
       <TableBody>
         <tr>
-          <NameCell
-            href={`/practicals/${practicalId}`}
-            name="original"
-            state={`version ${original.number}`}
-          />
+          <NameCell href={`/practicals/${practicalId}`} name="original" state={`version ${original.number}`}>
+            <SizesUnder original={cutList} variant={cutList} unit={unit} />
+          </NameCell>
           <DrawingCell original={cutList} variant={cutList} />
           <SizesCell original={cutList} variant={cutList} unit={unit} />
           <Cell className="pt-3 align-top">{sayPeriods(periods)}</Cell>
