@@ -61,10 +61,10 @@ export function VersionCutList({ task, rubric }: VersionCutListProps) {
           ))}
         </TableBody>
       </Table>
-      <ul className="mt-5 grid grid-cols-[repeat(auto-fill,minmax(10.5rem,1fr))] gap-x-6 gap-y-5">
+      <ul className="mt-5 grid grid-cols-[repeat(auto-fill,minmax(11.5rem,1fr))] gap-x-6 gap-y-5">
         {rubric.lines.map((line) => (
           <li key={line.id} className="break-inside-avoid">
-            <PartDrawing size={line.target} unit={unit} label={line.label} width={250} height={165} />
+            <PartDrawing size={line.target} unit={unit} label={line.label} width={310} height={190} />
             <p className="border-t border-hair pt-1 text-label">
               {line.label}
               {line.quantity > 1 ? <span className="text-ink-2"> × {line.quantity}</span> : null}

@@ -34,7 +34,7 @@ function canonicalRule({ over, under, beyondOver, beyondUnder, cap }: SizeRule) 
   return [side(over), beyondOver, side(under), beyondUnder, cap];
 }
 
-/** "every size", "every length", "end, length", or a list of them. */
+/** "every size", "every length", "length of end and side", or a list of them. */
 export function nameSizes(sizes: ComparedSizes['sizes'], lineCount: number): Phrase {
   if (sizes.length === lineCount * AXES.length) return ['every size'];
   const whole = AXES.filter((axis) => sizes.filter((size) => size.axis === axis).length === lineCount);
@@ -50,9 +50,12 @@ function restByLine(sizes: ComparedSizes['sizes']): string[] {
     line.axes.push(axis);
     byLine.set(lineId, line);
   }
-  return [...byLine.values()].map(({ label, axes }) =>
-    axes.length === AXES.length ? `all of ${label}` : `${joinWords(axes)} of ${label}`,
-  );
+  const byAxes = new Map<string, string[]>();
+  for (const { label, axes } of byLine.values()) {
+    const words = axes.length === AXES.length ? 'all' : joinWords(axes);
+    byAxes.set(words, [...(byAxes.get(words) ?? []), label]);
+  }
+  return [...byAxes].map(([words, labels]) => `${words} of ${joinWords(labels)}`);
 }
 
 export function joinWords(words: readonly string[]): string {

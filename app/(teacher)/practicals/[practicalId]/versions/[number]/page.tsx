@@ -9,7 +9,7 @@ import { VersionSheet } from '@/components/version/version-sheet';
 import { versionTitleBlock } from '@/components/version/version-title-block';
 import { readVersionSheet } from '@/lib/data/practicals/read-version-sheet';
 import { draftOf } from '@/lib/practicals/draft-of';
-import { draftDifferences } from '@/lib/practicals/field-names';
+import { type DraftDifference, draftDifferences } from '@/lib/practicals/field-names';
 import { pageValue } from '@/lib/transport/page';
 import { TakeBack } from '../_components/take-back';
 import { VersionAside } from '../_components/version-aside';
@@ -46,7 +46,7 @@ export default async function VersionPage({ params }: VersionPageProps) {
               key={versionId}
               {...{ practicalId, draft }}
               number={view.number}
-              differences={draftDifferences(draft.content, draftOf(task, form))}
+              differences={draftDifferences(draft.content, draftOf(task, form)).filter(isSeen)}
             />
           ) : null}
         </>
@@ -57,4 +57,9 @@ export default async function VersionPage({ params }: VersionPageProps) {
       <VersionSheet {...view} />
     </DeskPage>
   );
+}
+
+/** How the editor shows a price, and which preset was pressed, is nothing that a draft says. */
+function isSeen({ path }: DraftDifference): boolean {
+  return !path.endsWith('.mirrored') && !path.startsWith('presets');
 }

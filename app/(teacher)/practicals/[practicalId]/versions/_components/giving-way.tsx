@@ -1,13 +1,13 @@
 import { Cell, HeadCell, RowHead, Table, TableBody, TableHead } from '@/components/table/table';
 import type { DraftDifference } from '@/lib/practicals/field-names';
 
-const MOST_SHOWN = 40;
+const MOST_SHOWN = 12;
 
 /** Field by field what the draft says now and what it would say. */
 export function GivingWay({ differences, number }: { differences: DraftDifference[]; number: number }) {
   const more = differences.length - MOST_SHOWN;
   return (
-    <div className="max-h-[45dvh] overflow-y-auto">
+    <div>
       <Table caption="what of the draft gives way">
         <TableHead>
           <tr>

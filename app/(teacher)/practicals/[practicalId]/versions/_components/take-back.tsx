@@ -68,7 +68,6 @@ export function TakeBack({ practicalId, number, draft, differences }: TakeBackPr
         }
         title={`Take version ${number} back into your draft?`}
         description="What is published stays as it is, and so does every sitting. Of the draft, this gives way:"
-        closeLabel="leave it"
       >
         <GivingWay differences={differences} number={number} />
         {refused ? <Refusal title={refused} className="mt-4" /> : null}
@@ -86,7 +85,7 @@ export function TakeBack({ practicalId, number, draft, differences }: TakeBackPr
         />
       ) : null}
       {state.at === 'undone' ? (
-        <p role="status" className="basis-full text-label">
+        <p role="status" className="w-0 min-w-full text-label">
           Your draft is as it was.
         </p>
       ) : null}

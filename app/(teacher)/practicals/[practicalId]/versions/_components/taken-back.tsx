@@ -13,7 +13,7 @@ interface TakenBackProps {
 /** Said once a version was taken back, with the way back from it. */
 export function TakenBack({ practicalId, number, pending, refused, onUndo }: TakenBackProps) {
   return (
-    <div role="status" className="flex basis-full flex-wrap items-center gap-x-3 gap-y-2 text-label">
+    <div role="status" className="flex w-0 min-w-full flex-wrap items-center gap-x-3 gap-y-2 text-label">
       <span>
         <Link className="link" href={`/practicals/${practicalId}`}>
           Your draft

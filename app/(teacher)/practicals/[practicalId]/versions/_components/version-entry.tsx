@@ -21,7 +21,8 @@ export function VersionEntry({ view, version }: { view: VersionList; version: Li
       }
       about={
         <>
-          <LocalTime at={publishedAt} style="day" />, {publisherName}
+          <LocalTime at={publishedAt} style="day" />
+          <span className="block">{publisherName}</span>
           <span className="block">{sittingsText(sittings)}</span>
         </>
       }
