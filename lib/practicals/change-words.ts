@@ -3,7 +3,8 @@ import { valueWords } from './compare-words';
 
 /** "Kerf: now 1/8, was 3/32." */
 export function nowWas(label: Phrase | string, now: Phrase | string, was: Phrase | string): Phrase {
-  return [...capital(asPhrase(label)), ': now ', ...asPhrase(now), ', was ', ...asPhrase(was), '.'];
+  const parts = [...capital(asPhrase(label)), ': now ', ...asPhrase(now), ', was ', ...asPhrase(was), '.'];
+  return parts.reduce<Phrase>(append, []);
 }
 
 /** The rows of two that differ, told as what is now and what was. */
@@ -23,6 +24,13 @@ export function capital(phrase: Phrase): Phrase {
   const [first, ...rest] = phrase;
   if (typeof first !== 'string') return phrase;
   return [first.charAt(0).toUpperCase() + first.slice(1), ...rest];
+}
+
+/** Words that follow words go on with them. */
+function append(phrase: Phrase, part: Phrase[number]): Phrase {
+  const last = phrase.at(-1);
+  if (typeof last !== 'string' || typeof part !== 'string') return [...phrase, part];
+  return [...phrase.slice(0, -1), last + part];
 }
 
 function asPhrase(words: Phrase | string): Phrase {
