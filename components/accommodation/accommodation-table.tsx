@@ -1,5 +1,6 @@
 import type { ReactNode } from 'react';
 import { Cell, HeadCell, RowHead, Table, TableBody, TableHead } from '@/components/table/table';
+import { classNames } from '@/components/ui/class-names';
 import { LocalTime } from '@/components/ui/local-time';
 
 /** A modified rubric as a row of its list. */
@@ -15,6 +16,9 @@ export interface AccommodationRow {
   ended: { by: string; at: string } | null;
 }
 
+/** On a phone the cells of a row stand below one another. */
+const STACKED = 'max-md:p-0 md:min-w-36';
+
 interface AccommodationTableProps {
   caption: string;
   rows: readonly AccommodationRow[];
@@ -24,8 +28,8 @@ interface AccommodationTableProps {
 
 export function AccommodationTable({ caption, rows, acts }: AccommodationTableProps) {
   return (
-    <Table caption={caption}>
-      <TableHead>
+    <Table caption={caption} className="max-md:block">
+      <TableHead className="max-md:hidden">
         <tr>
           <HeadCell>student</HeadCell>
           <HeadCell>for</HeadCell>
@@ -36,12 +40,15 @@ export function AccommodationTable({ caption, rows, acts }: AccommodationTablePr
           </HeadCell>
         </tr>
       </TableHead>
-      <TableBody>
+      <TableBody className="max-md:block max-md:border-t-outline max-md:border-ink">
         {rows.map((row) => (
-          <tr key={row.accommodationId} className={row.ended ? 'text-ink-2' : undefined}>
-            <RowHead className="min-w-36">{rosterNameOf(row)}</RowHead>
-            <Cell className="min-w-32">{row.sittingTitle ?? `the term, ${row.termName}`}</Cell>
-            <Cell className="min-w-56">
+          <tr
+            key={row.accommodationId}
+            className={classNames('max-md:grid max-md:gap-1 max-md:py-3', row.ended && 'text-ink-2')}
+          >
+            <RowHead className={STACKED}>{rosterNameOf(row)}</RowHead>
+            <Cell className={STACKED}>{row.sittingTitle ?? `the term, ${row.termName}`}</Cell>
+            <Cell className={STACKED}>
               {row.words.length === 0 ? 'nothing that this version asks for' : null}
               <ul>
                 {row.words.map((word) => (
@@ -49,7 +56,8 @@ export function AccommodationTable({ caption, rows, acts }: AccommodationTablePr
                 ))}
               </ul>
             </Cell>
-            <Cell className="min-w-40 text-label">
+            <Cell className={classNames(STACKED, 'text-label')}>
+              <span className="md:hidden">made by </span>
               {row.madeBy}, <LocalTime at={row.madeAt} style="day" />
               {row.ended ? (
                 <span className="block">
@@ -57,8 +65,8 @@ export function AccommodationTable({ caption, rows, acts }: AccommodationTablePr
                 </span>
               ) : null}
             </Cell>
-            <Cell>
-              <div className="flex flex-wrap justify-end gap-2">{acts(row)}</div>
+            <Cell className={STACKED}>
+              <div className="flex flex-wrap gap-2 max-md:mt-2 md:justify-end">{acts(row)}</div>
             </Cell>
           </tr>
         ))}

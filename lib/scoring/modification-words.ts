@@ -20,7 +20,7 @@ export function sayModification(modification: Modification, lines: readonly Name
     ...sayExcused(modification, lines),
     ...checks.map(
       ({ label, lose }) =>
-        `${label} ${lose ? `loses ${lose.slice(1).map(sayPoints).join(', ')}` : 'not held against'}`,
+        `${label} ${lose ? `loses ${lose.slice(1).map(sayPoints).join(', ')}` : 'excused'}`,
     ),
   ];
 }
@@ -37,8 +37,8 @@ function sayExcused(modification: Modification, lines: readonly NamedLine[]): st
     .filter(({ axes }) => axes.length > 0);
   return [
     ...(whole.length > 0 ? [`${join(whole)} excused`] : []),
-    ...(everywhere.length > 0 ? [`${join<Axis>(everywhere)} of every line not held against`] : []),
-    ...parts.map(({ label, axes }) => `${join<Axis>(axes)} of ${label} not held against`),
+    ...(everywhere.length > 0 ? [`${join<Axis>(everywhere)} of every line excused`] : []),
+    ...parts.map(({ label, axes }) => `${join<Axis>(axes)} of ${label} excused`),
   ];
 }
 

@@ -25,6 +25,19 @@ async function openPractical(page: Page, sheet?: string): Promise<void> {
     await page.getByRole('navigation', { name: 'sheets' }).getByRole('link', { name: sheet }).click();
 }
 
+/** The versions of a practical that has two, or one of them. */
+async function openVersions(page: Page, version?: string): Promise<void> {
+  await page.goto('/practicals');
+  await page.getByRole('link', { name: 'Bench-hook kit', exact: true }).first().click();
+  await page.getByRole('link', { name: 'version 1', exact: true }).click();
+  await page.getByRole('link', { name: 'all versions' }).click();
+  await page.getByRole('heading', { name: /^Versions of / }).waitFor();
+  if (version) {
+    await page.getByRole('link', { name: version, exact: true }).click();
+    await page.getByRole('heading', { name: 'Cut list' }).waitFor();
+  }
+}
+
 /** Opens the first of today's rounds, with a way of entry where one is named. */
 async function openBench(page: Page, entry?: 'keypad' | 'caliper'): Promise<void> {
   await page.goto('/round');
@@ -203,6 +216,28 @@ export const SCREENS: Screen[] = [
       await page.getByRole('button', { name: /^checks, all lines/ }).click();
     },
   },
+  { role: 'teacher', name: 'versions', go: (page) => openVersions(page) },
+  { role: 'teacher', name: 'version', go: (page) => openVersions(page, 'version 2') },
+  {
+    role: 'teacher',
+    name: 'version-taken-back',
+    go: async (page) => {
+      await openVersions(page, 'version 1');
+      await page.getByRole('button', { name: 'take it back into my draft' }).click();
+      await page.getByRole('dialog').waitFor();
+    },
+  },
+  { role: 'teacher', name: 'practical-file', path: '/practicals/import' },
+  {
+    role: 'teacher',
+    name: 'practical-file-faults',
+    go: async (page) => {
+      await page.goto('/practicals/import');
+      await page.getByRole('textbox').fill('{"trymark": "practical", "version": 1, "task": {"titel": 1}}');
+      await page.getByRole('button', { name: 'make the practical' }).click();
+      await page.getByRole('table', { name: 'what cannot be used' }).waitFor();
+    },
+  },
   { role: 'head', name: 'department', path: '/department' },
   {
     role: 'head',
@@ -261,6 +296,28 @@ export const SCREENS: Screen[] = [
       await page.getByRole('list', { name: 'the new words' }).waitFor();
     },
   },
+  {
+    role: 'teacher',
+    name: 'modified',
+    go: async (page) => {
+      await openRoster(page);
+      await page.goto(`${page.url()}/modified`);
+    },
+  },
+  {
+    role: 'teacher',
+    name: 'modified-change',
+    go: async (page) => {
+      await openRoster(page);
+      await page.goto(`${page.url()}/modified`);
+      await page
+        .getByRole('link', { name: /^change / })
+        .first()
+        .click();
+      await page.getByRole('heading', { name: 'Change a modified rubric' }).waitFor();
+    },
+  },
+  { role: 'head', name: 'modified', path: '/department/modified' },
   { role: 'teacher', name: 'slips', go: (page) => openRoster(page, 'slips') },
   { role: 'teacher', name: 'import', go: (page) => openRoster(page, 'import') },
   { role: 'teacher', name: 'import-rows', go: (page) => lookAtRoster(page, MIXED_ROSTER) },

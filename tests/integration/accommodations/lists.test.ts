@@ -40,7 +40,7 @@ describe('listAccommodations', () => {
         accommodationId: ofSitting,
         familyName: 'Abbott',
         sittingTitle: 'Nine parts',
-        words: ['bands 2.25 times as wide', 'base excused', 'width of every line not held against'],
+        words: ['bands 2.25 times as wide', 'base excused', 'width of every line excused'],
         madeBy: 'Dayo Okonjo',
         ended: null,
       },

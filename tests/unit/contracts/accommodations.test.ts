@@ -132,10 +132,10 @@ describe('a modification in words', () => {
     };
     expect(sayModification(modification, lines)).toEqual([
       'base and guide excused',
-      'width of every line not held against',
-      'length of hook not held against',
+      'width of every line excused',
+      'length of hook excused',
       'square loses 0.5, 1',
-      'surface not held against',
+      'surface excused',
     ]);
   });
 });

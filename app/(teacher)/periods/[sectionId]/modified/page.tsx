@@ -69,7 +69,7 @@ export default async function ModifiedPage({ params }: ModifiedPageProps) {
           )}
         />
       ) : (
-        <EmptyState title="No modified rubric stands">
+        <EmptyState title="Nobody’s rubric is modified">
           One student can be priced by wider bands, without some lines or sizes, or with checks at other
           prices, in one sitting or for the term. The total stays the same.
         </EmptyState>

@@ -6,7 +6,7 @@ import { SelectField } from '@/components/ui/select-field';
 import { TextField } from '@/components/ui/text-field';
 import { Heading } from '@/components/ui/titles';
 import type { DeskSitting } from '@/lib/data/accommodations/read-accommodation-desk';
-import { distinctPrices } from '@/lib/practicals/distinct-prices';
+import { distinctPrices, type PricedSize } from '@/lib/practicals/distinct-prices';
 import { faceScale } from '@/lib/practicals/face-scale';
 import { excusedAxes, type Modification, modifyRubric } from '@/lib/scoring/modification';
 import { formatFactor } from '@/lib/scoring/modification-factor';
@@ -20,7 +20,7 @@ export function BandsPart({ typed, error }: { typed: Typed; error: string[] | nu
       value: `${sitting.sittingId} ${label}`,
       label: typed.sittings.length > 1 ? `${sitting.title}, ${label}` : label,
       sitting,
-      size: sizes[0],
+      size: sizes.find((size) => !isExcused(size, typed.modification)) ?? sizes[0],
     })),
   );
   const choice = choices.find(({ value }) => value === shown) ?? choices[0];
@@ -75,17 +75,15 @@ function TwoRules({ sitting: { rubric }, lineId, axis, modification }: TwoRulesP
   if (!line) return null;
   const modified = modification ? modifyRubric(rubric, modification) : rubric;
   const after = modified.lines.find(({ id }) => id === lineId) ?? line;
-  const excused = modification !== null && excusedAxes(lineId, modification).includes(axis);
+  const excused = isExcused({ lineId, axis }, modification);
   const row = (id: string, label: string, note: string, of: typeof line) => ({
     ...{ id, label, note, rule: of.sizes[axis], margin: rubric.margin },
   });
-  const factor = modification ? `${formatFactor(modification.widen)} times` : 'not read yet';
-  const rules = [
-    row('sitting', 'the sitting', 'as everybody', line),
-    ...(excused ? [] : [row('modified', 'modified', factor, after)]),
-  ];
-  const scale = faceScale(modified, after, axis);
-  const props = { unit: rubric.unit, target: line.target[axis], rules, ...scale };
+  const rules = [row('sitting', 'the sitting', 'as everybody', line)];
+  if (modification && !excused) {
+    rules.push(row('modified', 'modified', `${formatFactor(modification.widen)} times`, after));
+  }
+  const props = { unit: rubric.unit, target: line.target[axis], rules, ...faceScale(modified, after, axis) };
   return (
     <>
       <div className="max-md:hidden">
@@ -95,10 +93,21 @@ function TwoRules({ sitting: { rubric }, lineId, axis, modification }: TwoRulesP
         <StackedRules {...props} variant="phone" />
       </div>
       <p className="mt-2 text-label text-ink-2">
-        {excused
-          ? `${line.label}, ${axis}: not held against the student, whatever is read.`
-          : `Drawn for ${line.label}, ${axis}. They differ where the ground is tinted. At the bench the first is shown.`}
+        Drawn for {line.label}, {axis}. {sayRules(modification, excused)} The bench shows the sitting’s bands.
       </p>
     </>
   );
+}
+
+function isExcused({ lineId, axis }: PricedSize, modification: Modification | null): boolean {
+  return modification !== null && excusedAxes(lineId, modification).includes(axis);
+}
+
+function sayRules(modification: Modification | null, excused: boolean): string {
+  if (!modification) return 'The modified bands stand here once everything can be read.';
+  if (excused) return 'Excused, whatever is read.';
+  const { num, den } = modification.widen;
+  return num === den
+    ? 'Both are the same until the bands are wider.'
+    : 'They differ where the ground is tinted.';
 }

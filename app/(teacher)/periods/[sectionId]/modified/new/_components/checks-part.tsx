@@ -11,9 +11,9 @@ type TypedCheck = Typed['typed']['checks'][number];
 type Errors = Record<string, string[] | null>;
 
 const WAYS: { value: TypedCheck['as']; label: string }[] = [
-  { value: 'rubric', label: 'as the rubric' },
-  { value: 'not held', label: 'not held against' },
-  { value: 'priced', label: 'another price' },
+  { value: 'rubric', label: 'as all' },
+  { value: 'not held', label: 'excused' },
+  { value: 'priced', label: 'other price' },
 ];
 
 export function ChecksPart({ typed, errors }: { typed: Typed; errors: Errors }) {

@@ -11,10 +11,10 @@ export function ExcusedPart({ typed, error }: { typed: Typed; error: string[] | 
   const lines = typed.sittingId === null ? [] : (typed.sittings[0]?.rubric.lines ?? []);
   return (
     <section>
-      <Heading className="mb-1">Not held against the student</Heading>
+      <Heading className="mb-1">Excused</Heading>
       <p className="mb-2 max-w-[62ch] text-label text-ink-2">
-        What is excused costs nothing and need not be read. Of an excused line the points go to the others:
-        the total stays.
+        Not held against the student: it costs nothing and need not be read. The points of an excused line go
+        to the others, so that the total stays.
       </p>
       <div className="max-w-[44rem]">
         <Table caption="sizes and lines that are excused">
@@ -28,8 +28,8 @@ export function ExcusedPart({ typed, error }: { typed: Typed; error: string[] | 
             </tr>
           </TableHead>
           <TableBody>
-            <tr>
-              <RowHead>every line</RowHead>
+            <tr className="border-b-outline border-rule">
+              <RowHead className="align-middle">every line</RowHead>
               {lines.length > 0 ? <td /> : null}
               {AXES.map((axis) => (
                 <Box key={axis} typed={typed} lineId={null} axis={axis} name={`${axis} of every line`} />
@@ -37,7 +37,7 @@ export function ExcusedPart({ typed, error }: { typed: Typed; error: string[] | 
             </tr>
             {lines.map(({ id, label, quantity }) => (
               <tr key={id}>
-                <RowHead>
+                <RowHead className="align-middle">
                   {label}
                   {quantity > 1 ? <span className="text-label text-ink-2">, {quantity} pieces</span> : null}
                 </RowHead>
@@ -76,7 +76,7 @@ function Box({ typed, lineId, axis, name }: BoxProps) {
     (excused.includes(excusedKey(lineId, null)) || excused.includes(excusedKey(null, axis)));
   return (
     <td className="px-2 py-1">
-      <label className="inline-flex size-10 cursor-pointer items-center justify-center">
+      <label className="inline-flex h-10 w-12 cursor-pointer items-center">
         <input
           type="checkbox"
           name="excused"

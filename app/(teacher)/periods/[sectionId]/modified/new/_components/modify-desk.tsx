@@ -36,7 +36,11 @@ export function ModifyDesk({ desk }: { desk: AccommodationDeskView }) {
       title={desk.change ? 'Change a modified rubric' : 'Modify a rubric'}
       note={saySection(desk)}
       actions={<LinkButton href={list}>modified rubrics</LinkButton>}
-      aside={<ScoresAside desk={desk} typed={typed} student={student} />}
+      aside={
+        <div className="max-xl:hidden xl:sticky xl:top-6">
+          <ScoresAside desk={desk} typed={typed} student={student} />
+        </div>
+      }
     >
       <form action={action} onReset={keepTyped} className="grid gap-10">
         <FormRefusal errors={errors[''] ?? undefined} />
@@ -63,6 +67,9 @@ export function ModifyDesk({ desk }: { desk: AccommodationDeskView }) {
         <BandsPart typed={typed} error={errors.widen} />
         <ExcusedPart typed={typed} error={errors.excused} />
         {typed.rows.length > 0 ? <ChecksPart typed={typed} errors={errors} /> : null}
+        <div className="max-w-[44rem] xl:hidden">
+          <ScoresAside desk={desk} typed={typed} student={student} />
+        </div>
         <section>
           <Heading className="mb-2">Reason</Heading>
           <TextAreaField

@@ -19,7 +19,7 @@ export function useTyped(desk: AccommodationDeskView) {
   const [sittingId, setSittingId] = useState<string | null>(
     desk.change ? desk.change.sittingId : (desk.sittings[0]?.sittingId ?? null),
   );
-  const [widen, setWiden] = useState(was ? formatFactor(was.widen) : '1.5');
+  const [widen, setWiden] = useState(was ? formatFactor(was.widen) : '1');
   const [excused, setExcused] = useState<string[]>(
     was ? was.excused.map(({ lineId, axis }) => excusedKey(lineId, axis)) : [],
   );
