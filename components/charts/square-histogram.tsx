@@ -75,7 +75,7 @@ export function SquareHistogram(props: SquareHistogramProps) {
           />
           {numbers && mark % 10 === 0 ? (
             <text x={place(mark)} y={edge + 26} fontSize={16} className="tnum fill-ink [text-anchor:middle]">
-              {mark}
+              {mark < 0 ? `−${-mark}` : mark}
             </text>
           ) : null}
         </g>

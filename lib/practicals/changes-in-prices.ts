@@ -13,10 +13,10 @@ type Written = Omit<Compared, 'label'>;
 /** What another version prices, checks, totals or treats otherwise; lines that only one of the two has are left out. */
 export function changesInPrices(
   before: Written & { number: number },
-  now: Written & { number?: number },
+  now: Written & { number?: number; called?: string },
 ): Phrase[] {
   const was = { ...before, label: `version ${before.number}` };
-  const is = { ...now, label: `version ${now.number ?? before.number + 1}` };
+  const is = { ...now, label: now.called ?? `version ${now.number ?? before.number + 1}` };
   const lines = sameLines(before.rubric, now);
   const sizes = compareSizes(lines, [before.rubric.margin, now.rubric.margin]);
   const [lateWas, lateNow] = [before, now].map(({ form }) => lateWords(form.policies.late));

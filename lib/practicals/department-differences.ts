@@ -1,5 +1,6 @@
 import { compareRubrics, cutListSignature } from './compare-rubrics';
-import type { Compared, Phrase } from './compare-types';
+import type { Compared, ComparedRow, Phrase } from './compare-types';
+import { priceSentences, valueWords } from './compare-words';
 
 type Written = Omit<Compared, 'label'>;
 
@@ -10,6 +11,7 @@ export interface DepartmentDifferences {
   sentences: Phrase[];
 }
 
+const DEPARTMENT = 'the department';
 const OTHER_PIECES = 'It asks for other pieces, so its prices are not set against the department’s.';
 const OTHER_SIZES = 'It asks for other sizes of the same pieces.';
 
@@ -23,9 +25,18 @@ export function departmentDifferences(approved: Written, own: Compared): Departm
   const sameTask = cutListSignature(approved.task) === cutListSignature(own.task);
   const comparable = sameTask ? own : inSizesOf(approved, own);
   if (!comparable) return { same: false, sentences: [[OTHER_PIECES]] };
-  const { same, sentences } = compareRubrics([{ ...approved, label: 'the department' }, comparable]);
-  const told = same ? [] : sentences;
+  const comparison = compareRubrics([{ ...approved, label: DEPARTMENT }, comparable]);
+  const { same, sizes, pieces, whole, policies } = comparison;
+  const prices = priceSentences(sizes, [DEPARTMENT, own.label]);
+  const others = [...pieces, ...whole, ...policies].filter(({ differs }) => differs).map(rowSentence);
+  const told = same ? [] : [...prices, ...others];
   return { same: same && sameTask, sentences: sameTask ? told : [[OTHER_SIZES], ...told] };
+}
+
+/** "a redo counts up to: 100%, the department 90%." */
+function rowSentence({ label, values }: ComparedRow): Phrase {
+  const [theirs, own] = values.map(valueWords);
+  return [...label, ': ', ...(own ?? []), `, ${DEPARTMENT} `, ...(theirs ?? []), '.'];
 }
 
 /** The same prices on the other's sizes, where both have the same lines. */

@@ -32,12 +32,14 @@ const MOST_FIELDS = 12;
  * all that goes when another version is taken over. A draft that cannot be read yet is told by its fields.
  * Pure; never fails.
  *
- * @example ownDifferences(draftOf(task, form), { task, form }) // []
+ * @example ownDifferences(draftOf(task, form), { task, form, number: 1 }) // []
  */
-export function ownDifferences(draft: PracticalDraft, source: Published): Phrase[] {
+export function ownDifferences(draft: PracticalDraft, source: Published & { number: number }): Phrase[] {
   const base = takeOver(source, draft);
   const [before, now] = [parseDraft(withTitle(base)), parseDraft(withTitle(draft))];
-  if (before.ok && now.ok) return changesSince({ ...before, number: 1 }, now);
+  if (before.ok && now.ok) {
+    return changesSince({ ...before, number: source.number }, { ...now, called: 'your draft' });
+  }
   const fields = draftDifferences(draft, base).filter(({ path }) => path !== 'title');
   const told = fields.slice(0, MOST_FIELDS).map(({ name, here, there }): Phrase => {
     return [`${name}: now ${here || 'empty'}, was ${there || 'empty'}.`];

@@ -57,7 +57,10 @@ export async function readSource({ actor, tx }: Reading, practical: Taken): Prom
       ? {
           versionId: latest.id,
           number: latest.number,
-          changes: changesSince({ task, form, rubric, number: source.number }, storedVersion(latest)),
+          changes: changesSince(
+            { task, form, rubric, number: source.number },
+            { ...storedVersion(latest), number: latest.number },
+          ),
         }
       : null,
   };

@@ -15,7 +15,10 @@ const section = (period: string, change: number | null): SectionEffect => ({
   ownerName: 'Rut Lindqvist',
   versionNumber: 1,
   students: change === null ? 6 : 20,
-  effect: change === null ? null : { meanNow: 8000, meanThen: 8000 + change, change, changes: [] },
+  effect:
+    change === null
+      ? null
+      : { meanNow: 8000, meanThen: 8000 + change, change, changes: [change, 100 - change] },
 });
 
 const say = (sections: SectionEffect[], kind: 'points' | 'share' = 'points') => {
@@ -32,17 +35,23 @@ describe('the effect in words', () => {
     expect(say([section('5', -40)], 'share')).toBe('Period 5 would stand 0.4 percent lower.');
   });
 
-  it('says so when nothing moves, and when too few can be told', () => {
+  it('says when nobody’s score would change', () => {
+    const still = section('3', 0);
+    if (still.effect) still.effect.changes = [0, 0];
+    expect(say([still, section('7', null)])).toBe('No score would change.');
+  });
+
+  it('says so when no mean moves, and when too few can be told', () => {
     expect(say([section('3', 0), section('5', 0)])).toBe('Every section’s mean would stay as it is.');
     expect(say([section('3', 0)])).toBe('The mean would stay as it is.');
     expect(say([section('3', null)])).toBe('Every section has too few students to show what it would do.');
   });
 
   it('names the scale, signs changes, and draws all sections on one', () => {
-    expect(sayScale({ kind: 'points', total: 10_000 })).toBe('Points of 100.');
+    expect(sayScale({ kind: 'points', total: 10_000 })).toBe('Scores are points of 100.');
     expect(sayScale({ kind: 'share' })).toContain('in percent');
     expect([signedTenths(530), signedTenths(-40), signedTenths(0)]).toEqual(['+5.3', '−0.4', '0.0']);
-    expect(changeScale([[-1234, 0], [250]])).toEqual({ from: -15, to: 10 });
-    expect(changeScale([])).toEqual({ from: -10, to: 10 });
+    expect(changeScale([[-1234, 0], [250]])).toEqual({ from: -17, to: 12 });
+    expect(changeScale([])).toEqual({ from: -12, to: 12 });
   });
 });

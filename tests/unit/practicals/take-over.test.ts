@@ -3,7 +3,7 @@ import { draftOf } from '@/lib/practicals/draft-of';
 import { ownDifferences, takeOver } from '@/lib/practicals/take-over';
 import { comparedStarter } from '@/tests/support/compared';
 
-const original = comparedStarter('version 1');
+const original = { ...comparedStarter('version 1'), number: 1 };
 const newer = comparedStarter('version 2', (draft) => {
   draft.title = 'Desk caddy, 2026';
   draft.all.missing = '5';
@@ -37,6 +37,15 @@ describe('own differences', () => {
     const words = JSON.stringify(ownDifferences(draft, original));
     expect(words).toContain('divider');
     expect(words).toMatch(/redo/i);
+  });
+
+  it('call the draft by that name where its prices differ', () => {
+    const draft = mine();
+    draft.all.sizes.length.under.beyond = '5';
+    draft.all.sizes.length.mirrored = false;
+    expect(ownDifferences(draft, original)[0]?.[0]).toMatch(
+      /^Your draft takes 2 points more than version 1 for/,
+    );
   });
 
   it('of a draft that cannot be read are told by its fields, at most twelve of them', () => {

@@ -28,7 +28,7 @@ export default async function SharedVersionPage({ params }: SharedVersionPagePro
       note={view.ownerName}
       actions={
         <>
-          <LinkButton href={`/department/versions/${versionId}`}>read it</LinkButton>
+          <LinkButton href={`/department/versions/${versionId}`}>read version {view.number}</LinkButton>
           <ApprovalPress view={view} />
         </>
       }

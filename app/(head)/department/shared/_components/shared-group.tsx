@@ -16,17 +16,20 @@ export function SharedGroup({ practical }: { practical: SharedPractical }) {
       <Table caption={`versions of ${title} by ${practical.ownerName}`}>
         <TableHead>
           <tr>
-            <HeadCell className="w-[24%]">version</HeadCell>
-            <HeadCell className="w-[22%] max-md:hidden">published</HeadCell>
-            <HeadCell className="w-[24%]">used in</HeadCell>
+            <HeadCell className="w-[18%]">version</HeadCell>
+            <HeadCell className="w-[20%] max-md:hidden">published</HeadCell>
+            <HeadCell className="w-[22%]">used in</HeadCell>
             <HeadCell>the department’s</HeadCell>
+            <HeadCell>
+              <span className="sr-only">effect</span>
+            </HeadCell>
           </tr>
         </TableHead>
         <TableBody>
           {versions.map(({ versionId, number, publishedAt, periods, approval }) => (
             <tr key={versionId}>
               <RowHead>
-                <Link className="link" href={`/department/shared/${versionId}`}>
+                <Link className="link" href={`/department/versions/${versionId}`}>
                   version {number}
                   <span className="sr-only"> of {title}</span>
                 </Link>
@@ -44,6 +47,14 @@ export function SharedGroup({ practical }: { practical: SharedPractical }) {
                 ) : (
                   <span className="text-ink-2">no</span>
                 )}
+              </Cell>
+              <Cell align="right">
+                <Link className="link" href={`/department/shared/${versionId}`}>
+                  what it would do
+                  <span className="sr-only">
+                    : version {number} of {title}
+                  </span>
+                </Link>
               </Cell>
             </tr>
           ))}

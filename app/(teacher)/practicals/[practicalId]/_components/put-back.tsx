@@ -59,7 +59,6 @@ export function PutBack({ view, source, tookOver }: PutBackProps) {
         }}
         title="Put your earlier draft back?"
         description="This was made otherwise since. It goes, and is not kept."
-        closeLabel="leave it"
       >
         <PhraseList phrases={giving ?? []} unit={view.unit} />
         {press.refused ? <Refusal title={press.refused} className="mt-4" /> : null}

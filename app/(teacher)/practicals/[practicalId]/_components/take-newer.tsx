@@ -55,7 +55,6 @@ export function TakeNewer({ view, source, newest }: TakeNewerProps) {
         }}
         title={`Take version ${newest.number} over?`}
         description={`Your draft differs from version ${source.number}. These differences give way; the title stays yours.`}
-        closeLabel="leave it"
       >
         <PhraseList phrases={giving ?? []} unit={view.unit} />
         <p className="mt-4">

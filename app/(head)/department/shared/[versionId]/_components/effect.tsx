@@ -81,14 +81,18 @@ function EffectTable({ sections }: { sections: SectionEffect[] }) {
 
 function Spread({ sections }: { sections: SectionEffect[] }) {
   const told = sections.flatMap(({ effect, ...section }) => (effect ? [{ ...section, effect }] : []));
-  if (told.length === 0) return null;
-  const scale = changeScale(told.map(({ effect }) => effect.changes));
+  const moving = told.filter(({ effect }) => effect.changes.some((change) => change !== 0));
+  if (moving.length === 0) return null;
+  const scale = changeScale(moving.map(({ effect }) => effect.changes));
   return (
     <div>
-      <h3 className="text-lead font-[640]">How far each student would move</h3>
-      <p className="text-label text-ink-2">One square a student; left of 0 loses, right of it gains.</p>
+      <h3 className="text-lead font-[640]">How far students would move</h3>
+      <p className="text-label text-ink-2">
+        A square for each who moves: left of 0 loses, right of it gains.
+        {moving.length < told.length ? ' In sections not drawn here nobody moves.' : ''}
+      </p>
       <ul className="mt-4 grid gap-x-8 gap-y-6 sm:grid-cols-2 xl:grid-cols-3">
-        {told.map(({ sittingId, period, sectionName, effect }) => (
+        {moving.map(({ sittingId, period, sectionName, effect }) => (
           <li key={sittingId}>
             <p className="mb-2 text-label font-[580] first-letter:uppercase">
               {sayPeriod(period)}, {sectionName}
@@ -102,18 +106,18 @@ function Spread({ sections }: { sections: SectionEffect[] }) {
 }
 
 function Picture({ changes, scale, label }: { changes: number[]; scale: ChangeScale; label: string }) {
-  const gain = changes.filter((change) => change > 0).length;
-  const lose = changes.filter((change) => change < 0).length;
+  const moving = changes.filter((change) => change !== 0);
+  const gain = moving.filter((change) => change > 0).length;
   return (
     <>
       <SquareHistogram
         kind="full"
-        values={changes.map((change) => change / 100)}
+        values={moving.map((change) => change / 100)}
         {...scale}
-        label={`${label}, change of each student`}
+        label={`${label}, change of each student who moves`}
       />
       <p className="mt-1 text-label">
-        {gain} gain, {changes.length - gain - lose} stay, {lose} lose
+        {moving.length - gain} lose, {changes.length - moving.length} stay, {gain} gain
       </p>
     </>
   );
