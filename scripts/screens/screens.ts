@@ -85,6 +85,14 @@ async function openSitting(page: Page, sheet: 'publish' | null = null): Promise<
   if (sheet) await page.getByRole('link', { name: 'publish' }).click();
 }
 
+/** Looks at who would move if a sitting of the teacher's went to the other version of its practical. */
+async function lookAtMove(page: Page, sitting: string): Promise<void> {
+  await page.goto('/sittings');
+  await page.getByRole('link', { name: sitting, exact: true }).click();
+  await page.getByRole('link', { name: 'another version' }).click();
+  await page.waitForURL(/\/move$/);
+}
+
 /** Opens the gradebook of the teacher's period 3. */
 async function openGradebook(page: Page): Promise<void> {
   await page.goto('/periods');
@@ -133,6 +141,25 @@ export const SCREENS: Screen[] = [
     },
   },
   { role: 'teacher', name: 'publish', go: (page) => openSitting(page, 'publish') },
+  { role: 'teacher', name: 'move-one-version', go: (page) => lookAtMove(page, 'Stair tower, period 3') },
+  {
+    role: 'teacher',
+    name: 'move',
+    go: async (page) => {
+      await lookAtMove(page, 'Bench-hook kit, period 3');
+      await page.getByRole('table', { name: 'who moves, in figures' }).waitFor();
+    },
+  },
+  {
+    role: 'teacher',
+    name: 'move-confirm',
+    go: async (page) => {
+      await lookAtMove(page, 'Bench-hook kit, period 3');
+      await page.getByRole('radio', { name: 'nobody drops' }).check();
+      await page.getByRole('button', { name: /^move to version/ }).click();
+      await page.getByRole('alertdialog').waitFor();
+    },
+  },
   { role: 'teacher', name: 'gradebook', go: openGradebook },
   {
     role: 'teacher',

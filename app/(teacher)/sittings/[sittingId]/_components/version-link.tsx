@@ -1,12 +1,11 @@
 import Link from 'next/link';
 import type { MoveChoices } from '@/lib/contracts/moves';
-import { sayMoved } from './moved-words';
 
 /** The version that prices this sitting, and the way to another. */
 export function VersionLink({ choices }: { choices: MoveChoices }) {
   return (
     <p className="flex flex-wrap items-baseline gap-x-2 text-label">
-      {sayMoved(choices)}
+      version {choices.version.number}
       <Link href={`/sittings/${choices.sittingId}/move`} className="link font-[620]">
         another version
       </Link>

@@ -7,7 +7,8 @@ import { pageValue } from '@/lib/transport/page';
 import { sayPeriod } from '../../../_components/names';
 import { OutcomeTable } from './_components/outcome-table';
 import { PublishForm } from './_components/publish-form';
-import { VersionSince } from './_components/version-since';
+import { VersionNotice } from './_components/version-notice';
+import { readVersionSince } from './_components/version-since';
 
 export const metadata: Metadata = { title: 'Publish' };
 
@@ -15,22 +16,26 @@ export default async function PublishPage({ params }: PageProps<'/sittings/[sitt
   const { sittingId } = await params;
   const actor = await actorInRole('teacher');
   const preview = pageValue(await previewPublication(actor, { sittingId }));
-  const { title, sectionName, period, versionNumber, number, lastPublishedAt } = preview;
-  const last = lastPublishedAt === null ? null : { number: number - 1, publishedAt: lastPublishedAt };
+  const since = await readVersionSince(actor, preview);
+  const { title, sectionName, period, versionNumber, number } = preview;
   return (
     <DeskPage
       title={`Publish ${title}`}
-      note={`${sectionName}, ${sayPeriod(period)}, rubric ${versionNumber}`}
+      note={`${sectionName}, ${sayPeriod(period)}, version ${versionNumber}`}
       actions={<LinkButton href={`/sittings/${sittingId}`}>back to the sitting</LinkButton>}
       titleBlock={[
         { label: 'publication', value: number === 1 ? 'the first' : `number ${number}` },
         {
           label: 'differs',
-          value: preview.changed === null ? 'nothing is out yet' : sayChanged(preview.changed),
+          value: since
+            ? 'in the version'
+            : preview.changed === null
+              ? 'nothing is out yet'
+              : sayChanged(preview.changed),
         },
       ]}
     >
-      <VersionSince actor={actor} sittingId={sittingId} last={last} />
+      {since ? <VersionNotice since={since} /> : null}
       <div className="grid items-start gap-x-12 gap-y-8 lg:grid-cols-[minmax(0,1fr)_24rem]">
         <OutcomeTable preview={preview} />
         <PublishForm preview={preview} />

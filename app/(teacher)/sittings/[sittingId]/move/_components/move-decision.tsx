@@ -64,7 +64,9 @@ export function MoveDecision({ preview, published, held, onHeld, onMove }: MoveD
               instead of version {from.number}, at the bench too.
             </p>
             <p className="mt-2">
-              <Told preview={preview} published={published} held={held} /> You can undo the move until then.
+              <Told preview={preview} published={published} held={held} /> You can undo the move until you
+              publish
+              {published ? ' again' : ''}.
             </p>
           </ConfirmDialog>
         </div>
@@ -91,7 +93,7 @@ interface ToldProps {
 function Told({ preview: { students }, published, held }: ToldProps) {
   if (!published) return 'Nothing is out yet: students hear nothing before you publish.';
   const told = countTold(students, held);
-  return `Students are told at the next publication, and only those whose score changes: ${
-    told === 0 ? 'nobody' : told
-  }${told === 0 ? '' : ` of ${students.filter((student) => student.told).length}`}.`;
+  if (told === 0) return 'No score that is out changes, so nobody is told anything.';
+  const out = students.filter((student) => student.told).length;
+  return `Students are told at the next publication, and only those whose score changes: ${told} of ${out}.`;
 }

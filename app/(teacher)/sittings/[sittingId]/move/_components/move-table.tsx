@@ -13,11 +13,11 @@ export function MoveTable({ preview: { students, from, to, lose } }: { preview: 
       <TableHead>
         <tr>
           <HeadCell>student</HeadCell>
-          <HeadCell align="right">
+          <HeadCell align="right" className="md:whitespace-nowrap">
             version {from.number}
             {scale(from.total)}
           </HeadCell>
-          <HeadCell align="right">
+          <HeadCell align="right" className="md:whitespace-nowrap">
             version {to.number}
             {scale(to.total)}
           </HeadCell>
@@ -36,14 +36,25 @@ export function MoveTable({ preview: { students, from, to, lose } }: { preview: 
 
 function Row({ attempt, heldShown }: { attempt: MovedAttempt; heldShown: boolean }) {
   const { before, after, change, held } = attempt;
+  const name = <RowHead className="py-1.5 md:whitespace-nowrap">{attemptName(attempt)}</RowHead>;
+  if (before === null && after === null) {
+    return (
+      <tr>
+        {name}
+        <Cell colSpan={heldShown ? 4 : 3} align="right" className="py-1.5 text-ink-2">
+          no number under either
+        </Cell>
+      </tr>
+    );
+  }
   const moves = change !== null && change !== 0;
   return (
     <tr>
-      <RowHead className="py-1.5">{attemptName(attempt)}</RowHead>
+      {name}
       <Figure points={before} />
       <Figure points={after} />
       <Cell align="right" className={moves ? 'py-1.5 font-[660]' : 'py-1.5 text-ink-2'}>
-        {change === null ? 'not compared' : change === 0 ? 'stays' : signedPoints(change)}
+        {change === null ? '' : change === 0 ? 'stays' : signedPoints(change)}
       </Cell>
       {heldShown ? <Figure points={held} quiet={change === null || change >= 0} /> : null}
     </tr>
@@ -53,7 +64,7 @@ function Row({ attempt, heldShown }: { attempt: MovedAttempt; heldShown: boolean
 function Figure({ points, quiet = false }: { points: Points | null; quiet?: boolean }) {
   return (
     <Cell align="right" className={quiet || points === null ? 'py-1.5 text-ink-2' : 'py-1.5'}>
-      {points === null ? 'no number' : pointsAsText(points)}
+      {points === null ? 'none' : pointsAsText(points)}
     </Cell>
   );
 }
