@@ -102,7 +102,7 @@ export async function standOf({ sittingId }: RoundStage) {
     select v.number,
       (select count(*)::int from sitting_moves m where m.sitting_id = s.id) as moves,
       (select count(*)::int from sitting_moves m where m.sitting_id = s.id and undone_at is not null) as undone,
-      (select count(*)::int from access_log l where l.subject_id = s.id::text and action = 'sitting.move') as log
+      (select count(*)::int from access_log l where l.subject_id = s.id and action = 'sitting.move') as log
     from sittings s join rubric_versions v on v.id = s.rubric_version_id where s.id = ${sittingId}`;
   const sheets = await sql<{ attempt_id: string; score: number | null; held: number; total: number }[]>`
     select c.attempt_id, c.side, v.number as version, c.score_points as score, c.provisional_points as provisional,
