@@ -22,7 +22,11 @@ export function MoveTable({ preview: { students, from, to, lose } }: { preview: 
             {scale(to.total)}
           </HeadCell>
           <HeadCell align="right">change</HeadCell>
-          {lose > 0 ? <HeadCell align="right">if held</HeadCell> : null}
+          {lose > 0 ? (
+            <HeadCell align="right" className="whitespace-nowrap">
+              if held
+            </HeadCell>
+          ) : null}
         </tr>
       </TableHead>
       <TableBody fives>
