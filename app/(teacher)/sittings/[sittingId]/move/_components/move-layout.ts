@@ -8,7 +8,7 @@ export interface Mover {
   after: Points;
 }
 
-export interface PlacedText {
+interface PlacedText {
   x: number;
   text: string;
   anchor: 'start' | 'end';

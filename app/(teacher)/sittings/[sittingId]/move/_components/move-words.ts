@@ -62,7 +62,7 @@ export function dropsFirst(students: readonly MovedAttempt[]): MovedAttempt[] {
   );
 }
 
-export interface ChoiceWords {
+interface ChoiceWords {
   asIs: string;
   held: string;
 }
