@@ -27,6 +27,12 @@ const KEYS: Record<string, 'less' | 'more' | 'least' | 'most' | 'out' | 'type'> 
 
 const percent = (part: number, whole: number) => `${(part / whole) * 100}%`;
 
+/** The band is about to go, and its knife with it: the one inside it takes the cursor. */
+function focusInner(knife: HTMLElement, { side, index }: { side: string; index: number }) {
+  const inner = knife.parentElement?.querySelector(`[data-edge='${side} ${index - 1}']`);
+  if (inner instanceof HTMLElement) inner.focus();
+}
+
 /** What the knives on the rule are gripped by: drawn along it by pointer or finger, or moved by keys. */
 export function KnifeHandles({ edges, knives, layout, name }: KnifeHandlesProps) {
   const [grip, setGrip] = useState<{ shift: number } | null>(null);
@@ -48,10 +54,13 @@ export function KnifeHandles({ edges, knives, layout, name }: KnifeHandlesProps)
     }
     if (!key || event.altKey || event.ctrlKey || event.metaKey) return;
     event.preventDefault();
-    if (key === 'out') edges.takeOut(knife);
-    else if (key === 'type') edges.typeInto(knife);
-    else if (key === 'least' || key === 'most') edges.moveToEnd(knife, key);
-    else edges.step(knife, key === 'more' ? 1 : -1, event.shiftKey);
+    if (key === 'out') {
+      focusInner(event.currentTarget, knife);
+      edges.takeOut(knife);
+    }
+    if (key === 'type') edges.typeInto(knife);
+    if (key === 'least' || key === 'most') edges.moveToEnd(knife, key);
+    if (key === 'less' || key === 'more') edges.step(knife, key === 'more' ? 1 : -1, event.shiftKey);
   }
 
   return knives.map(({ edge, tab }, place) => {
@@ -61,6 +70,7 @@ export function KnifeHandles({ edges, knives, layout, name }: KnifeHandlesProps)
       <div
         key={`${knife.side}${knife.index}`}
         role="slider"
+        data-edge={`${knife.side} ${knife.index}`}
         tabIndex={0}
         aria-label={`${knife.side}, ${name}, edge of band ${knife.index + 1}`}
         aria-valuemin={least}

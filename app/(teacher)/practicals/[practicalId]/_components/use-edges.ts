@@ -3,7 +3,7 @@
 import { useState } from 'react';
 import type { KnifeEdge } from '@/components/rule/knife-layout';
 import type { RuleScale } from '@/components/rule/rule-scale';
-import type { Length } from '@/lib/length';
+import type { Length, Unit } from '@/lib/length';
 import { lengthAsTyped } from '@/lib/practicals/as-typed';
 import {
   addEdge,
@@ -15,7 +15,7 @@ import {
   stepEdge,
   takeOutBand,
 } from '@/lib/practicals/band-edges';
-import type { DraftSizeRule } from '@/lib/practicals/draft';
+import type { DraftSide, DraftSizeRule } from '@/lib/practicals/draft';
 import type { SizeRule } from '@/lib/scoring';
 import { fieldId } from './editor-context';
 import type { SizeRuleDesk } from './use-size-rule';
@@ -37,7 +37,9 @@ interface Drag {
   onto: number | null;
 }
 
-const SIDES = ['under', 'over'] as const;
+function edgesOf(rule: SizeRule, side: HeldEdge['side']): HeldEdge[] {
+  return rule[side].map((_, index) => ({ side, index }));
+}
 
 const isSame = (a: HeldEdge | null, b: HeldEdge) => a?.side === b.side && a.index === b.index;
 
@@ -52,7 +54,8 @@ export function useEdges(size: SizeRuleDesk, rule: SizeRule, scale: RuleScale) {
   /** Where both sides are alike, the over side is the one that is written. */
   const written = (side: HeldEdge['side']) => (mirrored ? 'over' : side);
   const bandsOf = ({ side }: HeldEdge) => rule[side];
-  const list = SIDES.flatMap((side) => rule[side].map((_, index) => ({ side, index })));
+  // From left to right, as they lie on the rule.
+  const list = [...edgesOf(rule, 'under').reverse(), ...edgesOf(rule, 'over')];
 
   function moveTo({ side, index }: HeldEdge, within: Length) {
     if (within === rule[side][index]?.within) return;
@@ -151,10 +154,7 @@ export function useEdges(size: SizeRuleDesk, rule: SizeRule, scale: RuleScale) {
       const typed = size.rule[written(side)];
       const next = addEdge(typed, sideOfRule(rule, side), at, scale.unit);
       if (!next) return;
-      setNews({
-        text: `A band to ${lengthAsTyped(at, scale.unit)} is added.`,
-        before: structuredClone(size.rule),
-      });
+      setNews({ text: addedWords(typed, next, at, scale.unit), before: structuredClone(size.rule) });
       size.change((each) => {
         each[written(side)] = structuredClone(next);
       });
@@ -164,6 +164,16 @@ export function useEdges(size: SizeRuleDesk, rule: SizeRule, scale: RuleScale) {
       setNews(null);
     },
   };
+}
+
+/** "A band to 1/8 is added: it loses 3, and what lies past it 4." */
+function addedWords(before: DraftSide, after: DraftSide, at: Length, unit: Unit): string {
+  const place = after.bands.findIndex((band, index) => band.within !== before.bands[index]?.within);
+  const band = after.bands[place];
+  const inner = `A band to ${lengthAsTyped(at, unit)} is added`;
+  if (place === 0) return `${inner}: past it, ${after.bands[1]?.lose} is lost.`;
+  if (after.beyond === before.beyond) return `${inner}: it loses ${band?.lose}.`;
+  return `${inner}: it loses ${band?.lose}, and what lies past it ${after.beyond}.`;
 }
 
 export type EdgeDesk = ReturnType<typeof useEdges>;
