@@ -1,4 +1,6 @@
 import type { Metadata } from 'next';
+import { OtherUnitProvider } from '@/components/other-unit/other-unit';
+import { readOtherUnit } from '@/components/other-unit/read-other-unit';
 import { PhoneActions } from '@/components/shell/phone-actions';
 import { LinkButton } from '@/components/ui/link-button';
 import type { TaskStage } from '@/lib/data/own/list-tasks';
@@ -26,7 +28,7 @@ export default async function TaskPage({ params }: PageProps<'/my/[sittingId]'>)
   const { task, rubric, policies, stage } = view;
   const next = NEXT[stage];
   return (
-    <>
+    <OtherUnitProvider isOn={await readOtherUnit()}>
       <TaskHead {...view} title={task.title} dueOn={stage === 'to do' ? view.dueOn : null} />
       <div className="mt-4 grid grid-cols-[minmax(0,1fr)] gap-8 pb-8">
         <SizeChooser rubric={rubric} lineNotes={task.lineNotes} />
@@ -40,6 +42,6 @@ export default async function TaskPage({ params }: PageProps<'/my/[sittingId]'>)
           {next.label}
         </LinkButton>
       </PhoneActions>
-    </>
+    </OtherUnitProvider>
   );
 }

@@ -1,5 +1,6 @@
 'use client';
 
+import { OtherLength } from '@/components/other-unit/other-unit';
 import { classNames } from '@/components/ui/class-names';
 import { LengthText } from '@/components/ui/fraction';
 import type { Length, Unit } from '@/lib/length';
@@ -30,6 +31,7 @@ export function AxisKeys({ target, unit, axis, onAxis }: AxisKeysProps) {
         >
           <span className="text-label">{each}</span>
           <LengthText ticks={target[each]} unit={unit} className="text-heading" />
+          <OtherLength ticks={target[each]} unit={unit} className="pb-1 text-small text-current" />
         </button>
       ))}
     </fieldset>

@@ -1,6 +1,7 @@
 'use client';
 
 import { useEffect, useState } from 'react';
+import { OtherSize } from '@/components/other-unit/other-unit';
 import { CheckboxField } from '@/components/ui/choice';
 import { SizeText } from '@/components/ui/fraction';
 import { Heading } from '@/components/ui/titles';
@@ -50,6 +51,7 @@ export function PieceChecklist({ rubric, personId, attemptId }: PieceChecklistPr
                   <>
                     <span className="font-[580]">{label}</span>{' '}
                     <SizeText {...line.target} unit={rubric.unit} className="ml-1 text-label text-ink-2" />
+                    <OtherSize size={line.target} unit={rubric.unit} className="block text-label leading-5" />
                   </>
                 }
               />

@@ -1,6 +1,7 @@
 'use client';
 
 import { useState } from 'react';
+import { OtherUnitSwitch } from '@/components/other-unit/other-unit';
 import { PartDrawing } from '@/components/part/part-drawing';
 import { FittedRuleFace } from '@/components/rule/fitted-rule-face';
 import { Heading } from '@/components/ui/titles';
@@ -35,6 +36,7 @@ export function SizeChooser({ rubric, lineNotes }: SizeChooserProps) {
       </div>
       {lineNotes[line.id] ? <p className="mt-1 max-w-[62ch]">{lineNotes[line.id]}</p> : null}
       <AxisKeys target={line.target} unit={rubric.unit} axis={axis} onAxis={setAxis} />
+      <OtherUnitSwitch unit={rubric.unit} className="mt-1" />
       <SizePrice rubric={rubric} line={line} axis={axis} />
       <OtherPrices rubric={rubric} line={line} axis={axis} onChoose={choose} />
     </section>

@@ -1,3 +1,4 @@
+import { OtherLength, OtherSize } from '@/components/other-unit/other-unit';
 import { LengthText, SizeText } from '@/components/ui/fraction';
 import { Heading } from '@/components/ui/titles';
 import { countTask, type Task } from '@/lib/practicals/task';
@@ -14,6 +15,7 @@ export function StockOfTask({ task }: { task: Task }) {
         <dd>
           {blank ? <SizeText {...blank} unit={unit} /> : 'as your teacher gives it'}
           {material ? `, ${material}` : ''}
+          {blank ? <OtherSize size={blank} unit={unit} className="block text-label" /> : null}
         </dd>
         <dt>pieces</dt>
         <dd>{pieces}</dd>
@@ -25,6 +27,7 @@ export function StockOfTask({ task }: { task: Task }) {
             <>
               <LengthText ticks={kerf} unit={unit} withUnit /> at every cut: it comes out of the waste, not
               out of a piece
+              <OtherLength ticks={kerf} unit={unit} className="block text-label" />
             </>
           )}
         </dd>

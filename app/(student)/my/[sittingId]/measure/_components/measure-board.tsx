@@ -1,5 +1,6 @@
 'use client';
 
+import { OtherUnitSwitch, TargetInOther } from '@/components/other-unit/other-unit';
 import { PartDrawing } from '@/components/part/part-drawing';
 import { PhoneActions } from '@/components/shell/phone-actions';
 import { LinkButton } from '@/components/ui/link-button';
@@ -48,6 +49,7 @@ export function MeasureBoard({ session, view, task }: MeasureBoardProps) {
                 width={500}
                 height={250}
               />
+              <TargetInOther ticks={place.line.target[spot.axis]} unit={rubric.unit} />
             </div>
           ) : null}
         </div>
@@ -56,6 +58,7 @@ export function MeasureBoard({ session, view, task }: MeasureBoardProps) {
             <ReadingField measuring={measuring} record={view.record} unit={rubric.unit} />
             <EntryKeys measuring={measuring} unit={rubric.unit} />
             <WhatElse measuring={measuring} record={view.record} />
+            <OtherUnitSwitch unit={rubric.unit} />
           </div>
         ) : (
           <p className="mt-4 text-lead">
