@@ -2,19 +2,18 @@
 
 import { useRouter } from 'next/navigation';
 import { type ReactNode, useState } from 'react';
-import { Button } from '@/components/ui/button';
 import { LinkButton } from '@/components/ui/link-button';
 import { Notice } from '@/components/ui/notice';
-import { Progress } from '@/components/ui/progress';
 import { Refusal } from '@/components/ui/refusal';
 import type { MovePreview } from '@/lib/contracts/moves';
 import { type MoveReply, moveSittingAction } from '../actions';
+import { Looking } from './looking';
 import { MoveDecision } from './move-decision';
 import { MoveDrawing } from './move-drawing';
 import { MoveTable } from './move-table';
 import { MoveVerdict } from './move-verdict';
 import { moversOf, pictureWords } from './move-words';
-import { type PreviewState, usePreview } from './use-preview';
+import { usePreview } from './use-preview';
 
 interface MoveBoardProps {
   sittingId: string;
@@ -102,53 +101,11 @@ function Answered({ reply }: { reply: MoveReply | null }) {
     );
   }
   return (
-    <Refusal title={reply.message} action={reply.signedOut ? <SignIn /> : undefined}>
+    <Refusal
+      title={reply.message}
+      action={reply.signedOut ? <LinkButton href="/sign-in">sign in</LinkButton> : undefined}
+    >
       {reply.signedOut ? 'Nothing was moved. Sign in, and come back to this page.' : null}
-    </Refusal>
-  );
-}
-
-function SignIn() {
-  return <LinkButton href="/sign-in">sign in</LinkButton>;
-}
-
-interface LookingProps {
-  state: Exclude<PreviewState, { kind: 'ready' }>;
-  toNumber: number;
-  stop: () => void;
-  again: () => void;
-}
-
-/** The preview on its way, stopped, or failed. */
-function Looking({ state, toNumber, stop, again }: LookingProps) {
-  if (state.kind === 'running') {
-    return (
-      <Progress
-        className="max-w-[40rem]"
-        label={`scoring what is recorded by version ${toNumber}`}
-        value={state.of === null ? null : state.done}
-        max={state.of ?? 0}
-        text={state.of === null ? undefined : `${state.done} of ${state.of} attempts`}
-        cancel={<Button onClick={stop}>cancel</Button>}
-      />
-    );
-  }
-  const look = (
-    <Button kind="act" onClick={again}>
-      look again
-    </Button>
-  );
-  if (state.kind === 'stopped') {
-    return (
-      <div className="grid justify-items-start gap-3">
-        <p>You stopped the preview. Nothing was changed.</p>
-        {look}
-      </div>
-    );
-  }
-  return (
-    <Refusal title={state.message} action={state.signedOut ? <SignIn /> : look}>
-      Nothing was changed: a preview only reads.
     </Refusal>
   );
 }
