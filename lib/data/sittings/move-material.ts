@@ -1,14 +1,7 @@
 import 'server-only';
 import type { Transaction } from '@/db/client';
-import {
-  type MoveHead,
-  type StandingMove,
-  selectMoveHeads,
-  selectMoves,
-  selectStandingMoves,
-  selectStoodVersions,
-  selectToldNumbers,
-} from '@/db/queries/moves';
+import { type MoveHead, selectMoveHeads, selectToldNumbers } from '@/db/queries/move-heads';
+import { type StandingMove, selectMoves, selectStandingMoves, selectStoodVersions } from '@/db/queries/moves';
 import { type PublicationRow, selectPublications } from '@/db/queries/publications';
 import type { SittingRow } from '@/db/queries/sittings';
 import { type Rubric, rubricSchema } from '@/lib/scoring';
@@ -62,11 +55,18 @@ export async function loadMoveMaterial(
     schoolId,
     heads.map(({ attemptId }) => attemptId),
   );
+  const pricingsOf = (id: string, held: string[]) => {
+    const plain = book.pricing(id, held);
+    return (attemptId: string) => {
+      const accommodation = accommodations.get(attemptId);
+      return accommodation ? book.pricing(id, held, accommodation) : plain;
+    };
+  };
   const stood = await selectStoodVersions(tx, schoolId, sittingId);
   return {
     heads,
-    now: (attemptId) => book.pricing(rubricVersionId, heldNow, accommodations.get(attemptId)),
-    after: (attemptId) => book.pricing(versionId, heldAfter, accommodations.get(attemptId)),
+    now: pricingsOf(rubricVersionId, heldNow),
+    after: pricingsOf(versionId, heldAfter),
     stood: stood.map(({ rubric }) => rubricSchema.parse(rubric)),
     movedBefore: (await selectMoves(tx, schoolId, sittingId)).length > 0,
     moves,

@@ -1,6 +1,6 @@
 import 'server-only';
 import type { Transaction } from '@/db/client';
-import { type MoveHead, selectRecorded } from '@/db/queries/moves';
+import { type MoveHead, selectRecorded } from '@/db/queries/move-heads';
 import { selectEventsOf } from '@/db/queries/sheets';
 import type { Attempt, Rubric } from '@/lib/scoring';
 import type { Cell } from '@/lib/sync/cells';
