@@ -137,17 +137,17 @@ test.describe('on a desk and a tablet', () => {
     }
     await page.keyboard.press('Shift+ArrowLeft');
     await expect(board.reading).toHaveAttribute('aria-valuenow', '4');
-    await expect(said).toContainText('this length loses 3, base 3 of 9, 4.76 of 100.');
+    await expect(said).toContainText('this length loses 3; base loses 3 of 9, 4.76 of 100.');
 
     const { x, y } = await board.middleOf(board.reading);
     await page.mouse.click(x - (await board.pitch(13)) * 2, y);
-    await expect(said).toContainText('this length loses 1, base 1 of 9, 1.59 of 100.');
+    await expect(said).toContainText('this length loses 1; base loses 1 of 9, 1.59 of 100.');
 
     await board.field('width of base reads').fill('3.25');
     await page.getByLabel('surface of base').selectOption('not good');
-    await expect(said).toContainText('base 5 of 9, 7.94 of 100.');
+    await expect(said).toContainText('base loses 5 of 9, 7.94 of 100.');
     await board.field('length of base reads').fill('6 5/8');
-    await expect(said).toContainText('base 9 of 9, gross, 14.29 of 100.');
+    await expect(said).toContainText('base is gross and loses 9 of 9, 14.29 of 100.');
     await expect(cells('base loses, of 9')).toHaveText(['9', '14.29']);
   });
 
@@ -255,6 +255,28 @@ test.describe('on a desk and a tablet', () => {
     await expect(page.getByText(/^Read with a rule \(1\/64 in\), about \d\d in 100 parts/)).toBeVisible();
   });
 
+  test('what cannot be used is told at its field, the rule keeps the last price, and publishing leads there', async ({
+    page,
+  }) => {
+    await board.field('over, length, band 2, within').fill('1/64');
+    await board.field('over, length, band 3, points').fill('0.5');
+    await page.getByLabel('worth of a piece, all lines').fill('2');
+    await board.field('most this size loses').fill('3');
+    for (const told of [
+      'Each band reaches further than the one before it.',
+      'A band takes no less than the one before it.',
+      'The most a size can lose is at most the piece’s worth, 2.',
+      'The rule shows the last price that could be read.',
+    ]) {
+      await board.field('over, length, band 1, within').focus();
+      await expect(page.getByText(told, { exact: false }).first()).toBeVisible();
+    }
+    await expect(board.face).toBeVisible();
+    await page.getByRole('button', { name: 'checks, all lines: square 1, surface 1' }).click();
+    await page.getByRole('button', { name: /^publish version 1/ }).click();
+    await expect(page.locator('input[aria-invalid="true"]:focus')).toBeVisible();
+  });
+
   test('every rule of the whole says what it does to an example as it is changed', async ({ page }) => {
     await openRules(page);
     const effect = (rule: string) => page.locator(`[data-effect="${rule}"]`);
@@ -263,7 +285,7 @@ test.describe('on a desk and a tablet', () => {
     await page.getByLabel('percent a day').fill('5');
     await page.getByLabel('percent at most').fill('20');
     await expect(effect('late')).toHaveText('The typical set scores 89, and 76 when it comes 3 days late.');
-    await page.getByLabel('of the first attempt and its redo counts').selectOption('the mean of all');
+    await page.getByLabel('of first attempt and redo counts').selectOption('the mean of all');
     await expect(effect('redo')).toHaveText('First 62, then 97: 80 counts.');
     await page.getByLabel('pieces of a line').selectOption('all as the worst of them');
     await expect(effect('set')).toContainText('the line loses 2.');

@@ -1,4 +1,4 @@
-import { chancePricedNext } from '@/lib/agreement';
+import { chancePricedNext, type ReadBand } from '@/lib/agreement';
 import type { Length } from '@/lib/length';
 import type { Points, Rubric, SizeRule } from '@/lib/scoring';
 import { lengthAsTyped } from './as-typed';
@@ -34,11 +34,25 @@ export function bandChances(rule: SizeRule, reading: Reading): BandChance[] {
       const band = { inner, outer: within, edge: edgeOf(within, reading) };
       const isDearer = priceOf(rule, side, index + 1) > priceOf(rule, side, index);
       const chance = ({ uncertainty }: ShopInstrument) =>
-        isDearer && inner < within ? chancePricedNext({ sd: WORK_SPREAD, u: uncertainty }, band) : null;
+        isDearer && inner < within ? rememberedChance(uncertainty, band) : null;
       const [ruler, caliper] = shopInstruments(reading.unit).map(chance);
       return { side, index, outer: within, chances: { rule: ruler ?? null, caliper: caliper ?? null } };
     }),
   );
+}
+
+const remembered = new Map<string, number | null>();
+const MOST_REMEMBERED = 1000;
+
+/** A long cut list asks for the same few bands at every key press. */
+function rememberedChance(u: number, band: ReadBand): number | null {
+  const key = `${u} ${band.inner} ${band.outer} ${band.edge}`;
+  const known = remembered.get(key);
+  if (known !== undefined) return known;
+  if (remembered.size >= MOST_REMEMBERED) remembered.clear();
+  const chance = chancePricedNext({ sd: WORK_SPREAD, u }, band);
+  remembered.set(key, chance);
+  return chance;
 }
 
 /** The last reading that is still priced in the band; rounding goes to the nearest, a tie toward the target. */

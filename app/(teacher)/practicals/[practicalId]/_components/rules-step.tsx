@@ -10,7 +10,7 @@ import { useEditor } from './editor-context';
 import { PieceRules } from './piece-rules';
 import { PredictionFields } from './prediction-fields';
 import { ReadingRules } from './reading-rules';
-import { RuleEffect } from './rule-effect';
+import { RuleEffect, RuleRow } from './rule-effect';
 import { TotalFields } from './total-fields';
 
 /** What holds for the attempt as a whole: how losses become a score, and what lateness, a redo and a prediction do. */
@@ -26,50 +26,47 @@ export function RulesStep() {
           <TotalFields effects={effects} />
         </Group>
         <Group id="redo" title="Redo">
-          <SelectField
-            label="of the first attempt and its redo counts"
-            className="max-w-72"
-            value={draft.redo.kind}
-            onChange={({ target: { value } }) => {
-              if (value === 'higher' || value === 'latest' || value === 'average') {
-                desk.edit((next) => {
-                  next.redo.kind = value;
-                });
-              }
-            }}
-            options={[
-              { value: 'higher', label: 'the higher' },
-              { value: 'latest', label: 'the last' },
-              { value: 'average', label: 'the mean of all' },
-            ]}
-          />
-          {draft.redo.kind === 'average' ? (
-            <DraftField
-              path="redo.roundTo"
-              label="the mean is rounded to"
-              kind="number"
-              className="max-w-56"
-            />
-          ) : (
-            <DraftField
-              path="redo.capPercent"
-              label="a redo counts up to, in percent"
-              kind="number"
-              className="max-w-56"
-              hint="A first attempt above it keeps its score."
-            />
-          )}
-          <RuleEffect effects={effects} rule="redo" />
+          <RuleRow effects={effects} rule="redo">
+            <div className="grid gap-4">
+              <SelectField
+                label="of first attempt and redo counts"
+                value={draft.redo.kind}
+                onChange={({ target: { value } }) => {
+                  if (value === 'higher' || value === 'latest' || value === 'average') {
+                    desk.edit((next) => {
+                      next.redo.kind = value;
+                    });
+                  }
+                }}
+                options={[
+                  { value: 'higher', label: 'the higher' },
+                  { value: 'latest', label: 'the last' },
+                  { value: 'average', label: 'the mean of all' },
+                ]}
+              />
+              {draft.redo.kind === 'average' ? (
+                <DraftField path="redo.roundTo" label="the mean is rounded to" kind="number" />
+              ) : (
+                <DraftField
+                  path="redo.capPercent"
+                  label="up to, in percent"
+                  kind="number"
+                  hint="A first attempt above it keeps its score."
+                />
+              )}
+            </div>
+          </RuleRow>
         </Group>
         <Group id="late" title="Late">
           <p className="max-w-[52ch] text-label text-ink-2">
             Days late are recorded either way. Leave both empty and they cost nothing.
           </p>
-          <div className="grid max-w-96 grid-cols-2 gap-4">
-            <DraftField path="late.perDay" label="percent a day" kind="number" />
-            <DraftField path="late.max" label="percent at most" kind="number" />
-          </div>
-          <RuleEffect effects={effects} rule="late" />
+          <RuleRow effects={effects} rule="late">
+            <div className="grid grid-cols-2 items-end gap-4">
+              <DraftField path="late.perDay" label="percent a day" kind="number" />
+              <DraftField path="late.max" label="percent at most" kind="number" />
+            </div>
+          </RuleRow>
         </Group>
       </div>
       <div className="grid content-start gap-10">

@@ -6,7 +6,7 @@ import type { RuleEffects } from '@/lib/practicals/rule-effects';
 import { DraftField } from './draft-field';
 import { fieldId, useEditor } from './editor-context';
 import { FindingText } from './finding-text';
-import { RuleEffect } from './rule-effect';
+import { RuleRow } from './rule-effect';
 
 const ROUNDINGS = ['1', '0.5', '0.1', '0.01'];
 
@@ -43,12 +43,13 @@ export function TotalFields({ effects }: { effects: RuleEffects | null }) {
           ? 'Losses come off one starting score, whatever the pieces are worth.'
           : 'Each piece is worth so many points; what is not lost of them is kept.'}
       </p>
-      <div className="grid max-w-96 grid-cols-2 items-start gap-4">
-        {isStart ? <DraftField path="total.start" label="start from" kind="number" /> : null}
-        <DraftField path="total.outOf" label="scaled to" kind="number" hint="Empty: as counted." />
-      </div>
-      <RuleEffect effects={effects} rule="scale" />
-      <div className="max-w-96">
+      <RuleRow effects={effects} rule="scale">
+        <div className="grid grid-cols-[repeat(auto-fit,minmax(5rem,1fr))] items-start gap-4">
+          {isStart ? <DraftField path="total.start" label="start from" kind="number" /> : null}
+          <DraftField path="total.outOf" label="scaled to" kind="number" hint="Empty: as counted." />
+        </div>
+      </RuleRow>
+      <RuleRow effects={effects} rule="rounding">
         <SelectField
           id={fieldId('total.roundTo')}
           label="score rounded to"
@@ -66,26 +67,23 @@ export function TotalFields({ effects }: { effects: RuleEffects | null }) {
           }
           options={ROUNDINGS.map((value) => ({ value, label: value }))}
         />
-      </div>
-      <RuleEffect effects={effects} rule="rounding" />
-      <div className="max-w-96">
+      </RuleRow>
+      <RuleRow effects={effects} rule="floor">
         <DraftField
           path="total.floor"
           label="floor, in percent"
           kind="number"
           hint="What is kept never falls below so much of the total; days late still take from it."
         />
-      </div>
-      <RuleEffect effects={effects} rule="floor" />
-      <div className="max-w-96">
+      </RuleRow>
+      <RuleRow effects={effects} rule="ceiling">
         <DraftField
           path="total.ceiling"
           label="bonus counts up to, in percent"
           kind="number"
           hint="100: a bonus never lifts a score above the total."
         />
-      </div>
-      <RuleEffect effects={effects} rule="ceiling" />
+      </RuleRow>
     </>
   );
 }
