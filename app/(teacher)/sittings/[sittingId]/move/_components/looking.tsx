@@ -17,7 +17,7 @@ export function Looking({ state, toNumber, stop, again }: LookingProps) {
     return (
       <Progress
         className="max-w-[40rem]"
-        label={`scoring what is recorded by version ${toNumber}`}
+        label={`pricing what is recorded by version ${toNumber}`}
         value={state.of === null ? null : state.done}
         max={state.of ?? 0}
         text={state.of === null ? undefined : `${state.done} of ${state.of} attempts`}

@@ -45,7 +45,6 @@ export function MoveBoard({ sittingId, versionId, toNumber, published, head, his
     <div className="grid items-start gap-x-10 gap-y-8 lg:grid-cols-[minmax(0,1fr)_20rem] xl:grid-cols-[minmax(0,1fr)_25rem_19rem]">
       <div className="grid gap-5 xl:col-span-2">
         {head}
-        <Answered reply={reply} />
         {state.kind === 'ready' ? (
           <MoveVerdict preview={state.preview} />
         ) : (
@@ -63,6 +62,7 @@ export function MoveBoard({ sittingId, versionId, toNumber, published, head, his
         </div>
       ) : null}
       <div className="max-lg:contents lg:col-start-2 lg:row-span-3 lg:row-start-1 lg:grid lg:gap-8 xl:col-start-3">
+        <Answered reply={reply} />
         {preview ? (
           <MoveDecision
             preview={preview}
@@ -95,8 +95,7 @@ function Answered({ reply }: { reply: MoveReply | null }) {
   if (reply.kind === 'stale') {
     return (
       <Notice title="Something changed since you looked.">
-        Nothing was moved. The preview is made again below, and your choice is kept: look at it and press once
-        more.
+        Nothing was moved. The preview is made again, and your choice is kept: look at it and press once more.
       </Notice>
     );
   }
