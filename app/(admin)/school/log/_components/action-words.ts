@@ -22,6 +22,8 @@ const WORDS: Record<string, string> = {
   'practical.create': 'made a practical',
   'practical.change': 'changed a practical',
   'practical.read': 'looked at a practical',
+  'practical.copy': 'copied a practical',
+  'version.read': 'took a practical out as a file',
   'sitting.open': 'opened a sitting',
   'sitting.change': 'changed a sitting',
   'sitting.publish': 'published',
