@@ -8,6 +8,7 @@ import {
   type TypedModification,
 } from '@/lib/contracts/accommodations';
 import type { AccommodationDeskView } from '@/lib/data/accommodations/read-accommodation-desk';
+import { isSameLabel } from '@/lib/scoring/modification';
 import { formatFactor } from '@/lib/scoring/modification-factor';
 import { type CheckRow, checkRows, typedChecks } from './check-rows';
 
@@ -46,7 +47,7 @@ export function useTyped(desk: AccommodationDeskView) {
         before.includes(key) ? before.filter((each) => each !== key) : [...before, key],
       ),
     setCheck: (check: TypedCheck) =>
-      setChecks((before) => [...before.filter(({ label }) => label !== check.label), check]),
+      setChecks((before) => [...before.filter(({ label }) => !isSameLabel(label, check.label)), check]),
     modification: read.success ? read.data : null,
     factorError: read.success
       ? undefined
