@@ -61,7 +61,7 @@ export function VersionCutList({ task, rubric }: VersionCutListProps) {
           ))}
         </TableBody>
       </Table>
-      <ul className="mt-5 grid grid-cols-[repeat(auto-fill,minmax(11.5rem,1fr))] gap-x-6 gap-y-5">
+      <ul className="mt-5 grid grid-cols-2 sm:grid-cols-[repeat(auto-fill,minmax(11.5rem,1fr))] gap-x-6 gap-y-5">
         {rubric.lines.map((line) => (
           <li key={line.id} className="break-inside-avoid">
             <PartDrawing size={line.target} unit={unit} label={line.label} width={310} height={190} />
