@@ -21,7 +21,7 @@ test('an admin invites another; the link survives being looked at, sets the pass
   await page.getByLabel('family name').fill('Bergström');
   await page.getByLabel('email').fill('maja at cedarfork');
   await page.getByRole('button', { name: 'send the invitation' }).click();
-  await expect(page.getByText('This is not an e-mail address.')).toBeVisible();
+  await expect(page.getByText('This is not an email address.')).toBeVisible();
   await expect(page.getByLabel('family name')).toHaveValue('Bergström');
   await page.getByLabel('email').fill(email);
   await page.getByLabel('teacher').uncheck();
@@ -64,7 +64,7 @@ test('a forgotten password is reset by a mailed link; the page says the same of 
     await expect(page.getByRole('heading', { name: 'Forgotten password' })).toBeVisible();
     await page.getByLabel('email').fill(address);
     await page.getByRole('button', { name: 'send me a link' }).click();
-    await expect(page.getByText('If there is an account with that e-mail')).toBeVisible();
+    await expect(page.getByText('If there is an account with that email')).toBeVisible();
   }
   await expectAccessible(page);
   const link = mailbox.linkIn(await mailbox.newestTo(admin.email ?? ''));

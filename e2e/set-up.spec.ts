@@ -53,5 +53,5 @@ test('the set-up page points to each field that is left empty', async ({ page })
   await page.getByRole('button', { name: 'make the school' }).click();
   await expect(page.getByText('Type the name of the school.')).toBeVisible();
   await expect(page.getByText('Type the given name.')).toBeVisible();
-  await expect(page.getByText('Type an e-mail address.')).toBeVisible();
+  await expect(page.getByText('Type an email address.')).toBeVisible();
 });

@@ -31,7 +31,7 @@ test('staff sign in, change their password, sign out, and the old password no lo
   await page.getByLabel('email').fill(admin.email ?? '');
   await page.locator('input[name="password"]').fill(PASSWORD);
   await page.getByRole('button', { name: 'sign in' }).click();
-  await expect(page.getByText('This e-mail and password do not belong together.')).toBeVisible();
+  await expect(page.getByText('This email and password do not belong together.')).toBeVisible();
   await expect(page.getByLabel('email')).toHaveValue(admin.email ?? '');
 });
 

@@ -2,7 +2,7 @@ import postgres from 'postgres';
 import { seedDemo } from '@/db/seed';
 import { migrateDatabase } from './migrate';
 
-/** Somebody of the demo who can be signed in as: staff by e-mail, students by school code and local ID. */
+/** Somebody of the demo who can be signed in as: staff by email, students by school code and local ID. */
 export interface DemoAccount {
   role: 'teacher' | 'student' | 'head' | 'aide' | 'admin';
   name: string;

@@ -29,7 +29,7 @@ async function givenStation(port) {
   await ensureNodeModules();
   const env = baseEnv(port);
   say('DATABASE_URL is set: that database is used, no demo is loaded and no stand-in services are started.');
-  if (!env.SMTP_URL) say('SMTP_URL is not set: e-mail waits in the queue and is not sent.');
+  if (!env.SMTP_URL) say('SMTP_URL is not set: email waits in the queue and is not sent.');
   if (!env.S3_BUCKET) say('S3_BUCKET is not set: files that go out are not kept.');
   if (!process.env.APP_SECRET)
     say('APP_SECRET is not set: one of this machine is used. Several instances need the same one.');

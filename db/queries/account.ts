@@ -34,7 +34,7 @@ const rolesHeld = sql<Role[]>`array(
   select held.role from ${personRoles} held
   where held.school_id = ${people.schoolId} and held.person_id = ${people.id})`;
 
-/** The person whom an e-mail names, unless they left. */
+/** The person whom an email names, unless they left. */
 export async function selectByEmail(db: Reader, email: string) {
   const [row] = await db
     .select({ ...PERSON, roles: rolesHeld })

@@ -109,7 +109,7 @@ export async function countWaiting(tx: Transaction, schoolId: string): Promise<n
   return rows.filter(({ hasPassword }) => !hasPassword).length;
 }
 
-/** Adds a person; undefined when the e-mail is in use, at whichever school. */
+/** Adds a person; undefined when the email is in use, at whichever school. */
 export async function insertPerson(
   tx: Transaction,
   row: typeof people.$inferInsert,

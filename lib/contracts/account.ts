@@ -13,13 +13,13 @@ const CUT_LINK = 'Part of this link is missing. Copy all of it again, or ask for
 export const secret = z.string(CUT_LINK).regex(SECRET_PATTERN, CUT_LINK);
 
 export const email = z
-  .string('Type an e-mail address.')
+  .string('Type an email address.')
   .trim()
   .toLowerCase()
-  .max(254, 'This e-mail address is too long.')
+  .max(254, 'This email address is too long.')
   .pipe(
     z.email(
-      'This is not an e-mail address. It needs a name, an @ and a place, such as r.lindqvist@school.example.',
+      'This is not an email address. It needs a name, an @ and a place, such as r.lindqvist@school.example.',
     ),
   );
 
@@ -28,10 +28,10 @@ export const personName = (label: string) =>
 
 export const signInStaffInput = z.object({
   email: z
-    .string('Type your e-mail.')
+    .string('Type your email.')
     .trim()
     .toLowerCase()
-    .min(1, 'Type your e-mail.')
+    .min(1, 'Type your email.')
     .max(254, 'This is too long.'),
   password: typedPassword('your password'),
 });

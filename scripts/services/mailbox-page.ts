@@ -28,7 +28,7 @@ export function listPage(mails: KeptMail[]): string {
   const table = `<table><tr><th>Received (UTC)<th>To<th>Subject</tr>${rows.join('')}</table>`;
   return layout(
     'Mail received here',
-    `<h1>Mail received here</h1><p>Nothing leaves this machine: what Trymark sends by e-mail ends here.</p>${
+    `<h1>Mail received here</h1><p>Nothing leaves this machine: what Trymark sends by email ends here.</p>${
       mails.length
         ? `${table}<form method="post" action="/delete"><p><button>Delete all</button></form>`
         : '<p>No mail yet.'

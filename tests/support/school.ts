@@ -46,7 +46,7 @@ interface PersonChoice {
   left?: boolean;
 }
 
-/** A person of the school in these roles: staff get an e-mail, students a local ID, unless told otherwise. */
+/** A person of the school in these roles: staff get an email, students a local ID, unless told otherwise. */
 export async function makePerson(
   school: TestSchool,
   roles: Role[],

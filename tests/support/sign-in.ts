@@ -1,6 +1,6 @@
 import { expect, type Page } from 'playwright/test';
 
-/** Somebody who can sign in: staff by e-mail, students by school code and local ID. */
+/** Somebody who can sign in: staff by email, students by school code and local ID. */
 export interface Account {
   email: string | null;
   schoolCode: string | null;

@@ -12,7 +12,7 @@ export default async function ResetPage({ searchParams }: { searchParams: Promis
     return (
       <EntranceShell title="Check your mail">
         <p className="mb-4">
-          If there is an account with that e-mail, a link is on its way to it. It works once, for one hour.
+          If there is an account with that email, a link is on its way to it. It works once, for one hour.
         </p>
         <p className="mb-6 text-ink-2">
           Nothing there after a few minutes? Look among the unwanted mail, and check the address with your
@@ -29,7 +29,7 @@ export default async function ResetPage({ searchParams }: { searchParams: Promis
   }
   return (
     <EntranceShell title="Forgotten password">
-      <p className="mb-4">Type the e-mail you sign in with. A link to choose a new password comes by mail.</p>
+      <p className="mb-4">Type the email you sign in with. A link to choose a new password comes by mail.</p>
       <AskReset />
       <p className="mt-6 text-label text-ink-2">
         A student? Ask your teacher: new words are made at the bench.{' '}

@@ -29,7 +29,7 @@ export const resetPassphrase = defineVerb({
     authorize({ schoolId: student.schoolId, teacherIds: student.teacherIds, studentId: student.personId });
     const { givenName, familyName, localId, schoolCode, personId: studentId } = student;
     if (student.roles.some((role) => role !== 'student')) {
-      refuse('forbidden', `${givenName} ${familyName} also works here and resets the password by e-mail.`);
+      refuse('forbidden', `${givenName} ${familyName} also works here and resets the password by email.`);
     }
     if (localId === null) {
       return refuse(

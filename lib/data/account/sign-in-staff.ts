@@ -22,7 +22,7 @@ export function firstStaffRole(roles: readonly Role[]): Role | undefined {
   return FIRST_ROLE.find((role) => roles.includes(role));
 }
 
-/** Signs staff in by e-mail and password. An unknown address and a wrong password get one answer, in the same time. */
+/** Signs staff in by email and password. An unknown address and a wrong password get one answer, in the same time. */
 export const signInStaff = defineEntry({
   input: signInStaffInput,
   async run({ input, address, db }): Promise<SignedInView> {
@@ -33,10 +33,10 @@ export const signInStaff = defineEntry({
       address,
       person: found && role ? found : null,
       passwords: [input.password],
-      wrong: 'This e-mail and password do not belong together.',
+      wrong: 'This email and password do not belong together.',
       closed: 'This account is closed after too many wrong tries. “Forgotten password” opens it again.',
     });
-    if (!found || !role) return refuse('invalid', 'This e-mail and password do not belong together.');
+    if (!found || !role) return refuse('invalid', 'This email and password do not belong together.');
     const { personId, schoolId, schoolName, schoolCode } = found;
     await logEntry(db, { schoolId, personId, by: role, action: 'account.sign-in' });
     return { personId, schoolId, role, schoolName, schoolCode };

@@ -14,7 +14,7 @@ export const changeRoles = defineVerb({
     authorize(person);
     const { roles, departmentId } = input;
     if (person.leftAt || person.email === null) {
-      refuse('conflict', 'Roles are for people with an e-mail who have not left.');
+      refuse('conflict', 'Roles are for people with an email who have not left.');
     }
     if (person.personId === actor.personId && !roles.includes('admin')) {
       refuseFields({ roles: ['You cannot take the admin role from yourself; another admin can.'] });

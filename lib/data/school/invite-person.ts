@@ -17,12 +17,11 @@ export const invitePerson = defineVerb({
     if (known) {
       const name = `${known.givenName} ${known.familyName}`.trim();
       const how = known.leftAt ? 'Bring that person back instead.' : 'Change that person’s roles instead.';
-      refuseFields({ email: [`${name} has this e-mail already. ${how}`] });
+      refuseFields({ email: [`${name} has this email already. ${how}`] });
     }
     if (!(await isOwnDepartment(tx, schoolId, departmentId))) refuseFields(NO_SUCH_DEPARTMENT);
     const personId = await insertPerson(tx, { schoolId, givenName, familyName, email });
-    if (!personId)
-      return refuseFields({ email: ['This e-mail cannot be used here. Use another of theirs.'] });
+    if (!personId) return refuseFields({ email: ['This email cannot be used here. Use another of theirs.'] });
     await replaceStaffRoles(tx, schoolId, personId, roleRows(roles, departmentId));
     await sendInvitation(tx, actor, { personId, givenName, email, roles });
     await log({ subjectKind: 'person', subjectId: personId, aboutPersonId: personId, details: { roles } });

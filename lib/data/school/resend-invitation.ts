@@ -14,7 +14,7 @@ export const resendInvitation = defineVerb({
     authorize(person);
     const { personId, givenName, email, roles } = person;
     if (person.leftAt || !isStaff(person.roles) || email === null) {
-      return refuse('conflict', 'Only staff with an e-mail, who have not left, can be invited.');
+      return refuse('conflict', 'Only staff with an email, who have not left, can be invited.');
     }
     if (person.hasPassword) {
       refuse('conflict', `${givenName} has accepted already. “Forgotten password” helps if it is lost.`);

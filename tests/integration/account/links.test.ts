@@ -210,10 +210,10 @@ describe('a reset', () => {
     expect(await canSignIn(person, NEW)).toBe(true);
   });
 
-  it('says at the field what is no e-mail address', async () => {
+  it('says at the field what is no email address', async () => {
     expect(await askReset({ email: 'rut at cedarfork' }, address())).toMatchObject({
       ok: false,
-      problem: { code: 'invalid', fields: { email: [expect.stringMatching(/not an e-mail address/)] } },
+      problem: { code: 'invalid', fields: { email: [expect.stringMatching(/not an email address/)] } },
     });
   });
 

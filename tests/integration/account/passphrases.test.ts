@@ -134,7 +134,7 @@ describe('new words at the bench', () => {
     });
     await makeSection(school, { teacherIds: [teacher.personId], studentIds: [both.personId] });
     expect(await resetPassphrase(teacher, { studentId: both.personId })).toMatchObject({
-      problem: { code: 'forbidden', message: expect.stringMatching(/by e-mail/) },
+      problem: { code: 'forbidden', message: expect.stringMatching(/by email/) },
     });
   });
 

@@ -26,7 +26,7 @@ describe('failures of one account', () => {
     const fail = () => signInStaff({ email, password: 'plane against the grain' }, CLASSROOM);
     for (let slip = 1; slip <= 3; slip += 1) {
       expect(await fail()).toMatchObject({
-        problem: { message: 'This e-mail and password do not belong together.' },
+        problem: { message: 'This email and password do not belong together.' },
       });
     }
     for (const wait of ['5 seconds', '10 seconds', '20 seconds', '40 seconds', '2 minutes']) {

@@ -16,7 +16,7 @@ const address = () => `10.0.0.${randomUUID()}`;
 afterAll(closeLimits);
 
 describe('staff', () => {
-  it('sign in by e-mail and password, in any case of the address, and the log says so', async () => {
+  it('sign in by email and password, in any case of the address, and the log says so', async () => {
     const person = await makePerson(school, ['teacher'], { password: PASSWORD });
     const result = await signInStaff(
       { email: ` ${person.email?.toUpperCase()} `, password: PASSWORD },
@@ -70,7 +70,7 @@ describe('staff', () => {
       ok: false,
       problem: {
         code: 'invalid',
-        fields: { email: ['Type your e-mail.'], password: ['Type your password.'] },
+        fields: { email: ['Type your email.'], password: ['Type your password.'] },
       },
     });
   });

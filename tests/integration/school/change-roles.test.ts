@@ -55,7 +55,7 @@ describe('changing roles', () => {
     expect(await rolesOf(admin.personId)).toEqual(['admin']);
   });
 
-  it('is refused for who has no e-mail, and for a department of another school', async () => {
+  it('is refused for who has no email, and for a department of another school', async () => {
     const student = await makePerson(school, ['student']);
     expect(await changeRoles(admin, { personId: student.personId, roles: ['aide'] })).toMatchObject({
       problem: { code: 'conflict' },

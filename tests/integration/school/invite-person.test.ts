@@ -75,23 +75,23 @@ describe('inviting', () => {
     );
   });
 
-  it('says whose the e-mail is when somebody of the school has it, in any case', async () => {
+  it('says whose the email is when somebody of the school has it, in any case', async () => {
     const known = await makePerson(school, ['aide'], { givenName: 'Orla', familyName: 'Gallagher' });
     expect(await invitePerson(admin, invitation({ email: known.email?.toUpperCase() }))).toMatchObject({
       problem: {
-        fields: { email: [expect.stringMatching(/^Orla Gallagher has this e-mail already\. Change/)] },
+        fields: { email: [expect.stringMatching(/^Orla Gallagher has this email already\. Change/)] },
       },
     });
   });
 
-  it('offers to bring back who left with that e-mail', async () => {
+  it('offers to bring back who left with that email', async () => {
     const gone = await makePerson(school, ['aide'], { left: true });
     expect(await invitePerson(admin, invitation({ email: gone.email }))).toMatchObject({
       problem: { fields: { email: [expect.stringMatching(/Bring that person back/)] } },
     });
   });
 
-  it('tells nothing about the person when the e-mail is in use at another school', async () => {
+  it('tells nothing about the person when the email is in use at another school', async () => {
     const elsewhere = await makePerson(ardmore, ['teacher'], { familyName: 'Secretname' });
     const refused = await invitePerson(admin, invitation({ email: elsewhere.email }));
     expect(refused).toMatchObject({ problem: { code: 'invalid', fields: { email: [expect.any(String)] } } });

@@ -38,7 +38,7 @@ export default async function StudentPage({ params }: StudentPageProps) {
         <section>
           <Heading className="mb-3 border-b border-ink pb-1">passphrase</Heading>
           {isStaff ? (
-            <p>Works here too, and resets the password by e-mail.</p>
+            <p>Works here too, and resets the password by email.</p>
           ) : (
             <NewWords studentId={studentId} first={passphrase === 'none'} />
           )}
