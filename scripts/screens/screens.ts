@@ -183,6 +183,16 @@ export const SCREENS: Screen[] = [
     },
   },
   { role: 'head', name: 'gradebooks', path: '/gradebook' },
+  { role: 'head', name: 'shared', path: '/department/shared' },
+  {
+    role: 'head',
+    name: 'shared-version',
+    go: async (page) => {
+      await page.goto('/department/shared');
+      await page.getByRole('link', { name: /what it would do.*version 1 of Desk caddy/ }).click();
+      await page.getByRole('heading', { name: 'Declared differences' }).waitFor();
+    },
+  },
   { role: 'student', name: 'home', path: '/' },
   { role: 'head', name: 'home', path: '/' },
   { role: 'aide', name: 'home', path: '/' },

@@ -42,6 +42,7 @@ const WORDS: Record<string, string> = {
   'task.read': 'looked at own tasks',
   'result.read': 'looked at own result',
   'rubric.compare': 'compared rubrics',
+  'rubric.approve': 'approved a rubric, or ended that',
 };
 
 export function sayAction(action: string): string {
