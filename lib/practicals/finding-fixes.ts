@@ -27,7 +27,11 @@ interface FixRule {
 }
 
 const ROUNDINGS: Points[] = [50, 10, 1];
-const FREE: Record<Unit, Length> = { in: TICKS_PER_INCH / 32, mm: TICKS_PER_MM / 2 };
+/** Free distances that a rule shows, widest first. */
+const FREE: Record<Unit, Length[]> = {
+  in: [32, 64, 128].map((parts) => TICKS_PER_INCH / parts),
+  mm: [2, 5, 10, 20].map((parts) => TICKS_PER_MM / parts),
+};
 
 const lineOf = (rubric: Rubric, { lineId }: RubricFinding) => rubric.lines.find(({ id }) => id === lineId);
 
@@ -58,10 +62,11 @@ function raiseBeyond(rule: DraftSizeRule, least: Points): void {
   if (cap !== null && cap < least) rule.cap = typed;
 }
 
-function halfOfNext(rule: DraftSizeRule, unit: Unit): Length {
+/** The widest free distance short of the next band; null where that one is too near. */
+function freeBefore(rule: DraftSizeRule, unit: Unit): Length | null {
   const read = readSizeRule(rule, unit);
   const next = read ? SIDES.flatMap((side) => read[side][1]?.within ?? []) : [];
-  return Math.min(FREE[unit], ...next.map((within) => Math.max(1, Math.floor(within / 2))));
+  return FREE[unit].find((free) => next.every((within) => free < within)) ?? null;
 }
 
 const FIXES: Record<string, FixRule> = {
@@ -69,8 +74,9 @@ const FIXES: Record<string, FixRule> = {
     amountOf: () => 0,
     fix(path, _, { draft }) {
       const [first] = pricesAt(draft, path);
-      if (!first) return null;
-      const free = lengthAsTyped(halfOfNext(first, draft.unit), draft.unit);
+      const distance = first ? freeBefore(first, draft.unit) : null;
+      if (distance === null) return null;
+      const free = lengthAsTyped(distance, draft.unit);
       return {
         label: `make the first band ${free}`,
         apply(next) {

@@ -15,7 +15,7 @@ export function FindingText({ text, fix, isNote }: PlacedFinding) {
         <Button
           kind="quiet"
           size="small"
-          className="min-h-6 px-0 py-0"
+          className="min-h-6 px-0 py-0 text-left"
           onClick={() => desk.edit((draft) => fix.apply(draft))}
         >
           {fix.label}
@@ -32,7 +32,13 @@ export function FindingNotes({ path, className }: { path: string; className?: st
   if (here.length === 0) return null;
   const isQuiet = here.every(({ isNote }) => isNote);
   return (
-    <div className={classNames(isQuiet ? '' : 'relative border-t-edge border-ink pt-2 pl-6', className)}>
+    <div
+      className={classNames(
+        'grid gap-2',
+        !isQuiet && 'relative border-t-edge border-ink pt-2 pl-6',
+        className,
+      )}
+    >
       {isQuiet ? null : (
         <>
           <span aria-hidden className="absolute -top-[5px] left-[5px] size-[7px] rounded-[50%] bg-ink" />

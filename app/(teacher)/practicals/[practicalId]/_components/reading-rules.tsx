@@ -15,7 +15,7 @@ export function ReadingRules({ effects }: { effects: RuleEffects | null }) {
           hint="The small free distance past every band’s edge that covers the instrument."
         />
       </RuleRow>
-      <RuleRow effects={effects} rule="gross">
+      <RuleRow effects={effects} rule="gross" path="reading.grossLimit">
         <DraftField
           path="reading.grossLimit"
           label="gross limit"
@@ -23,7 +23,7 @@ export function ReadingRules({ effects }: { effects: RuleEffects | null }) {
           hint="A size further off than this is not that part: the piece loses its worth."
         />
       </RuleRow>
-      <RuleRow effects={effects} rule="readTo">
+      <RuleRow effects={effects} rule="readTo" path="reading.readTo">
         <DraftField
           path="reading.readTo"
           label="deviations rounded to"

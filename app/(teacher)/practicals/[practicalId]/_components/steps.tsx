@@ -3,7 +3,7 @@
 import { useSearchParams } from 'next/navigation';
 import { classNames } from '@/components/ui/class-names';
 import { type EditorStep, stepOfPath } from '@/lib/practicals/field-names';
-import { useEditor } from './editor-context';
+import { type Editor, useEditor } from './editor-context';
 
 const STEPS: { step: EditorStep; label: string }[] = [
   { step: 'task', label: 'task' },
@@ -27,8 +27,7 @@ interface StepsProps {
 
 export function Steps({ current, wrong, onStep }: StepsProps) {
   const { findings } = useEditor();
-  const found = { task: 0, prices: 0, rules: 0 };
-  for (const { path, isNote } of findings) if (!isNote) found[stepOfPath(path)] += 1;
+  const found = countFound(findings);
   return (
     <nav aria-label="sheets of this practical">
       <ol className="flex flex-wrap gap-x-4 gap-y-1">
@@ -66,4 +65,13 @@ export function Steps({ current, wrong, onStep }: StepsProps) {
       </ol>
     </nav>
   );
+}
+
+/** What is worth looking at on each sheet; the same of several sizes counts once. */
+function countFound(findings: Editor['findings']): Record<EditorStep, number> {
+  const found: Record<EditorStep, Set<string>> = { task: new Set(), prices: new Set(), rules: new Set() };
+  for (const { path, code, text, isNote } of findings) {
+    if (!isNote) found[stepOfPath(path)].add(`${code} ${text}`);
+  }
+  return { task: found.task.size, prices: found.prices.size, rules: found.rules.size };
 }

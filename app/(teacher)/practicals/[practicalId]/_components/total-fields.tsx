@@ -43,13 +43,13 @@ export function TotalFields({ effects }: { effects: RuleEffects | null }) {
           ? 'Losses come off one starting score, whatever the pieces are worth.'
           : 'Each piece is worth so many points; what is not lost of them is kept.'}
       </p>
-      <RuleRow effects={effects} rule="scale">
-        <div className="grid grid-cols-[repeat(auto-fit,minmax(5rem,1fr))] items-start gap-4">
+      <RuleRow effects={effects} rule="scale" path="total.start">
+        <div className="grid gap-4">
           {isStart ? <DraftField path="total.start" label="start from" kind="number" /> : null}
           <DraftField path="total.outOf" label="scaled to" kind="number" hint="Empty: as counted." />
         </div>
       </RuleRow>
-      <RuleRow effects={effects} rule="rounding">
+      <RuleRow effects={effects} rule="rounding" path="total.roundTo">
         <SelectField
           id={fieldId('total.roundTo')}
           label="score rounded to"
