@@ -1,11 +1,14 @@
 'use client';
 
+import { format } from 'date-fns';
 import { useSyncExternalStore } from 'react';
+import { sayDay, sayTime } from './days';
 
+/** The day has its year: it stands in lists that go back far. */
 const STYLES = {
-  time: { hour: '2-digit', minute: '2-digit', hourCycle: 'h23' },
-  day: { day: 'numeric', month: 'long', year: 'numeric' },
-} as const;
+  time: (at: string) => sayTime(at),
+  day: (at: string) => sayDay(format(new Date(at), 'yyyy-MM-dd')),
+};
 
 const never = () => () => {};
 
@@ -16,8 +19,6 @@ export function LocalTime({ at, style = 'time' }: { at: string; style?: keyof ty
     () => true,
     () => false,
   );
-  const text = inBrowser
-    ? new Intl.DateTimeFormat('en-GB', STYLES[style]).format(new Date(at))
-    : at.slice(0, 10);
+  const text = inBrowser ? STYLES[style](at) : at.slice(0, 10);
   return <time dateTime={at}>{text}</time>;
 }

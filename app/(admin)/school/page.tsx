@@ -1,10 +1,10 @@
 import type { Metadata } from 'next';
 import { DeskPage } from '@/components/shell/desk-page';
+import { sayDay } from '@/components/ui/days';
 import { LinkButton } from '@/components/ui/link-button';
 import { Heading } from '@/components/ui/titles';
 import { readSchool } from '@/lib/data/school/read-school';
 import { pageActor, pageValue } from '@/lib/transport/page';
-import { sayDay } from './_components/day';
 import { NextSteps } from './_components/next-steps';
 
 export const metadata: Metadata = { title: 'School' };

@@ -1,5 +1,6 @@
 'use client';
 
+import { sayTime } from '@/components/ui/days';
 import { LengthText } from '@/components/ui/fraction';
 import { pointsAsText } from '@/components/ui/points-text';
 import { findPiece } from '@/lib/round/pieces';
@@ -119,7 +120,7 @@ function Source({ event }: { event: BenchEvent }) {
   const { view } = useBench();
   const own = event.authorId === view.state.plan.personId;
   const who = own ? 'you' : (view.authors[event.authorId] ?? 'another person');
-  const at = new Date(event.capturedAt).toLocaleTimeString([], { hour: 'numeric', minute: '2-digit' });
+  const at = sayTime(event.capturedAt);
   return (
     <span className="text-lead">
       {who}, {at}

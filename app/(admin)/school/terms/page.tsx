@@ -2,11 +2,11 @@ import type { Metadata } from 'next';
 import Link from 'next/link';
 import { DeskPage } from '@/components/shell/desk-page';
 import { Cell, HeadCell, RowHead, Table, TableBody, TableHead } from '@/components/table/table';
+import { sayDay } from '@/components/ui/days';
 import { EmptyState } from '@/components/ui/empty-state';
 import { Heading } from '@/components/ui/titles';
 import { listTerms, type TermView } from '@/lib/data/school/list-terms';
 import { pageActor, pageValue } from '@/lib/transport/page';
-import { sayDay } from '../_components/day';
 import { TermForm } from '../_components/term-form';
 
 export const metadata: Metadata = { title: 'Terms' };

@@ -1,6 +1,6 @@
-import { format, parseISO } from 'date-fns';
+import { sayWeekday } from '@/components/ui/days';
 
-/** A day as it is said in class: "Friday, December 4". */
+/** A day as it is said in class: "Friday, 4 December". */
 export function DayText({ day }: { day: string }) {
-  return <time dateTime={day}>{format(parseISO(day), 'EEEE, MMMM d')}</time>;
+  return <time dateTime={day}>{sayWeekday(day)}</time>;
 }

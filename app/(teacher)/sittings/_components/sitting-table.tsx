@@ -1,7 +1,7 @@
 import Link from 'next/link';
 import { Cell, HeadCell, RowHead, Table, TableBody, TableHead } from '@/components/table/table';
+import { sayDayOf } from '@/components/ui/days';
 import type { SittingListView } from '@/lib/data/sittings/list-sittings';
-import { sayDayOf } from '../../_components/days';
 import { count } from '../../_components/names';
 import { ClassStrip } from './class-strip';
 

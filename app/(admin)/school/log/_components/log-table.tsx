@@ -1,8 +1,8 @@
 import Link from 'next/link';
 import { Cell, HeadCell, RowHead, Table, TableBody, TableHead } from '@/components/table/table';
+import { sayMoment } from '@/components/ui/days';
 import { ROLE_NAMES } from '@/lib/auth/roles';
 import type { LogEntryView } from '@/lib/data/school/read-log';
-import { sayMoment } from '../../_components/day';
 import { sayAction, sayDetails } from './action-words';
 
 export function LogTable({ entries, timeZone }: { entries: LogEntryView[]; timeZone: string }) {

@@ -1,6 +1,6 @@
 import { SquareHistogram } from '@/components/charts/square-histogram';
+import { sayShortDayOf } from '@/components/ui/days';
 import type { GradebookView } from '@/lib/contracts/gradebook';
-import { sayShortDayOf } from '../../../_components/days';
 import { percentOf } from './cell-words';
 import { SCALE_END } from './spread';
 

@@ -1,6 +1,6 @@
 import { Cell, HeadCell, RowHead, Table, TableBody, TableHead } from '@/components/table/table';
+import { sayMoment } from '@/components/ui/days';
 import type { GradebookView } from '@/lib/contracts/gradebook';
-import { sayMoment } from '../../../_components/days';
 
 interface FilesSentProps {
   files: GradebookView['files'];

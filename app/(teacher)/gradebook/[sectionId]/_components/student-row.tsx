@@ -1,7 +1,7 @@
 import { memo, type ReactNode } from 'react';
 import { classNames } from '@/components/ui/class-names';
+import { sayDay } from '@/components/ui/days';
 import type { GradebookCell, GradebookView } from '@/lib/contracts/gradebook';
-import { sayDay } from '../../../_components/days';
 import { rosterName } from '../../../_components/names';
 import { cellSaid, tenthsAsText } from './cell-words';
 import type { GradebookStudent } from './columns';

@@ -1,6 +1,6 @@
 import type { TitleBlockCell } from '@/components/shell/title-block';
+import { sayDayOf } from '@/components/ui/days';
 import type { GradebookView } from '@/lib/contracts/gradebook';
-import { sayDayOf } from '../../../_components/days';
 import { count, sayPeriod } from '../../../_components/names';
 
 export function gradebookTitleBlock(book: GradebookView, late: boolean): TitleBlockCell[] {

@@ -1,7 +1,8 @@
 import Link from 'next/link';
 import { Cell, HeadCell, RowHead, Table, TableBody, TableHead } from '@/components/table/table';
+import { sayShortDay } from '@/components/ui/days';
 import type { RosterStudentView, RosterView } from '@/lib/data/sections/read-roster';
-import { sayName, saySection, sayShortDay } from '../../_components/words';
+import { sayName, saySection } from '../../_components/words';
 
 interface LeftTableProps {
   section: RosterView;

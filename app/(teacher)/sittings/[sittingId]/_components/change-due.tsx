@@ -3,11 +3,11 @@
 import { useActionState, useState } from 'react';
 import { FormRefusal } from '@/components/account/form-refusal';
 import { Button } from '@/components/ui/button';
+import { sayDay } from '@/components/ui/days';
 import { Dialog } from '@/components/ui/dialog';
 import { SubmitButton } from '@/components/ui/submit-button';
 import { TextField } from '@/components/ui/text-field';
 import type { FormReply } from '@/lib/transport/form';
-import { sayDay } from '../../../_components/days';
 import { changeDueAction } from '../../actions';
 
 interface ChangeDueProps {

@@ -1,6 +1,6 @@
+import { sayMoment } from '@/components/ui/days';
 import { Notice } from '@/components/ui/notice';
 import type { MoveChoices } from '@/lib/contracts/moves';
-import { sayMoment } from '../../../_components/days';
 import { UndoMove } from '../move/_components/undo-move';
 import { standingMove } from './moved-words';
 

@@ -1,7 +1,7 @@
 import type { TitleBlockCell } from '@/components/shell/title-block';
+import { sayDay, sayDayOf } from '@/components/ui/days';
 import type { MoveChoices } from '@/lib/contracts/moves';
 import type { SittingView } from '@/lib/data/sittings/read-sitting';
-import { sayDay, sayDayOf } from '../../../_components/days';
 import { sayMoved } from './moved-words';
 
 export function sittingTitleBlock(sitting: SittingView, choices: MoveChoices): TitleBlockCell[] {

@@ -1,10 +1,10 @@
 import type { Metadata } from 'next';
 import { actorInRole } from '@/app/account/_components/actor-in-role';
 import { DeskPage } from '@/components/shell/desk-page';
+import { sayDayOf } from '@/components/ui/days';
 import { LinkButton } from '@/components/ui/link-button';
 import { readMoveChoices } from '@/lib/data/sittings/read-move-choices';
 import { pageValue } from '@/lib/transport/page';
-import { sayDayOf } from '../../../_components/days';
 import { sayPeriod } from '../../../_components/names';
 import { ChosenVersion } from './_components/chosen-version';
 import { MoveBoard } from './_components/move-board';

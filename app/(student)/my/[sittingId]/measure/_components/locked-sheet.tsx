@@ -1,9 +1,9 @@
 'use client';
 
-import { format } from 'date-fns';
 import { LossTable } from '@/components/loss/loss-table';
 import { ScoreRule } from '@/components/rule/score-rule';
 import { CopyButton } from '@/components/ui/copy-button';
+import { sayMoment } from '@/components/ui/days';
 import { pointsAsText } from '@/components/ui/points-text';
 import { Heading } from '@/components/ui/titles';
 import { explainScore } from '@/lib/practicals/explain-score';
@@ -27,7 +27,7 @@ export function LockedSheet({ lock, record, rubric, sent, over }: LockedSheetPro
   return (
     <div className="mt-3 grid grid-cols-[minmax(0,1fr)] gap-6">
       <section className="border-y-edge border-ink py-3">
-        <Heading>Locked {format(new Date(lock.at), 'MMMM d, HH:mm')}</Heading>
+        <Heading>Locked {sayMoment(lock.at)}</Heading>
         <div className="mt-1 flex flex-wrap items-center justify-between gap-3">
           <output
             aria-label="receipt"

@@ -1,6 +1,6 @@
 import Link from 'next/link';
+import { sayDayOf } from '@/components/ui/days';
 import type { MoveChoices, VersionChoice } from '@/lib/contracts/moves';
-import { sayDayOf } from '../../../../_components/days';
 import { VersionChanges } from './version-changes';
 
 /** The version that is looked at, and what it changes of the one the sitting stands on. */

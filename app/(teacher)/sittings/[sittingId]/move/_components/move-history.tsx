@@ -1,6 +1,6 @@
+import { sayMoment } from '@/components/ui/days';
 import { Heading } from '@/components/ui/titles';
 import type { MoveChoices, MoveMade } from '@/lib/contracts/moves';
-import { sayMoment } from '../../../../_components/days';
 import { UndoMove } from './undo-move';
 
 /** Every move of this sitting, the latest first, with those that were taken back. */

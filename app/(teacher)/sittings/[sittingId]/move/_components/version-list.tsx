@@ -1,9 +1,9 @@
+import { sayDayOf } from '@/components/ui/days';
 import { EmptyState } from '@/components/ui/empty-state';
 import { LinkButton } from '@/components/ui/link-button';
 import { Refusal } from '@/components/ui/refusal';
 import { Heading } from '@/components/ui/titles';
 import type { MoveChoices } from '@/lib/contracts/moves';
-import { sayDayOf } from '../../../../_components/days';
 import { VersionChanges } from './version-changes';
 
 interface VersionListProps {

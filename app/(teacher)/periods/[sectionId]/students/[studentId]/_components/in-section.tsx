@@ -1,5 +1,5 @@
+import { sayDay } from '@/components/ui/days';
 import type { RosterStudentView } from '@/lib/data/sections/read-roster';
-import { sayDay } from '../../../../_components/words';
 import { BringBack } from './bring-back';
 import { LeaveForm } from './leave-form';
 
