@@ -56,9 +56,5 @@ function ChecksWorst({ lineId }: { lineId: string | null }) {
   const { parsed } = useEditor();
   const phrase = parsed.ok && lineId !== null ? checksEffect(parsed.rubric, lineId) : '';
   if (phrase === '') return null;
-  return (
-    <p className="mb-4 max-w-[62ch] border-l-edge border-ink pl-3 text-label font-[560] first-letter:uppercase">
-      {phrase}
-    </p>
-  );
+  return <p className="mb-4 max-w-[62ch] text-label font-[560] first-letter:uppercase">{phrase}</p>;
 }

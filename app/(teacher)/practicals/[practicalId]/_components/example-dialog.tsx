@@ -21,7 +21,15 @@ export function ExampleDialog({ rubric, example, onClose }: ExampleDialogProps) 
       onOpenChange={(open) => {
         if (!open) onClose();
       }}
-      title={example ? <PhraseText phrase={example.label} unit={rubric.unit} /> : ''}
+      title={
+        example ? (
+          <span className="block first-letter:uppercase">
+            <PhraseText phrase={example.label} unit={rubric.unit} />
+          </span>
+        ) : (
+          ''
+        )
+      }
       className="max-w-[46rem]"
     >
       {example ? (
