@@ -9,7 +9,7 @@ import { judgementSchema, scoreSheetSchema } from '@/lib/contracts/results';
 import { type Attempt, type Rubric, scoreAttempt } from '@/lib/scoring';
 import { modifyRubric } from '@/lib/scoring/modification';
 import { loadModifications } from '../pricing/load-pricing';
-import { holdPoints, priceUnder } from '../pricing/price-work';
+import { holdPoints, pricerOf } from '../pricing/price-work';
 import { storedAttempt } from '../pricing/stored-attempt';
 import { sectionSubject } from '../sections/section-view';
 import { defineVerb } from '../verb';
@@ -63,8 +63,9 @@ async function termsOfResult(tx: Transaction, sitting: LoadedSitting, result: Re
 
 function termsOfRecord(sitting: LoadedSitting, row: AttemptRow): Terms {
   const pricing = sitting.pricingOf(row.attemptId);
-  const work = { bench: row.recorded === null ? NOTHING : storedAttempt(row.recorded), own: null };
-  const { points, version } = holdPoints(pricing, priceUnder(pricing, work), work);
+  const bench = row.recorded === null ? NOTHING : storedAttempt(row.recorded);
+  const priceBy = pricerOf({ bench, own: null });
+  const { points, version } = holdPoints(pricing, priceBy(pricing), priceBy);
   return {
     rubric: pricing.rubric,
     modified: pricing.accommodationId !== null,

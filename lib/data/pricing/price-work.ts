@@ -96,16 +96,30 @@ export function priceUnder(version: PricedVersion, { bench, own }: RecordedWork)
   return { score: complete ? provisional : null, provisional, total, judgement };
 }
 
+/** Prices one work under version after version, under each once. */
+export function pricerOf(work: RecordedWork): (version: PricedVersion) => PricedWork {
+  const known = new Map<Rubric, PricedWork>();
+  return (version) => {
+    const priced = known.get(version.rubric) ?? priceUnder(version, work);
+    known.set(version.rubric, priced);
+    return priced;
+  };
+}
+
 /**
  * What the versions that a pricing holds add to what the work comes to now. A work with a score is held against the
  * versions under which it has one, bonus included; one that is still being read, against what it would come to so far.
  */
-export function holdPoints(pricing: Pricing, now: PricedWork, work: RecordedWork): HeldPoints {
+export function holdPoints(
+  pricing: Pricing,
+  now: PricedWork,
+  priceBy: (version: PricedVersion) => PricedWork,
+): HeldPoints {
   const kind = now.score === null ? 'provisional' : 'score';
   const score = now[kind];
   if (score === null || pricing.held.length === 0) return { points: 0, version: null };
   const earlier = pricing.held.flatMap((version) => {
-    const priced = priceUnder(version, work);
+    const priced = priceBy(version);
     return priced[kind] === null ? [] : [{ version, score: priced[kind], total: priced.total }];
   });
   const { points, from } = holdScore({ score, total: now.total }, earlier, pricing.rubric);

@@ -14,7 +14,7 @@ import { hasCell, SIDES, type Side } from '@/lib/sync/cells';
 import { type CellEvent, type DerivedAttempt, deriveAttempt } from '@/lib/sync/derive';
 import { asCellEvent } from '@/lib/sync/server/stored-event';
 import { loadPricing } from '../pricing/load-pricing';
-import { holdPoints, priceUnder, sheetUnder } from '../pricing/price-work';
+import { holdPoints, pricerOf, sheetUnder } from '../pricing/price-work';
 import type { Pricing } from '../pricing/pricing';
 
 /** Attempts at a time, so that a large sitting's events are never all in memory. */
@@ -114,6 +114,6 @@ function sheetRow(key: SheetKey, pricing: Pricing, derived: DerivedAttempt): She
 
 function heldOf(pricing: Pricing, { attempt }: DerivedAttempt): Points {
   if (pricing.held.length === 0) return 0;
-  const work = { bench: attempt, own: null };
-  return holdPoints(pricing, priceUnder(pricing, work), work).points;
+  const priceBy = pricerOf({ bench: attempt, own: null });
+  return holdPoints(pricing, priceBy(pricing), priceBy).points;
 }

@@ -1,7 +1,7 @@
 import type { z } from 'zod';
 import type { judgementSchema } from '@/lib/contracts/results';
 import { type Attempt, type Points, type ScoreSheet, scoreAttempt } from '@/lib/scoring';
-import { fitAttempt, holdPoints, priceUnder } from '../pricing/price-work';
+import { fitAttempt, holdPoints, pricerOf } from '../pricing/price-work';
 import type { Pricing } from '../pricing/pricing';
 
 /** An attempt as it is recorded when results are about to go out. */
@@ -44,8 +44,8 @@ const NOTHING: Attempt = { pieces: [], work: {}, bonus: 0, daysLate: 0 };
 export function judgeResult(pricing: Pricing, attempt: RecordedAttempt, countLate: boolean): JudgedResult {
   const { standing, recorded, own } = attempt;
   const counts = own?.locked && (!own.late || countLate);
-  const work = { bench: recorded ?? NOTHING, own: own && counts ? own.attempt : null };
-  const priced = priceUnder(pricing, work);
+  const priceBy = pricerOf({ bench: recorded ?? NOTHING, own: own && counts ? own.attempt : null });
+  const priced = priceBy(pricing);
   const base = {
     open: attempt.conflicts > 0 ? ('conflict' as const) : null,
     totalPoints: priced.total,
@@ -66,7 +66,7 @@ export function judgeResult(pricing: Pricing, attempt: RecordedAttempt, countLat
   }
   const { judgement } = priced;
   const bonus = judgement?.bonus ?? 0;
-  const held = holdPoints(pricing, priced, work);
+  const held = holdPoints(pricing, priced, priceBy);
   return {
     ...base,
     status: 'scored',

@@ -7,7 +7,7 @@ import { totalPoints } from '@/lib/practicals/both-scales';
 import type { Dropped, Rubric } from '@/lib/scoring';
 import { ENGINE_VERSION } from '@/lib/scoring/engine-version';
 import { hasCell } from '@/lib/sync/cells';
-import { holdPoints, leftOut, priceUnder, type RecordedWork } from '../pricing/price-work';
+import { holdPoints, leftOut, pricerOf, type RecordedWork } from '../pricing/price-work';
 import type { Pricing, PublishedVersion } from '../pricing/pricing';
 import type { Following } from '../verb';
 import { changeBetween, type Result, sumUpChanges } from './compare-move';
@@ -57,13 +57,16 @@ function moveAttempt(material: MoveMaterial, recorded: Recorded): MovedAttempt {
   const now = material.now(attemptId);
   const next = material.after(attemptId);
   const work = workOf(material, recorded);
-  const before = beforeMove(now, recorded, work);
-  const after = priceOrStanding(next, recorded, work, false);
+  const priceBy = work && pricerOf(work);
+  const before = isStored(now, recorded, work)
+    ? { score: recorded.head.scorePoints, total: recorded.head.totalPoints ?? 0 }
+    : resultOf(now, recorded, priceBy, true);
+  const after = resultOf(next, recorded, priceBy, false);
   return {
     ...{ attemptId, studentId, familyName, givenName, attemptNumber },
     before: before.score,
     after: after.score,
-    held: priceOrStanding(next, recorded, work, true).score,
+    held: resultOf(next, recorded, priceBy, true).score,
     change: changeBetween(before, after),
     told: (material.told.get(attemptId)?.scorePoints ?? null) !== null,
     modified: next.accommodationId !== null,
@@ -76,32 +79,30 @@ function workOf({ late, told }: MoveMaterial, { head, bench, own }: Recorded): R
   return { bench, own: counts ? own : null };
 }
 
-/** The stored score where it is of this very pricing and no bonus comes on top; otherwise priced anew. */
-function beforeMove(pricing: Pricing, recorded: Recorded, work: RecordedWork | null): Result {
-  const { head } = recorded;
-  const isStored =
+/** Whether the stored score is of this very pricing, and no bonus comes on top. */
+function isStored(pricing: Pricing, { head }: Recorded, work: RecordedWork | null): boolean {
+  return (
     head.standing === 'expected' &&
     work?.own === null &&
     head.engineVersion === ENGINE_VERSION &&
     head.versionId === pricing.versionId &&
-    head.accommodationId === pricing.accommodationId;
-  if (isStored) return { score: head.scorePoints, total: head.totalPoints ?? 0 };
-  return priceOrStanding(pricing, recorded, work, true);
+    head.accommodationId === pricing.accommodationId
+  );
 }
 
 /** A zero is a number; absent, excused and what is not read to the end are none. */
-function priceOrStanding(
+function resultOf(
   pricing: Pricing,
   { head, conflicts }: Recorded,
-  work: RecordedWork | null,
+  priceBy: ReturnType<typeof pricerOf> | null,
   hold: boolean,
 ): Result {
   if (head.standing === 'zero') return { score: 0, total: totalPoints(pricing.rubric) };
   const torn = conflicts.some((cell) => hasCell(pricing.published, cell));
-  if (head.standing !== 'expected' || !work || torn) return { score: null, total: 0 };
-  const priced = priceUnder(pricing, work);
+  if (head.standing !== 'expected' || !priceBy || torn) return { score: null, total: 0 };
+  const priced = priceBy(pricing);
   if (priced.score === null) return { score: null, total: 0 };
-  const held = hold ? holdPoints(pricing, priced, work).points : 0;
+  const held = hold ? holdPoints(pricing, priced, priceBy).points : 0;
   return { score: priced.score + held, total: priced.total };
 }
 

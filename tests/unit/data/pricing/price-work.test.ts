@@ -1,6 +1,13 @@
 import fc from 'fast-check';
 import { describe, expect, it, vi } from 'vitest';
-import { fitAttempt, holdPoints, leftOut, priceUnder, sheetUnder } from '@/lib/data/pricing/price-work';
+import {
+  fitAttempt,
+  holdPoints,
+  leftOut,
+  pricerOf,
+  priceUnder,
+  sheetUnder,
+} from '@/lib/data/pricing/price-work';
 import { PriceBook, priceVersion } from '@/lib/data/pricing/pricing';
 import { storedAttempt } from '@/lib/data/pricing/stored-attempt';
 import { type Attempt, attemptSchema, projectAttempt, type Rubric } from '@/lib/scoring';
@@ -97,7 +104,7 @@ describe('holding', () => {
           'v3',
         ]);
         const priced = priceUnder(pricing, work);
-        const held = holdPoints(pricing, priced, work);
+        const held = holdPoints(pricing, priced, pricerOf(work));
         if (priced.score === null) return;
         const most = Math.floor((priced.total * now.ceiling) / (100 * now.roundTo)) * now.roundTo;
         const score = priced.score + held.points;
@@ -122,7 +129,10 @@ describe('holding', () => {
     const work = { bench: makeAttempt([makePiece('rail', 1, { length: { kind: 'spoiled' } })]), own: null };
     for (const id of ['v2', 'v3']) {
       const pricing = book.pricing('v1', [id]);
-      expect(holdPoints(pricing, priceUnder(pricing, work), work)).toEqual({ points: 0, version: null });
+      expect(holdPoints(pricing, priceUnder(pricing, work), pricerOf(work))).toEqual({
+        points: 0,
+        version: null,
+      });
     }
   });
 
