@@ -3,7 +3,7 @@ import { lengthParts } from '@/components/ui/length-parts';
 import { pointsAsText } from '@/components/ui/points-text';
 import type { Unit } from '@/lib/length';
 import type { Points } from '@/lib/scoring';
-import type { RuleLayout } from './rule-layout';
+import { numberFits, type RuleLayout } from './rule-layout';
 import { RuleNumber } from './rule-number';
 import { type Graduation, tickLength } from './rule-scale';
 
@@ -21,7 +21,8 @@ export function RuleColumn({ column, layout, unit, pressed, price }: RuleColumnP
   const { edge, foot, pitch, number, step } = layout;
   const x = layout.centre + column.step * pitch;
   const isTarget = column.step === 0;
-  const numbered = column.step % layout.numberEvery === 0;
+  const parts = lengthParts(column.ticks, unit);
+  const numbered = column.step % layout.numberEvery === 0 && numberFits(parts, x, layout);
   const tone = pressed ? 'fill-on-act text-on-act' : isTarget ? 'fill-act text-act' : 'fill-ink text-ink';
   return (
     <g>
@@ -31,7 +32,7 @@ export function RuleColumn({ column, layout, unit, pressed, price }: RuleColumnP
       <Ticks {...{ x, isTarget, pressed, layout }} length={tickLength(column.ticks, unit)} />
       {numbered ? (
         <RuleNumber
-          parts={lengthParts(column.ticks, unit)}
+          parts={parts}
           x={x}
           baseline={edge + number.baseline}
           size={isTarget && !layout.far ? number.size * 1.15 : number.size}

@@ -1,4 +1,4 @@
-import { lengthParts } from '@/components/ui/length-parts';
+import { type LengthParts, lengthParts } from '@/components/ui/length-parts';
 import { graduationsOf, placeOf, type RuleScale } from './rule-scale';
 
 export type RuleVariant = 'bench' | 'wide' | 'card' | 'phone';
@@ -96,13 +96,22 @@ export function numberWidth(text: string, stacked: boolean): number {
   return plain + 0.1 + FRACTION_DIGITS * DIGIT * (num.length + den.length) + 0.16;
 }
 
+function widthOfParts({ whole, num, den }: LengthParts, stacked: boolean): number {
+  const fraction = num === null ? '' : `${num}/${den}`;
+  return numberWidth([whole, fraction].filter(Boolean).join(' '), stacked);
+}
+
 function widestNumber(scale: RuleScale, stacked: boolean): number {
-  const widths = graduationsOf(scale).map(({ ticks }) => {
-    const { whole, num, den } = lengthParts(ticks, scale.unit);
-    const fraction = num === null ? '' : `${num}/${den}`;
-    return numberWidth([whole, fraction].filter(Boolean).join(' '), stacked);
-  });
+  const widths = graduationsOf(scale).map(({ ticks }) =>
+    widthOfParts(lengthParts(ticks, scale.unit), stacked),
+  );
   return Math.max(DIGIT, ...widths);
+}
+
+/** Whether a number set at x stays on the paper: beside the outermost tick there may be too little of it. */
+export function numberFits(parts: LengthParts, x: number, { width, number }: RuleLayout): boolean {
+  const half = (widthOfParts(parts, number.stacked) * number.size) / 2;
+  return x - half >= 0 && x + half <= width;
 }
 
 /**

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { type KnifeEdge, layOutKnives } from '@/components/rule/knife-layout';
+import { layOutRule, numberFits } from '@/components/rule/rule-layout';
 import { TICKS_PER_INCH } from '@/lib/length';
 
 const G = TICKS_PER_INCH / 32;
@@ -45,5 +46,15 @@ describe('knives on the rule', () => {
   it('take no more than four tiers, however many there are', () => {
     const { knives } = layOutKnives('phone', { ...scale, span: 13 }, edges([1, 2, 3, 4, 5, 6, 7, 8]));
     expect(new Set(knives.map(({ tab }) => tab.y)).size).toBe(4);
+  });
+});
+
+describe('a number on the rule', () => {
+  it('is left out where it would run over the end of the paper', () => {
+    const narrow = { ...scale, span: 6, graduation: TICKS_PER_INCH / 32 };
+    const layout = layOutRule('phone', narrow);
+    const parts = { sign: '', whole: '6', num: 13, den: 16 } as const;
+    expect(numberFits(parts, layout.centre, layout)).toBe(true);
+    expect(numberFits(parts, layout.centre - 6 * layout.pitch, layout)).toBe(false);
   });
 });

@@ -32,8 +32,8 @@ interface BandRowsProps {
 }
 
 const ROW =
-  'grid grid-cols-[minmax(0,1fr)_minmax(0,1fr)_5.5rem] items-start gap-x-3 @min-[30rem]:grid-cols-[minmax(0,5fr)_minmax(0,4fr)_5.25rem_5.25rem_5.5rem]';
-const CHANCE = 'hidden pt-2 text-right text-label whitespace-nowrap @min-[30rem]:block';
+  'grid grid-cols-[minmax(0,1fr)_minmax(0,1fr)_5.5rem] items-start gap-x-3 @min-[28rem]:grid-cols-[minmax(0,5fr)_minmax(0,4fr)_5.25rem_5.25rem_5.5rem]';
+const CHANCE = 'hidden pt-2 text-right text-label whitespace-nowrap @min-[28rem]:block';
 
 /** One side's bands, a row each. */
 export function BandRows({ size, side, title, axis, read }: BandRowsProps) {
@@ -57,7 +57,7 @@ export function BandRows({ size, side, title, axis, read }: BandRowsProps) {
         <span>within</span>
         <span>loses</span>
         {instruments.map(({ id, label }) => (
-          <span key={id} className="hidden text-right @min-[30rem]:block">
+          <span key={id} className="hidden text-right @min-[28rem]:block">
             priced dearer by the {label}
           </span>
         ))}
@@ -138,7 +138,7 @@ function ChanceLine({ chance }: { chance: BandChance | null }) {
   return (
     <span
       className={classNames(
-        'col-span-3 pb-1 text-small @min-[30rem]:hidden',
+        'col-span-3 pb-1 text-small @min-[28rem]:hidden',
         isLarge(rule) ? 'font-[600]' : 'text-ink-2',
       )}
     >

@@ -2,6 +2,7 @@
 
 import { Button } from '@/components/ui/button';
 import { ButtonRow } from '@/components/ui/button-row';
+import type { Length } from '@/lib/length';
 import { sizeRuleOf } from '@/lib/practicals/draft-of';
 import { doubleSide, isDoubled } from '@/lib/practicals/presets';
 import type { PresetId, SizeRule } from '@/lib/scoring';
@@ -17,10 +18,11 @@ const DOUBLES: [id: PresetId, dear: 'under' | 'over', label: string][] = [
 interface PresetKeysProps {
   size: SizeRuleDesk;
   read: SizeRule | null;
+  target: Length;
 }
 
 /** Ready-made prices for this size. Pressed again, a doubled side costs what the other one does. */
-export function PresetKeys({ size, read }: PresetKeysProps) {
+export function PresetKeys({ size, read, target }: PresetKeysProps) {
   const { desk, unit } = useEditor();
   const notYet = read ? null : 'the bands cannot be read yet';
 
@@ -54,7 +56,7 @@ export function PresetKeys({ size, read }: PresetKeysProps) {
             </Button>
           );
         })}
-        <RateDialog size={size} />
+        <RateDialog size={size} target={target} />
       </ButtonRow>
     </div>
   );

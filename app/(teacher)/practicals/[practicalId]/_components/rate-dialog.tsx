@@ -1,16 +1,20 @@
 'use client';
 
 import { useState } from 'react';
+import { FittedRuleFace } from '@/components/rule/fitted-rule-face';
 import { Button } from '@/components/ui/button';
 import { Dialog } from '@/components/ui/dialog';
+import { LengthText } from '@/components/ui/fraction';
 import { NumberField } from '@/components/ui/number-field';
 import { Refusal } from '@/components/ui/refusal';
 import { TextField } from '@/components/ui/text-field';
-import type { Unit } from '@/lib/length';
+import type { Length, Unit } from '@/lib/length';
 import { sizeRuleOf } from '@/lib/practicals/draft-of';
 import { FieldReader } from '@/lib/practicals/field-reader';
+import { ruleScaleOf } from '@/lib/practicals/rule-scale-of';
 import { bandsFromRate, type SizeRule } from '@/lib/scoring';
 import { useEditor } from './editor-context';
+import { marginOf } from './read-draft';
 import type { SizeRuleDesk } from './use-size-rule';
 
 const FIRST = {
@@ -42,7 +46,7 @@ function readRate(typed: Typed, unit: Unit): { rule: SizeRule } | { errors: Rate
 }
 
 /** So many points for every step begun past the free distance, written out as bands. */
-export function RateDialog({ size }: { size: SizeRuleDesk }) {
+export function RateDialog({ size, target }: { size: SizeRuleDesk; target: Length }) {
   const { desk, unit } = useEditor();
   const [open, setOpen] = useState(false);
   const [typed, setTyped] = useState<Typed>(FIRST[unit]);
@@ -92,6 +96,7 @@ export function RateDialog({ size }: { size: SizeRuleDesk }) {
             <NumberField {...field('lose', 'points a step')} />
             <NumberField {...field('cap', 'most that a size loses')} />
           </div>
+          <RatePreview {...{ typed, unit, target }} margin={marginOf(desk.draft)} />
           {errors[''] ? <Refusal title={errors['']} className="mt-4" /> : null}
           <div className="mt-6 flex justify-end gap-2">
             <Button onClick={() => setOpen(false)}>leave it</Button>
@@ -102,5 +107,32 @@ export function RateDialog({ size }: { size: SizeRuleDesk }) {
         </form>
       </Dialog>
     </>
+  );
+}
+
+interface RatePreviewProps {
+  typed: Typed;
+  unit: Unit;
+  target: Length;
+  margin: Length;
+}
+
+/** The bands that the rate would write, on their rule; nothing while it cannot be read. */
+function RatePreview({ typed, unit, target, margin }: RatePreviewProps) {
+  const read = readRate(typed, unit);
+  if ('errors' in read) return null;
+  const { rule } = read;
+  return (
+    <div className="mt-4">
+      <FittedRuleFace
+        {...{ unit, target, rule, margin }}
+        {...ruleScaleOf([rule], unit, 2)}
+        label="as written"
+      />
+      <p className="mt-1 text-label text-ink-2">
+        {rule.over.length} {rule.over.length === 1 ? 'band' : 'bands'} a side, the last to{' '}
+        <LengthText ticks={rule.over.at(-1)?.within ?? 0} unit={unit} />.
+      </p>
+    </div>
   );
 }

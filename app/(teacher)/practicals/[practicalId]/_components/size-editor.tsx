@@ -35,6 +35,7 @@ export function SizeEditor({ lineId, axis, tried, onTry }: SizeEditorProps) {
   const found = lineOf(desk.draft.lines, lineId);
   const name = found ? found.line.label || `line ${found.index + 1}` : 'all lines';
   const ofLine = found ? readSize(found.line[axis], unit) : null;
+  const target = targetOf(desk.draft, lineId, axis);
   const read = readSizeRule(size.rule, unit);
   const drawn = useLastRead(read);
   const trial = useTrial(exampleLineOf(desk.draft, lineId, axis)?.id ?? null, axis, tried, onTry);
@@ -55,15 +56,14 @@ export function SizeEditor({ lineId, axis, tried, onTry }: SizeEditorProps) {
         ) : (
           <Owner size={size} />
         )}
-        {size.isOwn ? <PresetKeys size={size} read={read} /> : null}
+        {size.isOwn ? <PresetKeys {...{ size, read, target }} /> : null}
       </div>
       {drawn ? (
         <PriceOnRule
           rule={drawn}
           name={`${name}, ${axis}`}
           reading={trial?.reading ?? null}
-          target={targetOf(desk.draft, lineId, axis)}
-          {...{ size, axis }}
+          {...{ size, axis, target }}
         />
       ) : (
         <p className="border-y border-hair py-6 text-ink-2">
