@@ -23,6 +23,7 @@ import { proposeVariants } from '@/lib/data/practicals/propose-variants';
 import { publishVersion } from '@/lib/data/practicals/publish-version';
 import { putBackDraft } from '@/lib/data/practicals/put-back-draft';
 import { readPractical } from '@/lib/data/practicals/read-practical';
+import { readSchoolUnit } from '@/lib/data/practicals/read-school-unit';
 import { readVersion } from '@/lib/data/practicals/read-version';
 import { readVersionSheet } from '@/lib/data/practicals/read-version-sheet';
 import { saveDraft } from '@/lib/data/practicals/save-draft';
@@ -245,6 +246,7 @@ describe('every verb around a published version', () => {
       return putBackDraft(stage.teacher, { practicalId, revision: await revisionOf(practicalId) });
     },
     'practicals/read-practical': () => readPractical(stage.teacher, { practicalId: original() }),
+    'practicals/read-school-unit': () => readSchoolUnit(stage.teacher, {}),
     'practicals/read-version': () => readVersion(stage.teacher, { versionId: first() }),
     'practicals/read-version-sheet': () =>
       readVersionSheet(stage.teacher, { practicalId: original(), number: 2 }),
