@@ -1,5 +1,6 @@
 import { type ComponentProps, type ReactNode, useId } from 'react';
 import { controlClass, describeField, Field, type FieldNotes } from './field';
+import { SelectControl } from './select-control';
 
 export interface SelectOption {
   value: string;
@@ -23,28 +24,19 @@ export function SelectField(props: SelectFieldProps) {
   const notes = { hint, error, finding };
   return (
     <Field id={id} label={label} hideLabel={hideLabel} optional={optional} className={className} {...notes}>
-      <div className="relative">
-        <select
-          key={String(select.defaultValue)}
-          {...select}
-          {...describeField(id, notes)}
-          className={controlClass(notes, 'appearance-none pr-8 text-ellipsis')}
-        >
-          {placeholder === undefined ? null : <option value="">{placeholder}</option>}
-          {options.map((option) => (
-            <option key={option.value} value={option.value}>
-              {option.label}
-            </option>
-          ))}
-        </select>
-        <svg
-          aria-hidden="true"
-          viewBox="0 0 12 8"
-          className="pointer-events-none absolute top-1/2 right-3 w-3 -translate-y-1/2 fill-none stroke-current stroke-[1.75]"
-        >
-          <path d="M1 1.5L6 6.5L11 1.5" />
-        </svg>
-      </div>
+      <SelectControl
+        key={String(select.defaultValue)}
+        {...select}
+        {...describeField(id, notes)}
+        className={controlClass(notes, 'pr-8')}
+      >
+        {placeholder === undefined ? null : <option value="">{placeholder}</option>}
+        {options.map((option) => (
+          <option key={option.value} value={option.value}>
+            {option.label}
+          </option>
+        ))}
+      </SelectControl>
     </Field>
   );
 }

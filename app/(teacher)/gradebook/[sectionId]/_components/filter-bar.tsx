@@ -1,6 +1,7 @@
 'use client';
 
 import { useId } from 'react';
+import { SelectControl } from '@/components/ui/select-control';
 import { SHOWN, type Shown } from './cell-words';
 
 interface FilterBarProps {
@@ -32,7 +33,7 @@ export function FilterBar({ text, onText, shown, onShown, found, of }: FilterBar
       </label>
       <label className="min-w-0" htmlFor={id}>
         <span className="sr-only">show</span>
-        <select
+        <SelectControl
           id={id}
           value={shown}
           onChange={(event) => onShown(SHOWN.find((name) => name === event.target.value) ?? 'everyone')}
@@ -43,7 +44,7 @@ export function FilterBar({ text, onText, shown, onShown, found, of }: FilterBar
               {name === 'everyone' ? 'everyone' : `with ${name}`}
             </option>
           ))}
-        </select>
+        </SelectControl>
       </label>
       <p role="status" className="sr-only">
         {found} of {of} students shown

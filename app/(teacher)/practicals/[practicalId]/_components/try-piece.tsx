@@ -4,6 +4,7 @@ import { useId } from 'react';
 import { KIND_WORDS } from '@/components/loss/loss-words';
 import { classNames } from '@/components/ui/class-names';
 import { pointsAsText } from '@/components/ui/points-text';
+import { SelectControl } from '@/components/ui/select-control';
 import { Heading } from '@/components/ui/titles';
 import { isOneScale, pointsOfTotal } from '@/lib/practicals/both-scales';
 import { pieceLabel } from '@/lib/practicals/task';
@@ -96,7 +97,7 @@ export function TryPiece({ rubric, line, axis, tried, result, onChange }: TryPie
                 {check.label}
               </th>
               <td colSpan={2} className={CELL}>
-                <select
+                <SelectControl
                   aria-label={`${check.label} of ${name}`}
                   value={String(tried.checks[check.id] ?? 0)}
                   onChange={(event) =>
@@ -105,14 +106,14 @@ export function TryPiece({ rubric, line, axis, tried, result, onChange }: TryPie
                       checks: { ...tried.checks, [check.id]: Number(event.target.value) },
                     })
                   }
-                  className="min-h-8 border-b border-rule bg-plate px-1 hover:border-ink"
+                  className="min-h-8 border-b border-rule bg-plate pl-1 hover:border-ink"
                 >
                   {check.levels.map((level, index) => (
                     <option key={`${index.toString()} ${level.label}`} value={index}>
                       {level.label}
                     </option>
                   ))}
-                </select>
+                </SelectControl>
               </td>
               <Loss
                 points={piece.checks.find(({ id: checkId }) => checkId === check.id)?.lose ?? 0}
