@@ -239,6 +239,25 @@ export const SCREENS: Screen[] = [
   { role: 'teacher', name: 'practical-rules', go: (page) => openPractical(page, 'total and rules') },
   {
     role: 'teacher',
+    name: 'variants',
+    go: async (page) => {
+      await openPractical(page);
+      await page.getByRole('link', { name: 'variants with other sizes' }).click();
+      await page.getByRole('button', { name: 'propose sizes' }).waitFor();
+    },
+  },
+  {
+    role: 'teacher',
+    name: 'variants-proposed',
+    go: async (page) => {
+      await openPractical(page);
+      await page.getByRole('link', { name: 'variants with other sizes' }).click();
+      await page.getByRole('button', { name: 'propose sizes' }).click();
+      await page.getByRole('heading', { name: 'variant B' }).waitFor();
+    },
+  },
+  {
+    role: 'teacher',
     name: 'practical-line',
     go: async (page) => {
       await openPractical(page);
