@@ -215,7 +215,7 @@ test.describe('on a desk and a tablet', () => {
     await page.getByLabel('points for a missing piece, all lines').fill('6');
     await settle(/^A missing piece loses 6 points, a poor one up to 9/, 'set it to the worth');
     await page.getByLabel('worth of a piece, all lines').fill('9.5');
-    await expect(page.getByText('1 to look at')).toBeVisible();
+    await expect(page.getByText('1 to look at').first()).toBeVisible();
     await openRules(page);
     await settle(/^What the pieces are worth together, 66\.5 points/, 'round to 0.5');
     await page.getByLabel('gross limit').fill('1/16');
