@@ -15,9 +15,14 @@ export function InstrumentNote() {
       <p className="mt-1">
         Of the parts that truly lie within a band, so many read past its edge and its reading margin, and are
         priced in the next band, because no instrument reads exactly. Reckoned by the normal model of JCGM
-        106: parts spread about the target by <LengthText ticks={WORK_SPREAD} unit="mm" withUnit /> (one
-        standard deviation, common in a school shop), readings about the part by the standard uncertainty of
-        the instrument.
+        106: parts spread about the target by <LengthText ticks={WORK_SPREAD} unit="mm" withUnit />
+        {unit === 'in' ? (
+          <>
+            , about <LengthText ticks={WORK_SPREAD} unit="in" decimals={3} withUnit />
+          </>
+        ) : null}{' '}
+        (one standard deviation, common in a school shop), readings about the part by the standard uncertainty
+        of the instrument.
       </p>
       <p className="mt-1">
         Rule: read to the nearest <LengthText ticks={rule.graduation} unit={unit} withUnit />. Caliper: read

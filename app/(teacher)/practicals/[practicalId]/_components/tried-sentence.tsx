@@ -21,9 +21,9 @@ export function TriedSentence({ rubric, line, axis, result }: TriedSentenceProps
   return (
     <>
       Reads <LengthText ticks={size.reading} unit={rubric.unit} withUnit={rubric.unit === 'mm'} />: this{' '}
-      {axis} loses {loses}, {pieceLabel(line, 1)} {lost.points === 0 ? 'nothing' : pointsAsText(lost.points)}{' '}
+      {axis} loses {loses}; {pieceLabel(line, 1)}
+      {piece.gross ? ' is gross and' : ''} loses {lost.points === 0 ? 'nothing' : pointsAsText(lost.points)}{' '}
       of {pointsAsText(line.worth)}
-      {piece.gross ? ', gross' : ''}
       {isOneScale(rubric) || lost.points === 0
         ? ''
         : `, ${pointsAsText(lost.ofTotal)} of ${pointsAsText(sheet.total)}`}
