@@ -1,7 +1,7 @@
 import 'server-only';
 import { type StandingApproval, selectStandingApprovals } from '@/db/queries/approvals';
-import { selectDepartmentSittings, selectReadAttempts } from '@/db/queries/department';
 import { selectVersion } from '@/db/queries/practicals';
+import { selectDepartmentSittings, selectReadAttempts } from '@/db/queries/recorded-work';
 import { sharedVersionInput } from '@/lib/contracts/department';
 import { cutListSignature } from '@/lib/practicals/compare-rubrics';
 import { type EffectScale, type GroupEffect, rubricEffect } from '@/lib/practicals/rubric-effect';

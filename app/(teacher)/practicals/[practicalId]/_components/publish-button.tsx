@@ -1,21 +1,19 @@
 'use client';
 
 import { useRouter } from 'next/navigation';
-import { type RefObject, useRef, useState, useTransition } from 'react';
+import { useRef, useState, useTransition } from 'react';
 import { Button } from '@/components/ui/button';
 import { Dialog } from '@/components/ui/dialog';
-import { LinkButton } from '@/components/ui/link-button';
 import { PhraseList } from '@/components/ui/phrase-list';
 import { Refusal } from '@/components/ui/refusal';
-import { TextAreaField } from '@/components/ui/text-area-field';
-import { LONGEST_REASON } from '@/lib/contracts/practicals';
 import type { DepartmentRubric } from '@/lib/data/practicals/department-rubric';
 import { changesSince } from '@/lib/practicals/changes-since';
-import { departmentDifferences } from '@/lib/practicals/department-differences';
 import { type ParsedDraft, parseDraft } from '@/lib/practicals/parse-draft';
 import { sameInEffect } from '@/lib/practicals/same-in-effect';
 import { publishVersionAction } from '../actions';
+import { DepartmentPart } from './department-part';
 import type { Editor } from './editor-context';
+import { Published } from './published';
 import type { DraftDesk } from './use-draft';
 
 interface PublishButtonProps {
@@ -135,67 +133,6 @@ function Ask(props: AskProps) {
         <Button onClick={onClose}>not yet</Button>
         <Button kind="act" onClick={publish} disabled={pending} aria-busy={pending}>
           {pending ? 'publishing …' : `publish version ${number}`}
-        </Button>
-      </div>
-    </Dialog>
-  );
-}
-
-interface DepartmentPartProps {
-  department: DepartmentRubric;
-  parsed: Good;
-  /** What was said of the version before. */
-  given: string;
-  reasonField: RefObject<HTMLTextAreaElement | null>;
-}
-
-/** Where the version differs from the department’s, and room to say why. It asks nothing of a version that does not. */
-function DepartmentPart({ department, parsed, given, reasonField }: DepartmentPartProps) {
-  const { same, sentences } = departmentDifferences(department, { ...parsed, label: 'this version' });
-  if (same) return null;
-  return (
-    <div className="mb-4">
-      <h3 className="font-[640]">Where it differs from the department’s rubric</h3>
-      <PhraseList phrases={sentences} unit={parsed.task.unit} className="mt-1" />
-      <TextAreaField
-        ref={reasonField}
-        label="why"
-        optional
-        hint="Your head reads the differences, and this beside them."
-        rows={2}
-        maxLength={LONGEST_REASON}
-        defaultValue={given}
-        className="mt-3"
-      />
-    </div>
-  );
-}
-
-function Published({
-  practicalId,
-  number,
-  onClose,
-}: {
-  practicalId: string;
-  number: number;
-  onClose(): void;
-}) {
-  return (
-    <Dialog
-      open
-      onOpenChange={(open) => {
-        if (!open) onClose();
-      }}
-      title={`Version ${number} is published`}
-      description="Give it to a section, or try it at the bench first: a practice round keeps nothing."
-    >
-      <div className="flex flex-wrap gap-2">
-        <LinkButton kind="act" href={`/sittings/new?practical=${practicalId}`}>
-          open a sitting
-        </LinkButton>
-        <LinkButton href={`/practicals/${practicalId}/practice`}>practice round</LinkButton>
-        <Button kind="quiet" onClick={onClose}>
-          stay here
         </Button>
       </div>
     </Dialog>
