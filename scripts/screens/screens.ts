@@ -239,6 +239,23 @@ export const SCREENS: Screen[] = [
   { role: 'teacher', name: 'practical-rules', go: (page) => openPractical(page, 'total and rules') },
   {
     role: 'teacher',
+    name: 'practical-reading',
+    go: async (page) => {
+      await openPractical(page);
+      await page.getByLabel('length of base reads').fill('6 15/16');
+      await page.getByRole('slider', { name: /^under, .*, edge of band 3$/ }).focus();
+    },
+  },
+  {
+    role: 'teacher',
+    name: 'practical-example',
+    go: async (page) => {
+      await openPractical(page);
+      await page.getByRole('button', { name: /^typical/ }).click();
+    },
+  },
+  {
+    role: 'teacher',
     name: 'variants',
     go: async (page) => {
       await openPractical(page);
