@@ -89,7 +89,7 @@ export function ReadingTrack({ deviation, onMove, scale, layout, name, price }: 
         className="block h-auto w-full overflow-visible"
       >
         <path
-          d={deviation === 0 ? '' : `M${x} ${-layout.body * 0.42}V0`}
+          d={deviation === 0 || Math.abs(deviation) > most ? '' : `M${x} ${-layout.body * 0.42}V0`}
           className={classNames('[stroke-width:var(--pen-outline)]', focused ? 'stroke-act' : 'stroke-ink')}
         />
         <path
@@ -97,11 +97,13 @@ export function ReadingTrack({ deviation, onMove, scale, layout, name, price }: 
           strokeDasharray="2 5"
           className="stroke-rule [stroke-width:var(--pen-inside)]"
         />
-        <g transform={`translate(${x} 0) scale(1 -1)`}>
-          <g transform="translate(0 -2)" className={focused ? 'text-act' : undefined}>
+        {Math.abs(deviation) > most ? (
+          <PastTheEnd x={x} out={deviation < 0 ? -1 : 1} />
+        ) : (
+          <g transform={`translate(${x} 2) scale(1 -1)`}>
             <CrowsFoot kind="bench" x={0} y={0} size={18} />
           </g>
-        </g>
+        )}
         <ReadingTab {...{ x, deviation, scale, layout, focused }} />
       </svg>
       <span
@@ -117,6 +119,16 @@ export function ReadingTrack({ deviation, onMove, scale, layout, name, price }: 
         style={{ left: percent(x, layout.width) }}
       />
     </div>
+  );
+}
+
+/** The reading lies further out than the rule that is shown. */
+function PastTheEnd({ x, out }: { x: number; out: 1 | -1 }) {
+  return (
+    <path
+      d={`M${x - out * 22} 12H${x - out * 3}M${x - out * 11} 4l${out * 8} 8l${-out * 8} 8`}
+      className="fill-none stroke-ink [stroke-width:var(--pen-edge)]"
+    />
   );
 }
 
