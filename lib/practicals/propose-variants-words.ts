@@ -75,7 +75,7 @@ function reasonWords({ why, as }: Stop, step: Length): Phrase {
     case 'stays':
       return ['none of its sizes can move by ', { ticks: step }, ' within a quarter of itself.'];
     case 'alike':
-      return [`wherever it may move, a piece of it passes for “${as?.label}” of ${as?.of}.`];
+      return [`wherever it may move, a piece of it passes for one of ${as?.of}, such as “${as?.label}”.`];
     case 'order':
       return ['moved by ', { ticks: step }, ', its sizes change places with others of the list.'];
     case 'blank':

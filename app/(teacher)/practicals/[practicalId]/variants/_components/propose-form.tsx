@@ -45,7 +45,7 @@ export function ProposeForm({ practicalId, unit, count = 2, graduation, step }: 
       />
       <SubmitButton pendingLabel="looking …">propose sizes</SubmitButton>
       {step === undefined ? null : (
-        <p className="text-label text-ink-2">
+        <p className="pb-2.5 text-label text-ink-2">
           To be told apart, a size has to move by <LengthText ticks={step} unit={unit} withUnit /> at least.
         </p>
       )}
