@@ -99,6 +99,7 @@ async function publish(page: Page, number: number, reason?: string): Promise<voi
 test('a practical is offered, adopted, followed and left again, approved, and differed from with a reason', async ({
   page,
 }) => {
+  test.setTimeout(120_000);
   const school = await makeSchool();
   const rut = await makePerson(school, ['teacher'], {
     givenName: 'Rut',

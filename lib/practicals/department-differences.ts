@@ -1,3 +1,4 @@
+import { capital } from './change-words';
 import { compareRubrics, cutListSignature } from './compare-rubrics';
 import type { Compared, ComparedRow, Phrase } from './compare-types';
 import { priceSentences, valueWords } from './compare-words';
@@ -29,11 +30,11 @@ export function departmentDifferences(approved: Written, own: Compared): Departm
   const { same, sizes, pieces, whole, policies } = comparison;
   const prices = priceSentences(sizes, [DEPARTMENT, own.label]);
   const others = [...pieces, ...whole, ...policies].filter(({ differs }) => differs).map(rowSentence);
-  const told = same ? [] : [...prices, ...others];
+  const told = same ? [] : [...prices, ...others].map(capital);
   return { same: same && sameTask, sentences: sameTask ? told : [[OTHER_SIZES], ...told] };
 }
 
-/** "a redo counts up to: 100%, the department 90%." */
+/** "A redo counts up to: 100%, the department 90%." */
 function rowSentence({ label, values }: ComparedRow): Phrase {
   const [theirs, own] = values.map(valueWords);
   return [...label, ': ', ...(own ?? []), `, ${DEPARTMENT} `, ...(theirs ?? []), '.'];

@@ -100,7 +100,7 @@ describe('declared differences', () => {
     ]);
     const [theirs, newest, used] = versions;
     expect(theirs).toMatchObject({ ownerName: 'Rut Lindqvist', isNewest: true, same: false, periods: [] });
-    expect(JSON.stringify(theirs?.sentences)).toContain('a redo counts up to');
+    expect(JSON.stringify(theirs?.sentences)).toContain('A redo counts up to');
     expect(newest).toMatchObject({
       ownerName: 'Dayo Okonjo',
       number: 2,
@@ -109,7 +109,7 @@ describe('declared differences', () => {
       reason: null,
     });
     expect(used).toMatchObject({ number: 1, isNewest: false, same: false, periods: ['3'], reason: REASON });
-    expect(used?.sentences[0]?.[0]).toBe('this version takes 2 points more than the department for ');
+    expect(used?.sentences[0]?.[0]).toBe('This version takes 2 points more than the department for ');
   });
 
   it('reach copies of copies, other rubrics of the cut list, and what asks for other pieces by now', async () => {

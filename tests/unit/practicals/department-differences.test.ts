@@ -37,7 +37,7 @@ describe('differences from the department’s rubric', () => {
     });
     const { sentences } = departmentDifferences(approved, dearer);
     expect(sentences).toHaveLength(2);
-    expect(sentences[1]).toEqual(['a redo counts up to', ': ', '100%', ', the department ', '90%', '.']);
+    expect(sentences[1]).toEqual(['A redo counts up to', ': ', '100%', ', the department ', '90%', '.']);
   });
 
   it('of other pieces set no prices against each other', () => {
