@@ -59,10 +59,17 @@ CREATE TABLE "sitting_moves" (
 --> statement-breakpoint
 ALTER TABLE "practicals" ADD COLUMN "source_kind" text;--> statement-breakpoint
 ALTER TABLE "practicals" ADD COLUMN "offered_at" timestamp with time zone;--> statement-breakpoint
-UPDATE "practicals" SET "source_kind" = 'copy' WHERE "copied_from_version_id" IS NOT NULL;--> statement-breakpoint
+-- Row security holds the owner too, who without this would see no row to bring up to date.
+ALTER TABLE "practicals" NO FORCE ROW LEVEL SECURITY;--> statement-breakpoint
+ALTER TABLE "rubric_versions" NO FORCE ROW LEVEL SECURITY;--> statement-breakpoint
+UPDATE "practicals" p SET "source_kind" = CASE WHEN o."owner_id" = p."owner_id" THEN 'copy' ELSE 'adopted' END
+  FROM "rubric_versions" v JOIN "practicals" o ON o."school_id" = v."school_id" AND o."id" = v."practical_id"
+  WHERE v."school_id" = p."school_id" AND v."id" = p."copied_from_version_id";--> statement-breakpoint
 -- Until now the department could copy whatever was published; that stays on offer.
 UPDATE "practicals" p SET "offered_at" = now() WHERE "archived_at" IS NULL
   AND EXISTS (SELECT FROM "rubric_versions" v WHERE v."school_id" = p."school_id" AND v."practical_id" = p."id");--> statement-breakpoint
+ALTER TABLE "practicals" FORCE ROW LEVEL SECURITY;--> statement-breakpoint
+ALTER TABLE "rubric_versions" FORCE ROW LEVEL SECURITY;--> statement-breakpoint
 ALTER TABLE "rubric_versions" ADD COLUMN "difference_reason" text;--> statement-breakpoint
 ALTER TABLE "practical_drafts" ADD COLUMN "replaced" jsonb;--> statement-breakpoint
 ALTER TABLE "results" ADD COLUMN "held_points" integer DEFAULT 0 NOT NULL;--> statement-breakpoint
