@@ -131,7 +131,7 @@ export interface AccommodationScope {
   sittingId: string | null;
 }
 
-/** The one that stands, held fast until the transaction ends. */
+/** The one that stands, held fast until the transaction ends; a result can point at it all the while. */
 export async function lockStanding(tx: Transaction, schoolId: string, scope: AccommodationScope) {
   const { studentId, departmentId, termId, sittingId } = scope;
   const [row] = await tx
@@ -147,7 +147,7 @@ export async function lockStanding(tx: Transaction, schoolId: string, scope: Acc
         isNull(accommodations.endedAt),
       ),
     )
-    .for('update');
+    .for('no key update');
   return row;
 }
 

@@ -30,6 +30,15 @@ export async function selectDepartment(tx: Transaction, schoolId: string, depart
   return row;
 }
 
+/** Two heads who approve rubrics of one department go one after the other. */
+export async function lockDepartment(tx: Transaction, schoolId: string, departmentId: string): Promise<void> {
+  await tx
+    .select({ id: departments.id })
+    .from(departments)
+    .where(and(eq(departments.schoolId, schoolId), eq(departments.id, departmentId)))
+    .for('no key update');
+}
+
 /** Whether another department of the school has this name, in any case. */
 export async function isDepartmentNameTaken(
   tx: Transaction,

@@ -125,6 +125,22 @@ export async function isOwnSitting(
   return rows.length > 0;
 }
 
+/** Whether the sitting has this attempt. Locks nothing: whoever publishes holds the sitting before its attempts. */
+export async function hasAttempt(
+  tx: Transaction,
+  schoolId: string,
+  sittingId: string,
+  attemptId: string,
+): Promise<boolean> {
+  const rows = await tx
+    .select({ id: attempts.id })
+    .from(attempts)
+    .where(
+      and(eq(attempts.schoolId, schoolId), eq(attempts.sittingId, sittingId), eq(attempts.id, attemptId)),
+    );
+  return rows.length > 0;
+}
+
 /** A first attempt for everyone enrolled now who has none, such as those who joined after the sitting was opened. */
 export async function insertMissingAttempts(
   tx: Transaction,

@@ -1,5 +1,6 @@
 import 'server-only';
 import { endApprovals, insertApproval, selectStandingApprovals } from '@/db/queries/approvals';
+import { lockDepartment } from '@/db/queries/departments';
 import { lockPractical, selectVersion } from '@/db/queries/practicals';
 import { sharedVersionInput } from '@/lib/contracts/department';
 import { taskSchema } from '@/lib/practicals/task';
@@ -19,6 +20,7 @@ export const approveVersion = defineVerb({
     const row = found(await selectVersion(tx, schoolId, input.versionId));
     authorize(practicalSubject(row));
     const { versionId, practicalId, number } = row;
+    await lockDepartment(tx, schoolId, row.departmentId);
     const practical = found(await lockPractical(tx, schoolId, practicalId));
     const approvals = await selectStandingApprovals(tx, schoolId, row.departmentId);
     const already = approvals.find((each) => each.versionId === versionId);

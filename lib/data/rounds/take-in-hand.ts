@@ -1,6 +1,6 @@
 import 'server-only';
 import { deleteInHand, upsertInHand } from '@/db/queries/in-hand';
-import { lockAttempts, selectRound } from '@/db/queries/rounds';
+import { hasAttempt, selectRound } from '@/db/queries/rounds';
 import { type InHandView, takeInHandInput } from '@/lib/contracts/rounds';
 import { defineVerb } from '../verb';
 import { inHandView } from './in-hand-view';
@@ -17,8 +17,9 @@ export const takeInHand = defineVerb({
     authorize((await roundSubject(tx, round)).subject);
     if (attemptId === null) await deleteInHand(tx, schoolId, sittingId, deviceId);
     else {
-      const [attempt] = await lockAttempts(tx, schoolId, sittingId, [attemptId]);
-      if (!attempt) refuse('not_found', 'This student’s work is not in this round.');
+      if (!(await hasAttempt(tx, schoolId, sittingId, attemptId))) {
+        refuse('not_found', 'This student’s work is not in this round.');
+      }
       await upsertInHand(tx, { schoolId, sittingId, deviceId, personId, attemptId });
     }
     return inHandView(tx, schoolId, sittingId, deviceId);

@@ -19,6 +19,7 @@ import {
 } from '@/tests/support/practicals';
 import { logOf, makeActor, makeSchool, makeSection, whileLogFails } from '@/tests/support/school';
 import { makeSharedSchool, offerAndAdopt } from '@/tests/support/shared-school';
+import { untilWaiting } from '@/tests/support/waiting';
 
 const { school, rut, dayo, head } = await makeSharedSchool();
 const apart = { ...head, departmentId: crypto.randomUUID() };
@@ -126,6 +127,21 @@ describe('approving a version', () => {
     valueFrom(await approveVersion(head, { versionId: next.versionId }));
     expect(await approvals(other)).toMatchObject([{ ended_by: head.personId }]);
     expect(await approvals(next.versionId)).toMatchObject([{ ended_by: null }]);
+  });
+
+  it('leaves one of two rubrics of a cut list that two heads approve at the same moment', async () => {
+    const place = await makeSharedSchool();
+    const first = await offerAndAdopt(place.rut, place.dayo, 'gauge-kit');
+    const { versionId: other } = await publishAndOffer(place.dayo, first.copyId);
+    const { pressed } = await ownerSql().begin(async (tx) => {
+      await tx`lock table rubric_approvals in exclusive mode`;
+      const both = [first.versionId, other].map((versionId) => approveVersion(place.head, { versionId }));
+      await untilWaiting(2);
+      return { pressed: both };
+    });
+    for (const each of await Promise.all(pressed)) valueFrom(each);
+    const all = [...(await approvals(first.versionId)), ...(await approvals(other))];
+    expect(all.map(({ ended_by }) => ended_by === null).sort()).toEqual([false, true]);
   });
 
   it('is for the head of the department, for what is on offer', async () => {

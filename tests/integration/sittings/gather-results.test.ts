@@ -3,17 +3,10 @@ import { lockAttempts } from '@/db/queries/rounds';
 import { rebuildSheets } from '@/lib/data/rounds/rebuild-sheets';
 import { previewPublication } from '@/lib/data/sittings/preview-publication';
 import { value } from '@/tests/support/answers';
-import { inSchoolAs, ownerSql } from '@/tests/support/database';
+import { inSchoolAs } from '@/tests/support/database';
 import { push } from '@/tests/support/push-events';
 import { eventOf, sheetOf, stageRound } from '@/tests/support/round-stage';
-
-/** Resolves once somebody waits for a lock, as a look at the results does while a reading is being kept. */
-async function somebodyWaits(): Promise<void> {
-  const [row] = await ownerSql()`
-    select count(*)::int as waiting from pg_stat_activity
-    where datname = current_database() and wait_event_type = 'Lock'`;
-  if (row?.waiting === 0) await somebodyWaits();
-}
+import { untilWaiting } from '@/tests/support/waiting';
 
 test('a reading that is being kept while somebody looks at the results is in the sheet afterwards', async () => {
   const { teacher, sittingId, attempts, school } = await stageRound();
@@ -31,7 +24,7 @@ test('a reading that is being kept while somebody looks at the results is in the
       from reading_events where id = '${short.id}'`);
     await rebuildSheets(tx, school.id, [attempts[0]]);
     const looking = previewPublication(teacher, { sittingId });
-    await somebodyWaits();
+    await untilWaiting();
     return { looking };
   });
   expect(value(await looked.looking)).toMatchObject({ incomplete: [{ givenName: 'Ana' }] });
