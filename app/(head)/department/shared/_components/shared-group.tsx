@@ -29,7 +29,7 @@ export function SharedGroup({ practical }: { practical: SharedPractical }) {
           {versions.map(({ versionId, number, publishedAt, periods, approval }) => (
             <tr key={versionId}>
               <RowHead>
-                <Link className="link" href={`/department/versions/${versionId}`}>
+                <Link className="link whitespace-nowrap" href={`/department/versions/${versionId}`}>
                   version {number}
                   <span className="sr-only"> of {title}</span>
                 </Link>
