@@ -56,7 +56,7 @@ export function CellInput(props: CellInputProps) {
         className={classNames(
           'tnum block h-9 w-full min-w-0 border-b border-rule bg-transparent px-1 py-0 text-lead leading-6 placeholder:text-label placeholder:text-ink-2',
           'hover:border-ink focus:border-b-edge focus:border-act focus:bg-plate',
-          isNote && 'h-7 border-hair text-label',
+          isNote && 'h-7 border-transparent text-label placeholder-shown:border-hair',
           parts && 'text-transparent',
           found && !refused && 'border-b-edge border-ink bg-plate',
           refused && 'border-b-outline border-refuse bg-refuse-wash',

@@ -102,6 +102,7 @@ function Row(props: CutListRowProps) {
           'items-end border-b border-hair py-2 lg:py-1.5',
           props.isDragged && 'bg-act-wash',
           notes.length > 0 && 'border-b-0',
+          inHand && 'max-xl:border-b-0',
         )}
       >
         <td className={CELL.number}>

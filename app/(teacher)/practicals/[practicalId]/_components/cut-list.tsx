@@ -2,7 +2,6 @@
 
 import { useRef } from 'react';
 import { Button } from '@/components/ui/button';
-import { typeAt } from '@/lib/practicals/draft-paths';
 import { AllLinesRow } from './all-lines-row';
 import { CutListFoot } from './cut-list-foot';
 import { CutListHead } from './cut-list-head';
@@ -16,13 +15,11 @@ import { useRowDrag } from './use-row-drag';
 import type { useSheet } from './use-sheet';
 
 /** The cut list and its prices, typed like a sheet. */
-export function CutList({ sheet, keys, said }: ReturnType<typeof useSheet>) {
+export function CutList({ sheet, keys, type, said }: ReturnType<typeof useSheet>) {
   const editor = useEditor();
   const { desk, settled, unit, errorsAt, findings, focused, selection, select, setFocused } = editor;
   const section = useRef<HTMLElement>(null);
   const { drag, dragger } = useRowDrag(sheet, section);
-  const { edit } = desk;
-  const type = (path: string, text: string) => edit((draft) => typeAt(draft, path, text));
   const { lines } = desk.draft;
   const dearest = dearestOf(settled);
   return (

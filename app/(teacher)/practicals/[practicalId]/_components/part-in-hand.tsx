@@ -35,7 +35,7 @@ export function PartInHand({ inRow = false, className }: { inRow?: boolean; clas
     <section aria-label="part in hand" className={className}>
       <p
         className={classNames(
-          'flex h-[47px] items-end justify-between gap-3 border-b-outline border-ink pb-1.5',
+          'flex h-[43px] items-end justify-between gap-3 border-b-outline border-ink pb-1.5',
           inRow && 'hidden',
         )}
       >

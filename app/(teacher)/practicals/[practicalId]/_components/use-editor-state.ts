@@ -29,7 +29,19 @@ export function useEditorState(view: PracticalView, desk: DraftDesk): EditorStat
   const [judged, setJudged] = useState<ReadonlySet<string>>(new Set());
   const [lineInHand, takeUp] = useState<string | null>(null);
   const [selection, setSelection] = useState<Selection>({ kind: 'size', lineId: null, axis: 'length' });
-  const { now } = desk;
+  const [verbs] = useState(() => ({
+    setFocused(path: string | null) {
+      setPath(path);
+      const line = desk.now().lines[Number(LINE.exec(path ?? '')?.[1] ?? -1)];
+      if (line) takeUp(line.id);
+    },
+    judge: (lineIds: readonly string[]) => setJudged((before) => new Set([...before, ...lineIds])),
+    select(next: Selection) {
+      setSelection(next);
+      if (next.lineId !== null) takeUp(next.lineId);
+    },
+    refuse: () => setRefused(true),
+  }));
   const settled = useDeferredValue(desk.draft);
   const parsed = parseDraft(settled);
 
@@ -59,21 +71,11 @@ export function useEditorState(view: PracticalView, desk: DraftDesk): EditorStat
     latest: view.latest,
     findings,
     focused,
-    setFocused(path) {
-      setPath(path);
-      const line = now().lines[Number(LINE.exec(path ?? '')?.[1] ?? -1)];
-      if (line) takeUp(line.id);
-    },
     lineInHand,
-    judge: (lineIds) => setJudged((before) => new Set([...before, ...lineIds])),
     errorsAt,
     selection,
-    select(next) {
-      setSelection(next);
-      if (next.lineId !== null) takeUp(next.lineId);
-    },
     wrong: countWrong(parsed, errorsAt),
-    refuse: () => setRefused(true),
+    ...verbs,
   };
 }
 

@@ -10,11 +10,11 @@ import { SheetKeys } from './sheet-keys';
 export function useSheet() {
   const { desk, unit, judge } = useEditor();
   const [said, show] = useState<SheetSaid>({ text: '', canUndo: false });
-  const [{ sheet, keys }] = useState(() => {
+  const [verbs] = useState(() => {
     const made = new SheetDesk({ unit, now: desk.now, edit: desk.edit, judge, show });
-    const type = (row: number, column: string, text: string) =>
-      desk.edit((draft) => typeAt(draft, `lines.${row}.${column}`, text));
-    return { sheet: made, keys: new SheetKeys(made, type) };
+    const type = (path: string, text: string) => desk.edit((draft) => typeAt(draft, path, text));
+    const keys = new SheetKeys(made, (row, column, text) => type(`lines.${row}.${column}`, text));
+    return { sheet: made, keys, type };
   });
-  return { sheet, keys, said };
+  return { ...verbs, said };
 }
