@@ -31,7 +31,7 @@ export function PricesCell({ variant, original, unit }: PricesCellProps) {
         </Button>
       }
       title={`Prices of ${variant.name}`}
-      description={`Its draft is priced otherwise than version ${original.number} of the original:`}
+      description={`Its draft is priced otherwise than version ${original.number} of the original, whose figures stand second.`}
       closeLabel="leave them"
     >
       <PhraseList phrases={variant.prices} unit={unit} />
