@@ -1,4 +1,4 @@
-import { and, asc, desc, eq, inArray } from 'drizzle-orm';
+import { and, asc, desc, eq, inArray, sql } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
 import { publications, results, rubricVersions } from '@/db/schema';
 
@@ -36,11 +36,15 @@ export function selectResults(tx: Transaction, schoolId: string, publicationIds:
 
 export type ResultRow = Awaited<ReturnType<typeof selectResults>>[number];
 
+/** Published when it is written, as events are received. */
 export async function insertPublication(
   tx: Transaction,
   row: typeof publications.$inferInsert,
 ): Promise<string> {
-  const [made] = await tx.insert(publications).values(row).returning({ id: publications.id });
+  const [made] = await tx
+    .insert(publications)
+    .values({ publishedAt: sql`clock_timestamp()`, ...row })
+    .returning({ id: publications.id });
   if (!made) throw new Error('The database kept no publication.');
   return made.id;
 }

@@ -98,11 +98,16 @@ export function selectSameEvents(
     );
 }
 
+/**
+ * Received when they are written, not when their transaction began: then whether an event had come by a publication,
+ * which holds its attempt, can be told from the two moments.
+ */
 export async function insertEvents(
   tx: Transaction,
   rows: readonly (typeof readingEvents.$inferInsert)[],
 ): Promise<void> {
-  if (rows.length > 0) await tx.insert(readingEvents).values([...rows]);
+  const receivedAt = sql`clock_timestamp()`;
+  if (rows.length > 0) await tx.insert(readingEvents).values(rows.map((row) => ({ ...row, receivedAt })));
 }
 
 export async function isOwnSitting(

@@ -143,10 +143,11 @@ function sizeRows({ number, task, rubric }: LoadedVersion, piece: PieceSheet, wh
     { decimal: String(number) },
   ];
   if (piece.state === 'missing') return AXES.map((axis) => row(axis, null));
-  // What is not held against a student, and why, is nobody's matter who receives the file.
+  // What is not held against a student, and why, is nobody's matter who receives the file; nor is a size that could
+  // stay unread for that.
   return AXES.flatMap((axis) => {
     const size = piece.sizes?.[axis];
-    return size && size.band !== 'excused' ? [row(axis, size)] : [];
+    return size && size.band !== 'excused' && size.band !== 'unread' ? [row(axis, size)] : [];
   });
 }
 
@@ -157,7 +158,7 @@ function lengthOrBlank(ticks: number | null | undefined, unit: 'in' | 'mm'): Csv
 /** The number of the band, 0 the free one; a word for what is in none. */
 function bandOf({ band }: SizeSheet): CsvCell {
   if (typeof band === 'number') return { decimal: String(band) };
-  return { text: band === 'unread' ? 'not read' : band };
+  return { text: band };
 }
 
 function points(hundredths: Points): CsvCell {

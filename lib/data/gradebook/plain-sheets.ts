@@ -5,6 +5,7 @@ import type { ScoreSheet } from '@/lib/scoring';
 import { type CellEvent, deriveAttempt } from '@/lib/sync/derive';
 import { asCellEvent } from '@/lib/sync/server/stored-event';
 import { sheetUnder } from '../pricing/price-work';
+import { priceVersion } from '../pricing/pricing';
 import type { LoadedSitting } from './load-gradebook';
 
 /** By attempt: the sheets of those whose published one is of a modified rubric, by the sitting's own. */
@@ -28,10 +29,7 @@ export async function loadPlainSheets(
     const ids = modified.map(({ attemptId }) => attemptId);
     const events = ids.length > 0 ? await eventsUntil(tx, schoolId, ids, latest.publication.publishedAt) : [];
     const { versionId, number, rubric, form } = latest.version;
-    const version = {
-      ...{ versionId, number, rubric, policy: form.policies.prediction },
-      ...{ published: rubric, modification: null },
-    };
+    const version = priceVersion({ versionId, number, rubric, policy: form.policies.prediction }, null);
     for (const attemptId of ids) {
       const own = events.filter((event) => event.attemptId === attemptId);
       sheets.set(attemptId, sheetUnder(version, deriveAttempt(own, 'bench').attempt));

@@ -35,7 +35,7 @@ import { modifyFor, REASON, WIDER } from '@/tests/support/accommodations';
 import { code, value } from '@/tests/support/answers';
 import { ownerSql } from '@/tests/support/database';
 import { tenantTables } from '@/tests/support/every-table';
-import { lockPrediction, markPieces } from '@/tests/support/mark-pieces';
+import { lockPrediction, markPieces, readingsOf } from '@/tests/support/mark-pieces';
 import { push } from '@/tests/support/push-events';
 import { eventOf, type RoundStage, stageRound } from '@/tests/support/round-stage';
 import { makeActor } from '@/tests/support/school';
@@ -305,5 +305,23 @@ describe('once the results are out', () => {
     const sizes = await sizesOf(stage);
     expect(sizes).toHaveLength(54);
     expect(sizes).toEqual(await sizesOf(plain));
+  });
+
+  it('a size that nobody read because it is excused is no row of the file of sizes', async () => {
+    const stage = await stageRound();
+    const { teacher, sectionId, sittingId, attempts, practical } = stage;
+    await modifyFor(stage, { modification: MODIFICATION });
+    const readings = readingsOf(teacher, attempts[0], practical.rubric);
+    await push(
+      teacher,
+      sittingId,
+      readings.filter(({ cell }) => cell.what !== 'thickness'),
+    );
+    await publish(stage);
+    const rows: Record<string, string>[] = parse(value(await exportSizes(teacher, { sectionId })).text, {
+      columns: true,
+    });
+    expect(new Set(rows.map(({ axis }) => axis))).toEqual(new Set(['width', 'length']));
+    expect(rows.every(({ reading, points }) => reading !== '' && points !== '')).toBe(true);
   });
 });

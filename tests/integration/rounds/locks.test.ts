@@ -1,14 +1,15 @@
 import { randomUUID } from 'node:crypto';
 import { sql } from 'drizzle-orm';
-import { describe, test } from 'vitest';
+import { describe, expect, test } from 'vitest';
 import { lockAttempts } from '@/db/queries/rounds';
 import { lockSitting } from '@/db/queries/sittings';
 import { makeAccommodation } from '@/lib/data/accommodations/make-accommodation';
 import { takeInHand } from '@/lib/data/rounds/take-in-hand';
 import { accommodationOf, modifyFor } from '@/tests/support/accommodations';
 import { value } from '@/tests/support/answers';
-import { inSchoolAs } from '@/tests/support/database';
-import { stageRound } from '@/tests/support/round-stage';
+import { inSchoolAs, ownerSql } from '@/tests/support/database';
+import { outcomes, push } from '@/tests/support/push-events';
+import { eventOf, stageRound } from '@/tests/support/round-stage';
 import { untilWaiting } from '@/tests/support/waiting';
 
 // Publishing and moving hold the sitting, then its attempts, and write rows that point at modified rubrics.
@@ -38,4 +39,20 @@ describe('while results are written, whoever waits', () => {
     });
     value(await taking);
   });
+});
+
+test('a reading is received after the publication that it had to wait for', async () => {
+  const { school, teacher, sittingId, attempts } = await stageRound();
+  const event = eventOf(teacher, attempts[0]);
+  const { sending, moment } = await inSchoolAs(school.id, async (tx) => {
+    await lockAttempts(tx, school.id, sittingId, attempts);
+    const begun = outcomes(push(teacher, sittingId, [event]));
+    await untilWaiting();
+    const [row] = await tx.execute<{ moment: string }>(sql`select clock_timestamp()::text as moment`);
+    return { sending: begun, moment: row?.moment ?? '' };
+  });
+  expect(await sending).toEqual(['kept']);
+  const [row] = await ownerSql()`
+    select received_at > ${moment}::text::timestamptz as after from reading_events where id = ${event.id}`;
+  expect(row?.after).toBe(true);
 });
