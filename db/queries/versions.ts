@@ -1,6 +1,7 @@
-import { and, asc, desc, eq, getTableColumns, or, sql } from 'drizzle-orm';
+import { and, asc, desc, eq, getTableColumns, isNull, or, sql } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
-import { people, rubricVersions, sectionStaff, sections, sittingMoves, sittings } from '@/db/schema';
+import { people, rubricVersions, schools, sectionStaff, sections, sittingMoves, sittings } from '@/db/schema';
+import { teacherIds } from './sections';
 
 const publisherName = sql<string>`${people.givenName} || ' ' || ${people.familyName}`;
 
@@ -62,5 +63,39 @@ export function selectTeachersUnder(tx: Transaction, schoolId: string, practical
       ),
     )
     .where(and(eq(sittings.schoolId, schoolId), eq(sittings.practicalId, practicalId)))
+    .orderBy(asc(sections.period), asc(sections.name));
+}
+
+/** The person's own sittings of a practical that stand on an older version than its newest, by period. */
+export function selectSittingsBehind(
+  tx: Transaction,
+  schoolId: string,
+  practicalId: string,
+  personId: string,
+) {
+  return tx
+    .select({
+      sittingId: sittings.id,
+      sectionName: sections.name,
+      period: sections.period,
+      number: rubricVersions.number,
+    })
+    .from(sittings)
+    .innerJoin(sections, and(eq(sections.schoolId, sittings.schoolId), eq(sections.id, sittings.sectionId)))
+    .innerJoin(schools, eq(schools.id, sittings.schoolId))
+    .innerJoin(
+      rubricVersions,
+      and(eq(rubricVersions.schoolId, sittings.schoolId), eq(rubricVersions.id, sittings.rubricVersionId)),
+    )
+    .where(
+      and(
+        eq(sittings.schoolId, schoolId),
+        eq(sittings.practicalId, practicalId),
+        isNull(sections.archivedAt),
+        sql`${personId}::uuid = any(${teacherIds})`,
+        sql`exists (select from ${rubricVersions} newer where newer.school_id = ${sittings.schoolId}
+          and newer.practical_id = ${sittings.practicalId} and newer.number > ${rubricVersions.number})`,
+      ),
+    )
     .orderBy(asc(sections.period), asc(sections.name));
 }

@@ -1,5 +1,6 @@
 import 'server-only';
 import { selectDraft, selectLatestVersion, selectPractical, selectVersions } from '@/db/queries/practicals';
+import { selectSittingsBehind } from '@/db/queries/versions';
 import { readPracticalInput } from '@/lib/contracts/practicals';
 import type { PracticalDraft } from '@/lib/practicals/draft';
 import { parseDraft } from '@/lib/practicals/parse-draft';
@@ -27,6 +28,8 @@ export interface PracticalView {
   department: DepartmentRubric | null;
   draft: { content: PracticalDraft; revision: number; savedAt: string };
   versions: { versionId: string; number: number; publishedAt: string; sittings: number }[];
+  /** The reader's own sittings that stand on an older version than the newest. */
+  behind: SittingBehind[];
   latest: {
     versionId: string;
     number: number;
@@ -36,6 +39,13 @@ export interface PracticalView {
     /** Why it differs from the department's, where its author said so. */
     differenceReason: string | null;
   } | null;
+}
+
+export interface SittingBehind {
+  sittingId: string;
+  sectionName: string;
+  period: string;
+  number: number;
 }
 
 /** A practical as its owner edits it: the draft as typed, and what has been published of it. */
@@ -67,6 +77,7 @@ export const readPractical = defineVerb({
         savedAt: draft.savedAt.toISOString(),
       },
       versions: versions.map((version) => ({ ...version, publishedAt: version.publishedAt.toISOString() })),
+      behind: await selectSittingsBehind(tx, schoolId, row.id, actor.personId),
       latest:
         latest && published
           ? {

@@ -2,6 +2,7 @@ import { beforeAll, describe, expect, it } from 'vitest';
 import type { Actor } from '@/lib/auth/actor';
 import { listVersions } from '@/lib/data/practicals/list-versions';
 import { offerPractical } from '@/lib/data/practicals/offer-practical';
+import { readPractical } from '@/lib/data/practicals/read-practical';
 import { readVersion } from '@/lib/data/practicals/read-version';
 import { readVersionSheet } from '@/lib/data/practicals/read-version-sheet';
 import { code, value } from '@/tests/support/answers';
@@ -61,6 +62,23 @@ describe('listVersions', () => {
     expect(JSON.stringify(newest?.changes)).toContain('Worth of a piece');
     expect(oldest).toMatchObject({ number: 1, sittings: 1, changes: null });
     expect(oldest?.ownSittings).toEqual([{ sittingId, sectionName: 'Woods 2', period: '3' }]);
+  });
+
+  it('tells the owner which of the own sittings a newer version has left behind, and of nobody else’s', async () => {
+    const behind = await given(owner, first.versionId);
+    const newest = await given(owner, second.versionId);
+    const another = await makeActor(school, 'teacher');
+    const others = await given(another, first.versionId);
+    const told = value(await readPractical(owner, { practicalId })).behind;
+    expect(told).toContainEqual({
+      sittingId: behind.sittingId,
+      sectionName: 'Woods 2',
+      period: '3',
+      number: 1,
+    });
+    const ids = told.map(({ sittingId }) => sittingId);
+    expect(ids).not.toContain(newest.sittingId);
+    expect(ids).not.toContain(others.sittingId);
   });
 
   it('tells the owner what the draft changes, or which of its fields cannot be read', async () => {

@@ -7,6 +7,7 @@ import { LocalTime } from '@/components/ui/local-time';
 import { Heading } from '@/components/ui/titles';
 import type { PracticalView } from '@/lib/data/practicals/read-practical';
 import { DepartmentNote } from './department-note';
+import { SittingsBehind } from './sittings-behind';
 import { SourceNote } from './source-note';
 
 /** The versions so far and what hangs on each, where the practical comes from, and what the department has of it. */
@@ -47,9 +48,8 @@ function Versions({ view }: { view: PracticalView }) {
           </li>
         ))}
       </ul>
-      {held > 0 ? (
-        <p className="mt-2 text-label">A sitting keeps its version, whatever you change here.</p>
-      ) : null}
+      {held > 0 ? <p className="mt-2 text-label">A sitting keeps its version until you move it.</p> : null}
+      <SittingsBehind sittings={view.behind} />
       <Offer view={view} />
       <p className="mt-3 text-label">
         <Link className="link inline-block py-1" href={`/practicals/${practicalId}/variants`}>

@@ -61,6 +61,7 @@ export function PracticalEditor({ view }: { view: PracticalView }) {
               parsed={editor.parsed}
               latest={view.latest}
               department={view.department}
+              behind={view.behind}
               {...{ desk, onBadFields }}
             />
           </>

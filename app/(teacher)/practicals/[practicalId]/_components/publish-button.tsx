@@ -7,6 +7,7 @@ import { Dialog } from '@/components/ui/dialog';
 import { PhraseList } from '@/components/ui/phrase-list';
 import { Refusal } from '@/components/ui/refusal';
 import type { DepartmentRubric } from '@/lib/data/practicals/department-rubric';
+import type { SittingBehind } from '@/lib/data/practicals/read-practical';
 import { changesSince } from '@/lib/practicals/changes-since';
 import { type ParsedDraft, parseDraft } from '@/lib/practicals/parse-draft';
 import { sameInEffect } from '@/lib/practicals/same-in-effect';
@@ -22,6 +23,7 @@ interface PublishButtonProps {
   parsed: ParsedDraft;
   latest: Editor['latest'];
   department: DepartmentRubric | null;
+  behind: readonly SittingBehind[];
   /** Called when fields cannot be used yet: shows them all and goes to the first. */
   onBadFields(): void;
 }
@@ -30,7 +32,7 @@ type Good = Extract<ParsedDraft, { ok: true }>;
 
 /** Publishing: keeps what is typed, says that a version never changes and what this one changes, then makes it. */
 export function PublishButton(props: PublishButtonProps) {
-  const { practicalId, desk, parsed, latest, department, onBadFields } = props;
+  const { practicalId, desk, parsed, latest, department, behind, onBadFields } = props;
   const [asking, setAsking] = useState<number | null>(null);
   const [published, setPublished] = useState<number | null>(null);
   const number = (latest?.number ?? 0) + 1;
@@ -65,7 +67,7 @@ export function PublishButton(props: PublishButtonProps) {
         />
       ) : null}
       {published === null ? null : (
-        <Published practicalId={practicalId} number={published} onClose={() => setPublished(null)} />
+        <Published {...{ practicalId, behind }} number={published} onClose={() => setPublished(null)} />
       )}
     </>
   );
