@@ -71,7 +71,7 @@ test('a teacher writes the bench-hook kit from nothing by keyboard, is refused a
   await expect(bad).toBeFocused();
   await expect(bad).toHaveValue('1-1/');
   await author.type('1-1/4');
-  await expect(page.getByText('1 of 45 is 2.22 of 100.')).toBeVisible();
+  await expect(page.getByText('of 100. 1 of 45 is 2.22 of 100.')).toBeVisible();
 
   await author.press(author.button(/^publish version 1/));
   const dialog = page.getByRole('dialog');
