@@ -14,6 +14,7 @@ export type ReadJson =
   | { ok: false; problems: PlacedReason[] };
 
 const DEEPEST = 32;
+const LONGEST = 1000;
 const MOST_SYNTAX = 10;
 /** The scanner's tokens for { and [, and for } and ]. */
 const OPENING = [1, 3];
@@ -41,7 +42,7 @@ const SYNTAX: Partial<Record<ReturnType<typeof printParseErrorCode>, string>> = 
 /**
  * Reads strict JSON and keeps the place of every part. Told apart from JSON that is merely broken, each at its place:
  * remarks, a name used twice in one group, the name `__proto__`, a number with a point or an exponent, one past 2^53,
- * and groups more than 32 deep. Expects a text without a byte order mark. Pure; never throws.
+ * groups more than 32 deep and lists of more than 1000. Expects a text without a byte order mark. Pure; never throws.
  */
 export function readJson(text: string): ReadJson {
   if (text.trim() === '') return refused(0, 'There is nothing in it.');
@@ -50,6 +51,9 @@ export function readJson(text: string): ReadJson {
   const errors: ParseError[] = [];
   const root = parseTree(text, errors, { disallowComments: true, allowTrailingComma: false });
   if (errors.length > 0 || !root) return { ok: false, problems: syntaxProblems(errors) };
+  const long = findTooLong(root);
+  if (long)
+    return refused(long.offset, `This list has more than ${LONGEST} entries. No practical has so many.`);
   try {
     return { ok: true, root, value: JSON.parse(text), problems: [...walk(text, root, [])] };
   } catch {
@@ -74,6 +78,16 @@ function findTooDeep(text: string): number | null {
     if (depth > DEEPEST) return scanner.getTokenOffset();
   }
   return null;
+}
+
+function findTooLong(node: Node): Node | undefined {
+  const { type, children = [] } = node;
+  if (type === 'array' && children.length > LONGEST) return node;
+  for (const child of children) {
+    const long = findTooLong(child);
+    if (long) return long;
+  }
+  return undefined;
 }
 
 /** One reason a place: what follows from the first mistake of a place says nothing more. */

@@ -25,9 +25,10 @@ export function agreementIssues(value: unknown): FileIssue[] {
   const read = loosely.safeParse(value);
   if (!read.success) return [];
   const { task, form } = read.data;
+  const ids = new Set(task.cutList.lines.map(({ id }) => id));
   const stray = (record: object, at: JsonPath) =>
     Object.keys(record)
-      .filter((id) => !task.cutList.lines.some((line) => line.id === id))
+      .filter((id) => !ids.has(id))
       .map((id) => ({ path: [...at, id], reason: `The cut list has no line “${id}”.`, isKey: true }));
   return [
     ...unitIssues(UNITS[String(task.unit)], UNITS[String(form.unit)]),

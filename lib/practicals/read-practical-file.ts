@@ -21,9 +21,12 @@ export type ReadPracticalFile =
   | { ok: true; task: Task; form: RubricForm }
   | { ok: false; problems: FileProblem[] };
 
+/** More than these nobody puts right at a time; each costs a look at its place in the file. */
+const MOST_TOLD = 500;
+
 /**
  * Reads the text of a practical file. Either the task and the rubric form exactly as the file has them, or everything
- * that cannot be used, in the order it stands in the file: no JSON, another format, a later version, unknown, missing
+ * that cannot be used, up to 500 things, in the order it stands in the file: no JSON, another format, a later version, unknown, missing
  * and repeated names, figures that no rubric may hold, and words that the editor would not keep as they are. A byte
  * order mark and either kind of line end are taken as they come. Pure; never throws.
  *
@@ -44,12 +47,12 @@ export function readPracticalFile(text: string): ReadPracticalFile {
   const found = parsed.success
     ? keepingIssues({ task: parsed.data.task, form: parsed.data.form })
     : fileIssues(parsed.error, json.value);
-  const certain = [...json.problems, ...agreementIssues(json.value).map((issue) => placed(json.root, issue))];
-  const isTold = ({ path }: FileIssue) =>
-    certain.some((told) => jsonPathText(told.path) === jsonPathText(path));
+  const agreement = agreementIssues(json.value);
+  const told = new Set([...json.problems, ...agreement].map(({ path }) => jsonPathText(path)));
+  const issues = [...agreement, ...found.filter(({ path }) => !told.has(jsonPathText(path)))];
   const problems = [
-    ...certain,
-    ...found.filter((issue) => !isTold(issue)).map((issue) => placed(json.root, issue)),
+    ...json.problems,
+    ...issues.slice(0, MOST_TOLD + 1).map((issue) => placed(json.root, issue)),
   ];
   if (problems.length > 0 || !parsed.success) return refuse(plain, problems, json.value);
   return { ok: true, task: parsed.data.task, form: parsed.data.form };
@@ -75,6 +78,8 @@ function headerIssue(value: unknown): FileIssue | null {
   );
 }
 
+const AND_MORE = 'Here and further on more is wrong. Put right what stands above it first.';
+
 /** At the value, else at the name, else at the nearest group that is there. */
 function placed(root: Node, { path, reason, isKey }: FileIssue): PlacedReason {
   for (let length = path.length; length > 0; length--) {
@@ -89,16 +94,18 @@ function placed(root: Node, { path, reason, isKey }: FileIssue): PlacedReason {
 function refuse(text: string, problems: PlacedReason[], value?: unknown): ReadPracticalFile {
   const starts = lineStarts(text);
   const labelOf = labelsIn(value);
+  let line = 0;
   const told = problems
     .toSorted((a, b) => a.offset - b.offset)
-    .map(({ offset, path, reason }) => {
-      const line = starts.findLastIndex((start) => start <= offset);
+    .slice(0, MOST_TOLD + 1)
+    .map(({ offset, path, reason }, index): FileProblem => {
+      while ((starts[line + 1] ?? Number.POSITIVE_INFINITY) <= offset) line += 1;
       return {
         place: placeInWords(path, labelOf),
         path: jsonPathText(path),
         line: line + 1,
         column: offset - (starts[line] ?? 0) + 1,
-        reason,
+        reason: index < MOST_TOLD ? reason : AND_MORE,
       };
     });
   return { ok: false, problems: told };

@@ -454,6 +454,21 @@ describe('a practical file with faults', () => {
     }
   });
 
+  it('tells the first 500 of very many names that are wrong, and that there are more, before anybody tires', () => {
+    const names = Array.from({ length: 50_000 }, (_, at) => `"k${at}":1.5`);
+    const text = `{"trymark":"practical","version":1,"task":{${names.join()}},"form":{}}`;
+    const problems = problemsOf(text);
+    expect(problems).toHaveLength(501);
+    expect(problems.at(-1)?.reason).toBe(
+      'Here and further on more is wrong. Put right what stands above it first.',
+    );
+  });
+
+  it('tells a list that no practical could have by its place alone', () => {
+    const text = `{"trymark":"practical","version":1,"task":{"cutList":{"lines":[${'{},'.repeat(250_000)}{}]}},"form":{}}`;
+    expect(shown(text)).toEqual(['1:63 : This list has more than 1000 entries. No practical has so many.']);
+  });
+
   it('never throws, whatever the text', () => {
     const soup = fc.oneof(
       fc.string(),
