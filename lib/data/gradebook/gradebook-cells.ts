@@ -78,6 +78,8 @@ export function isChanged({ row, result }: CellAttempt, pricing: Pricing): boole
   if (result.heldPoints > 0 && !pricing.held.some(({ versionId }) => versionId === result.heldVersionId)) {
     return true;
   }
+  // A bonus would add to both sides of what is held; without one, what is held now was not told.
+  if (result.heldPoints === 0 && result.bonusPoints === 0 && (row.heldPoints ?? 0) > 0) return true;
   const told = scoreSheetSchema.parse(result.sheet);
   const recorded = storedAttempt(row.recorded);
   const sheet = sheetUnder(pricing, { ...recorded, bonus: result.bonusPoints });

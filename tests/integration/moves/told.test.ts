@@ -95,6 +95,19 @@ describe('where points went', () => {
     expect(free.held).toBeNull();
   });
 
+  test('the gradebook says what is held now and was not when the results went out', async () => {
+    const stage = await readClass();
+    const { teacher, sectionId, practical } = stage;
+    const second = await addVersion(stage, 2, dearer);
+    value(await move(stage, second));
+    await publish(stage);
+    value(await move(stage, practical.versionId, { holdHarmless: true }));
+    value(await move(stage, second, { holdHarmless: true }));
+    const { sittings, students } = value(await readGradebook(teacher, { sectionId }));
+    expect(sittings[0]?.publication?.changedSince).toBe(1);
+    expect(students.map(({ cells }) => cells[0]?.changed)).toEqual([true, false]);
+  });
+
   test('the gradebook says what a move changed of what is out, and not after it was taken back', async () => {
     const stage = await readClass();
     const { teacher, sectionId, sittingId } = stage;
