@@ -42,11 +42,6 @@ export function invalid(fields: FieldErrors): { ok: false; problem: Problem } {
   return problem('invalid', first, { fields });
 }
 
-/** True when the same request may succeed later without being changed. */
-export function isTemporary(code: ProblemCode): boolean {
-  return code === 'unavailable' || code === 'rate_limited';
-}
-
 const HTTP_STATUS: Record<ProblemCode, number> = {
   unauthenticated: 401,
   forbidden: 403,

@@ -1,7 +1,7 @@
 import type { z } from 'zod';
 import type { judgementSchema } from '@/lib/contracts/results';
-import { type Attempt, type Points, type ScoreSheet, scoreAttempt } from '@/lib/scoring';
-import { fitAttempt, holdPoints, pricerOf } from '../pricing/price-work';
+import type { Attempt, Points, ScoreSheet } from '@/lib/scoring';
+import { holdPoints, pricerOf, sheetUnder } from '../pricing/price-work';
 import type { Pricing } from '../pricing/pricing';
 
 /** An attempt as it is recorded when results are about to go out. */
@@ -74,7 +74,7 @@ export function judgeResult(pricing: Pricing, attempt: RecordedAttempt, countLat
     bonusPoints: bonus,
     heldPoints: held.points,
     heldVersionId: held.version?.versionId ?? null,
-    sheet: scoreAttempt(pricing.rubric, { ...fitAttempt(pricing, recorded), bonus }),
+    sheet: sheetUnder(pricing, { ...recorded, bonus }),
     judgement,
   };
 }
