@@ -138,11 +138,14 @@ test('a student measures through a lost network, is refused what cannot be, lock
   await expect(page.getByTestId('predicted')).toHaveText('63');
   await expect(page.getByRole('row', { name: /^base, length/ })).toContainText('3.7');
   await expect(page.getByText('the receipt holds already')).toBeVisible();
+  await expect(page.getByText('This device worked it out')).toBeVisible();
   await expectCounts(page, 9, 1);
   await expectAccessible(page);
 
   await context.setOffline(false);
   await expectCounts(page, 9, 9);
+  await expect(page.getByText('This device worked it out')).toBeHidden();
+  await expect(page.getByTestId('predicted')).toHaveText('63');
   const events = await ownEvents();
   expect(events.map(({ cell }) => cell)).toEqual([
     'base/1/thickness',

@@ -1,7 +1,6 @@
 import { Cell, HeadCell, RowHead, Table, TableBody, TableFoot, TableHead } from '@/components/table/table';
 import { pointsAsText } from '@/components/ui/points-text';
 import { Heading } from '@/components/ui/titles';
-import { isOneScale } from '@/lib/practicals/both-scales';
 import type { ScoreExplanation } from '@/lib/practicals/explain-score';
 import type { Points, Rubric } from '@/lib/scoring';
 import { LossCause, LossSizes } from './loss-cause';
@@ -17,8 +16,8 @@ interface LossTableProps {
 
 /** Every lost point in a row of its own: target, reading, band, points and their share; they add up to the score. */
 export function LossTable({ rubric, explanation, heading, heldFrom }: LossTableProps) {
-  const { rows, total } = explanation;
-  const one = isOneScale(rubric);
+  const { rows, possible, total } = explanation;
+  const one = possible === total;
   return (
     <section>
       <Heading className="border-b-outline border-ink pb-1">{heading}</Heading>
@@ -54,8 +53,9 @@ export function LossTable({ rubric, explanation, heading, heldFrom }: LossTableP
 }
 
 function Sums({ rubric, explanation, heldFrom }: Omit<LossTableProps, 'heading'>) {
-  const { lost, kept, possible, bonus, held, rest, score, floorGives, floorGivesOfTotal } = explanation;
-  const one = isOneScale(rubric);
+  const { lost, kept, possible, total, bonus, held, rest, score, floorGives, floorGivesOfTotal } =
+    explanation;
+  const one = possible === total;
   return (
     <TableFoot className="[&_tr+tr]:border-t [&_tr+tr]:border-hair">
       <Sum label="lost" points={lost.points} ofTotal={lost.ofTotal} one={one} />

@@ -1,14 +1,26 @@
 import 'server-only';
+import type { Transaction } from '@/db/client';
 import { selectOwnAttempt, selectOwnEvents } from '@/db/queries/own';
 import { ownSittingInput } from '@/lib/contracts/own';
-import { type OwnEvent, ownRecordOf } from '@/lib/practicals/own-record';
+import { explainScore, type ScoreExplanation } from '@/lib/practicals/explain-score';
+import { type OwnEvent, type OwnRecord, ownRecordOf } from '@/lib/practicals/own-record';
 import { type Task, taskSchema } from '@/lib/practicals/task';
 import type { Policies, Rubric } from '@/lib/scoring';
 import { rubricFormSchema } from '@/lib/scoring/rubric-form-schema';
 import { rubricSchema } from '@/lib/scoring/schemas';
+import { loadPricing } from '../pricing/load-pricing';
+import { sheetUnder } from '../pricing/price-work';
 import { defineVerb } from '../verb';
 import { stageOf, type TaskStage } from './list-tasks';
 import { ownEventOf } from './own-event';
+
+/** What locked readings come to by what prices this attempt: the figure that the result will stand beside. */
+export interface OwnPrediction {
+  /** The lock that it is of. */
+  receipt: string;
+  rubric: Rubric;
+  explanation: ScoreExplanation;
+}
 
 export interface OwnTaskView {
   sittingId: string;
@@ -25,6 +37,8 @@ export interface OwnTaskView {
   policies: Policies;
   /** The student's own events; nothing of the bench. */
   events: OwnEvent[];
+  /** Null until the readings are locked. */
+  prediction: OwnPrediction | null;
 }
 
 /** What a student was asked to make, what error costs, and what they have recorded of it themselves. */
@@ -35,6 +49,7 @@ export const readTask = defineVerb({
     const row = found(await selectOwnAttempt(tx, actor.schoolId, actor.personId, input.sittingId));
     authorize({ schoolId: row.schoolId, studentId: row.studentId });
     const events = (await selectOwnEvents(tx, actor.schoolId, [row.attemptId])).map(ownEventOf);
+    const record = ownRecordOf(events);
     const { sittingId, attemptId, attemptNumber, studentId, sectionName, period, dueOn, versionNumber } = row;
     return {
       sittingId,
@@ -44,12 +59,30 @@ export const readTask = defineVerb({
       sectionName,
       period,
       dueOn,
-      stage: stageOf(row, ownRecordOf(events).derived.lock !== null),
+      stage: stageOf(row, record.derived.lock !== null),
       versionNumber,
       task: taskSchema.parse(row.task),
       rubric: rubricSchema.parse(row.rubric),
       policies: rubricFormSchema.parse(row.form).policies,
       events,
+      prediction: await predictionOf(tx, actor.schoolId, attemptId, record),
     };
   },
 });
+
+async function predictionOf(
+  tx: Transaction,
+  schoolId: string,
+  attemptId: string,
+  { derived: { lock, attempt } }: OwnRecord,
+): Promise<OwnPrediction | null> {
+  if (!lock) return null;
+  const pricing = (await loadPricing(tx, schoolId, [attemptId])).get(attemptId);
+  if (!pricing) throw new Error(`attempt ${attemptId} has no price`);
+  const { rubric } = pricing;
+  return {
+    receipt: lock.receipt,
+    rubric,
+    explanation: explainScore(rubric, sheetUnder(pricing, attempt), 0),
+  };
+}

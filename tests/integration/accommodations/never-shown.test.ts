@@ -162,18 +162,22 @@ describe('a modified rubric is never shown', () => {
     );
   });
 
-  it('to students before the results: neither the student it is for nor another', async () => {
+  it('to students before the results: another sees nothing of it; the student it is for, once locked, what it comes to', async () => {
     expect(ACTIONS.filter((action) => mayEver('student', action))).toEqual([
       'task.read',
       'own.read',
       'own.record',
       'result.read',
     ]);
-    for (const student of stage.students) {
-      expectNothingOf(
-        wire([await listTasks(student, {}), await readTask(student, { sittingId: stage.sittingId })]),
-      );
-    }
+    const [own, other] = stage.students;
+    const { sittingId } = stage;
+    expectNothingOf(wire([await listTasks(other, {}), await readTask(other, { sittingId })]));
+    const { prediction, ...task } = value(await readTask(own, { sittingId }));
+    expectNothingOf(wire([await listTasks(own, {})]) + JSON.stringify(task));
+    expect(prediction?.explanation.lost.points).toBe(100);
+    const payload = JSON.stringify(prediction);
+    expect(payload).not.toMatch(/modif|accommod|excus|splint|magnifier/i);
+    expect(payload).not.toContain(accommodationId);
   });
 
   it('in the lists of a teacher’s work: periods, roster, sittings', async () => {
@@ -270,7 +274,10 @@ describe('once the results are out', () => {
       await listTasks(students[1], {}),
     ];
     expectNothingOf(wire(answers));
-    expectNothingOf(wire([await readTask(students[0], { sittingId }), await listTasks(students[0], {})]));
+    const { prediction, ...task } = value(await readTask(students[0], { sittingId }));
+    expectNothingOf(JSON.stringify(task) + wire([await listTasks(students[0], {})]));
+    const { predicted } = value(await readResult(students[0], { sittingId }));
+    expect(prediction?.explanation.score).toBe(predicted);
   });
 
   it('the exports hold the score and nothing that tells how it was priced', async () => {

@@ -1,10 +1,15 @@
 import { describe, expect, test } from 'vitest';
 import type { Actor } from '@/lib/auth/actor';
+import { readResult } from '@/lib/data/own/read-result';
 import { readTask } from '@/lib/data/own/read-task';
+import { previewPublication } from '@/lib/data/sittings/preview-publication';
+import { publishSitting } from '@/lib/data/sittings/publish-sitting';
+import { explainScore } from '@/lib/practicals/explain-score';
 import { ownRecordOf, predictedSheet } from '@/lib/practicals/own-record';
 import { receiptOf } from '@/lib/sync/receipt';
+import { modifyFor, WIDER } from '../../support/accommodations';
 import { value } from '../../support/answers';
-import { lockPrediction, readingsOf } from '../../support/mark-pieces';
+import { lockPrediction, markPieces, readingsOf } from '../../support/mark-pieces';
 import { outcomes, push } from '../../support/push-events';
 import { eventOf, type RoundStage, sheetOf, stageRound, storedEvents } from '../../support/round-stage';
 
@@ -75,10 +80,50 @@ describe('locking own readings', () => {
     expect(record.derived.lock?.receipt).toBe(await receiptOf(attemptId, view.events));
     const sheet = predictedSheet(view.rubric, record);
     expect(sheet.lost).toBe(300);
+    expect(view.prediction).toEqual({
+      receipt: record.derived.lock?.receipt,
+      rubric: view.rubric,
+      explanation: explainScore(view.rubric, sheet, 0),
+    });
     expect(await sheetOf(attemptId, 'own')).toMatchObject({
       lost_points: 300,
       provisional_points: sheet.provisional,
     });
+  });
+
+  test('predicts by what prices the student: the figure and the rows that the result will have', async () => {
+    const stage = await stageRound();
+    const { teacher, students, sittingId, attempts, practical } = stage;
+    const [ana, ben] = students;
+    await modifyFor(stage, {
+      modification: {
+        ...WIDER,
+        excused: [{ lineId: 'divider', axis: null }],
+        checks: [],
+      },
+    });
+    const short = { 'base/1/length': '6 7/8', 'divider/2/width': '2 1/16' };
+    const open = value(await readTask(ana, { sittingId }));
+    expect(open.prediction).toBeNull();
+    for (const [index, student] of [ana, ben].entries()) {
+      await lockPrediction(student, sittingId, attempts[index] ?? '', practical.rubric, short);
+      await markPieces(teacher, sittingId, attempts[index] ?? '', practical.rubric);
+    }
+    const seen = value(await previewPublication(teacher, { sittingId })).seen;
+    const before = value(await readTask(ana, { sittingId }));
+    value(await publishSitting(teacher, { sittingId, seen, withoutUnread: false, lateLocks: 'count' }));
+    const result = value(await readResult(ana, { sittingId }));
+    if (!result.ownSheet || !before.prediction) throw new Error('a locked attempt is predicted');
+    expect(before.prediction.explanation).toEqual(explainScore(result.rubric, result.ownSheet, 0));
+    expect(before.prediction.explanation.score).toBe(result.predicted);
+    expect(before.prediction.rubric).toEqual(result.rubric);
+    // What the task tells of prices beforehand is the sitting's, whoever looks.
+    expect(before.rubric).toEqual(practical.rubric);
+
+    const other = value(await readTask(ben, { sittingId }));
+    expect(other.prediction?.rubric).toEqual(practical.rubric);
+    expect(other.prediction?.explanation.score).toBeLessThan(result.predicted ?? 0);
+    expect(JSON.stringify(before)).not.toMatch(/modif|accommod|excus/i);
   });
 
   test('with a receipt of other readings is refused, and loses nothing', async () => {

@@ -84,11 +84,17 @@ describe('what reaches a student before publication', () => {
   });
 
   test('holds no reading and no score of the bench, no standing, and nothing of another student', async () => {
+    const { prediction, ...task } = value(await readTask(ana, { sittingId: stage.sittingId }));
     const answers = [
       await listTasks(ana, {}),
-      await readTask(ana, { sittingId: stage.sittingId }),
+      task,
       await readResult(ana, { sittingId: stage.sittingId }),
     ].map((answer) => JSON.stringify(answer));
+    // What the own readings come to is the student's own; it is looked through for the others' marks alone.
+    expect(prediction?.explanation.lost.points).toBe(200);
+    for (const mark of [...marksOf(OF_THE_BENCH), ...marksOf(OF_BEN)]) {
+      expect(JSON.stringify(prediction)).not.toContain(mark);
+    }
     for (const answer of answers) {
       for (const mark of [...marksOf(OF_THE_BENCH), ...marksOf(OF_BEN)]) expect(answer).not.toContain(mark);
       expect(answer).not.toContain('"bench"');

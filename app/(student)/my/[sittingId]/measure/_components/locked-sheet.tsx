@@ -6,6 +6,7 @@ import { CopyButton } from '@/components/ui/copy-button';
 import { sayMoment } from '@/components/ui/days';
 import { pointsAsText } from '@/components/ui/points-text';
 import { Heading } from '@/components/ui/titles';
+import type { OwnPrediction } from '@/lib/data/own/read-task';
 import { explainScore } from '@/lib/practicals/explain-score';
 import { type OwnRecord, predictedSheet } from '@/lib/practicals/own-record';
 import type { Rubric } from '@/lib/scoring';
@@ -14,15 +15,20 @@ interface LockedSheetProps {
   lock: { receipt: string; at: string };
   record: OwnRecord;
   rubric: Rubric;
+  /** What the server makes of this lock; null while it has not told. */
+  prediction: OwnPrediction | null;
   sent: boolean;
   /** The results are out. */
   over: boolean;
 }
 
 /** The receipt of a lock, large enough to be read off the screen, and what the own readings would score. */
-export function LockedSheet({ lock, record, rubric, sent, over }: LockedSheetProps) {
-  const sheet = predictedSheet(rubric, record);
-  const explanation = explainScore(rubric, sheet, 0);
+export function LockedSheet({ lock, record, rubric, prediction, sent, over }: LockedSheetProps) {
+  const shown = prediction ?? {
+    rubric,
+    explanation: explainScore(rubric, predictedSheet(rubric, record), 0),
+  };
+  const { explanation } = shown;
   const unreadable = record.derived.unreadable.length;
   return (
     <div className="mt-3 grid grid-cols-[minmax(0,1fr)] gap-6">
@@ -52,15 +58,18 @@ export function LockedSheet({ lock, record, rubric, sent, over }: LockedSheetPro
               {pointsAsText(explanation.kept.ofTotal)} before rounding, by your own readings
               {unreadable > 0 ? `; ${unreadable} you couldn’t read cost nothing here` : ''}.
               {over ? '' : ' The bench has not measured yet.'}
+              {prediction
+                ? ''
+                : ' This device worked it out; once your readings are sent, it is priced as your result will be.'}
             </p>
           </div>
           <p className="tnum text-score leading-none font-[680]" data-testid="predicted">
-            {sheet.provisional === null ? '–' : pointsAsText(sheet.provisional)}
+            {explanation.score === null ? '–' : pointsAsText(explanation.score)}
           </p>
         </div>
-        <ScoreRule bench={null} own={explanation.kept.ofTotal} total={sheet.total} className="mt-3" />
+        <ScoreRule bench={null} own={explanation.kept.ofTotal} total={explanation.total} className="mt-3" />
       </section>
-      <LossTable rubric={rubric} explanation={explanation} heading="Where your prediction loses" />
+      <LossTable rubric={shown.rubric} explanation={explanation} heading="Where your prediction loses" />
     </div>
   );
 }

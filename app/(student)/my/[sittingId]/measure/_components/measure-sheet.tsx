@@ -1,6 +1,7 @@
 'use client';
 
-import { useSyncExternalStore } from 'react';
+import { useRouter } from 'next/navigation';
+import { useEffect, useSyncExternalStore } from 'react';
 import { TaskHead } from '@/app/(student)/my/_components/task-head';
 import { EmptyState } from '@/components/ui/empty-state';
 import type { OwnTaskView } from '@/lib/data/own/read-task';
@@ -13,6 +14,9 @@ import { MeasureBoard } from './measure-board';
 export function MeasureSheet({ session, task }: { session: OwnSession; task: OwnTaskView }) {
   const view = useSyncExternalStore(session.subscribe, session.getView, session.getView);
   const { lock } = view.record.derived;
+  const prediction = task.prediction?.receipt === lock?.receipt ? task.prediction : null;
+  const sent = view.unsent === 0;
+  useRefreshWhen(lock !== null && sent && prediction === null);
   const over = task.stage === 'published' || task.stage === 'closed';
   if (!lock && !over) return <MeasureBoard session={session} view={view} task={task} />;
   return (
@@ -25,7 +29,8 @@ export function MeasureSheet({ session, task }: { session: OwnSession; task: Own
           lock={lock}
           record={view.record}
           rubric={task.rubric}
-          sent={view.unsent === 0}
+          prediction={prediction}
+          sent={sent}
           over={over}
         />
       ) : (
@@ -35,4 +40,12 @@ export function MeasureSheet({ session, task }: { session: OwnSession; task: Own
       )}
     </>
   );
+}
+
+/** Asks the server once what it makes of a lock that has just reached it. */
+function useRefreshWhen(isDue: boolean) {
+  const router = useRouter();
+  useEffect(() => {
+    if (isDue && navigator.onLine) router.refresh();
+  }, [isDue, router]);
 }
