@@ -125,3 +125,9 @@ GRANT SELECT, INSERT, UPDATE (undone_by, undone_at) ON sitting_moves TO trymark_
 GRANT SELECT, INSERT ON accommodation_reasons TO trymark_app;
 --> statement-breakpoint
 CREATE TRIGGER never_changed BEFORE UPDATE OR DELETE ON accommodation_reasons FOR EACH ROW EXECUTE FUNCTION refuse_change();
+--> statement-breakpoint
+CREATE TRIGGER ended_for_good BEFORE UPDATE ON accommodations FOR EACH ROW WHEN (old.ended_at IS NOT NULL) EXECUTE FUNCTION refuse_change();
+--> statement-breakpoint
+CREATE TRIGGER ended_for_good BEFORE UPDATE ON rubric_approvals FOR EACH ROW WHEN (old.ended_at IS NOT NULL) EXECUTE FUNCTION refuse_change();
+--> statement-breakpoint
+CREATE TRIGGER undone_for_good BEFORE UPDATE ON sitting_moves FOR EACH ROW WHEN (old.undone_at IS NOT NULL) EXECUTE FUNCTION refuse_change();

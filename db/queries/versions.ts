@@ -1,7 +1,7 @@
 import { and, asc, desc, eq, getTableColumns, isNull, or, sql } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
 import { people, rubricVersions, schools, sectionStaff, sections, sittingMoves, sittings } from '@/db/schema';
-import { teacherIds } from './sections';
+import { schoolToday, teacherIds } from './sections';
 
 const publisherName = sql<string>`${people.givenName} || ' ' || ${people.familyName}`;
 
@@ -24,7 +24,7 @@ export function selectVersionsInFull(tx: Transaction, schoolId: string, practica
 }
 
 /**
- * Who teaches a section whose sitting stands under a version of the practical, or stood under it before it was moved,
+ * Who teaches a section today whose sitting stands under a version of the practical, or stood under it before it was moved,
  * with that sitting.
  */
 export function selectTeachersUnder(tx: Transaction, schoolId: string, practicalId: string) {
@@ -46,6 +46,7 @@ export function selectTeachersUnder(tx: Transaction, schoolId: string, practical
         eq(sectionStaff.duty, 'teacher'),
       ),
     )
+    .innerJoin(schools, eq(schools.id, sittings.schoolId))
     .innerJoin(sections, and(eq(sections.schoolId, sittings.schoolId), eq(sections.id, sittings.sectionId)))
     .leftJoin(
       sittingMoves,
@@ -62,7 +63,13 @@ export function selectTeachersUnder(tx: Transaction, schoolId: string, practical
         ),
       ),
     )
-    .where(and(eq(sittings.schoolId, schoolId), eq(sittings.practicalId, practicalId)))
+    .where(
+      and(
+        eq(sittings.schoolId, schoolId),
+        eq(sittings.practicalId, practicalId),
+        or(isNull(sectionStaff.toDay), sql`${sectionStaff.toDay} >= ${schoolToday}`),
+      ),
+    )
     .orderBy(asc(sections.period), asc(sections.name));
 }
 

@@ -92,12 +92,36 @@ describe('sign-in and the worker', () => {
 });
 
 describe('what was recorded or published', () => {
-  const kept = ['rubric_versions', 'reading_events', 'publications', 'results', 'access_log', 'export_files'];
+  const kept = [
+    ...['rubric_versions', 'reading_events', 'publications', 'results', 'access_log', 'export_files'],
+    'accommodation_reasons',
+  ];
 
   it.each(kept)('%s cannot be changed or deleted, even by the owner of the tables', async (table) => {
     expect((await owner`select 1 from ${owner(table)}`).count).toBeGreaterThan(0);
     expect(await codeOf('owner', (sql) => sql`update ${sql(table)} set school_id = school_id`)).toBe('23000');
     expect(await codeOf('owner', (sql) => sql`delete from ${sql(table)}`)).toBe('23000');
+  });
+
+  it.each([
+    ['accommodations', 'ended_at', 'ended_by', 'made_by'],
+    ['rubric_approvals', 'ended_at', 'ended_by', 'approved_by'],
+    ['sitting_moves', 'undone_at', 'undone_by', 'moved_by'],
+  ])('%s can be ended once, and nothing else of them be changed', async (table, at, by, maker) => {
+    const change = (sql: postgres.TransactionSql, values: string) =>
+      sql.unsafe(`update ${table} set ${values} where ${at} is null`);
+    const end = `${at} = now(), ${by} = ${maker}`;
+    const standing = (sql: postgres.TransactionSql) =>
+      sql.unsafe(`select 1 from ${table} where ${at} is null`).then(({ count }) => expect(count).toBe(1));
+    expect(await codeOf('trymark_app', standing)).toBe('allowed');
+    expect(await codeOf('trymark_app', (sql) => change(sql, end))).toBe('allowed');
+    expect(await codeOf('trymark_app', (sql) => change(sql, `${maker} = ${maker}`))).toBe(DENIED);
+    expect(
+      await codeOf('trymark_app', async (sql) => {
+        await change(sql, end);
+        await sql.unsafe(`update ${table} set ${at} = null, ${by} = null`);
+      }),
+    ).toBe('23000');
   });
 
   it('other rows can be, so that the refusal above means something', async () => {

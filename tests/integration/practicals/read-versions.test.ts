@@ -169,6 +169,16 @@ describe('who may read a version', () => {
     expect(value(await readVersionSheet(mover, { practicalId, number: 1 })).ownSittings).toEqual([]);
   });
 
+  it('who no longer teaches the section may not', async () => {
+    const substitute = await makeActor(school, 'teacher');
+    await given(substitute, first.versionId);
+    expect(await numbersFor(substitute)).toEqual([1]);
+    await ownerSql()`
+      update section_staff set to_day = current_date - 7 where person_id = ${substitute.personId}`;
+    expect(await numbersFor(substitute)).toBe('not_found');
+    expect(code(await readVersion(substitute, { versionId: first.versionId }))).toBe('not_found');
+  });
+
   it('an aide of the section may not', async () => {
     const aide = await makeActor(school, 'aide');
     expect(code(await readVersionSheet(aide, { practicalId, number: 1 }))).toBe('forbidden');
