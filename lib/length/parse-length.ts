@@ -28,7 +28,12 @@ const REASONS: [RegExp, string][] = [
     "Only inches, millimetres and feet with a ' mark are read.",
   ],
 ];
-const NOT_A_LENGTH = 'It cannot be read as a length. Type it like 1 3/8, 1.375 or 35 mm.';
+const EXAMPLES: Record<Unit, string> = { in: '1 3/8, 1.375 or 35 mm', mm: '35, 35.5 or 1 3/8 in' };
+const FIRST_EXAMPLE: Record<Unit, string> = { in: '1 3/8 or 35 mm', mm: '35 or 1 3/8 in' };
+
+function notALength(unit: Unit): string {
+  return `It cannot be read as a length. Type it like ${EXAMPLES[unit]}.`;
+}
 
 /** One spelling for every sign: ' and " for feet and inches, - for dashes, / for fractions, one space. */
 function normalizeText(text: string): string {
@@ -91,9 +96,9 @@ function toTicks(value: Fraction, negative: boolean, unit: Unit): ParsedLength {
 export function parseLength(text: string, unit: Unit): ParsedLength {
   if (text.length > LONGEST_TEXT) return refuse(`It is longer than ${LONGEST_TEXT} characters.`);
   const normal = normalizeText(text);
-  if (normal === '') return refuse('Type a length, such as 1 3/8 or 35 mm.');
+  if (normal === '') return refuse(`Type a length, such as ${FIRST_EXAMPLE[unit]}.`);
   const groups = (FEET_ALONE.exec(normal) ?? WITH_INCHES.exec(normal))?.groups;
-  if (!groups) return refuse(REASONS.find(([pattern]) => pattern.test(normal))?.[1] ?? NOT_A_LENGTH);
+  if (!groups) return refuse(REASONS.find(([pattern]) => pattern.test(normal))?.[1] ?? notALength(unit));
 
   const { feet, mark, sign } = groups;
   if (feet !== undefined && mark === 'mm') return refuse('Feet go with inches, not with millimetres.');

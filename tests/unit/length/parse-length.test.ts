@@ -133,6 +133,16 @@ describe('what is read', () => {
 });
 
 describe('what is refused, with a reason', () => {
+  it('with examples in the unit of the sheet first', () => {
+    expect(parseLength('long', 'in')).toMatchObject({
+      reason: expect.stringMatching(/like 1 3\/8, 1\.375 or 35 mm\.$/),
+    });
+    expect(parseLength('long', 'mm')).toMatchObject({
+      reason: expect.stringMatching(/like 35, 35\.5 or 1 3\/8 in\.$/),
+    });
+    expect(parseLength('', 'mm')).toMatchObject({ reason: 'Type a length, such as 35 or 1 3/8 in.' });
+  });
+
   it.each([
     ['', 'Type a length, such as 1 3/8 or 35 mm.'],
     [' \t ', 'Type a length, such as 1 3/8 or 35 mm.'],
