@@ -1,4 +1,4 @@
-import { aliasedTable, and, asc, count, desc, eq, gt, sql } from 'drizzle-orm';
+import { aliasedTable, and, asc, count, desc, eq, gt, not, sql } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
 import { accessLog, people } from '@/db/schema';
 
@@ -14,6 +14,9 @@ export interface LogFilter {
 const actors = aliasedTable(people, 'log_actors');
 const subjects = aliasedTable(people, 'log_subjects');
 
+/** Whose rubric is modified is for the teacher and the head alone; that somebody's was stays in the log. */
+const isUnnamed = sql`${accessLog.action} like 'accommodation.%'`;
+
 function filtered(schoolId: string, timeZone: string, filter: LogFilter) {
   const { from, to, action, actorId, aboutPersonId } = filter;
   return and(
@@ -22,7 +25,7 @@ function filtered(schoolId: string, timeZone: string, filter: LogFilter) {
     to ? sql`${accessLog.at} < (${to}::date + 1)::timestamp at time zone ${timeZone}` : undefined,
     action ? eq(accessLog.action, action) : undefined,
     actorId ? eq(accessLog.actorId, actorId) : undefined,
-    aboutPersonId ? eq(accessLog.aboutPersonId, aboutPersonId) : undefined,
+    aboutPersonId ? and(eq(accessLog.aboutPersonId, aboutPersonId), not(isUnnamed)) : undefined,
   );
 }
 
@@ -42,7 +45,7 @@ export async function selectLog(
       actorId: accessLog.actorId,
       actorRole: accessLog.actorRole,
       actorName: sql<string | null>`btrim(${actors.givenName} || ' ' || ${actors.familyName})`,
-      aboutPersonId: accessLog.aboutPersonId,
+      aboutPersonId: subjects.id,
       aboutName: sql<string | null>`btrim(${subjects.givenName} || ' ' || ${subjects.familyName})`,
       subjectKind: accessLog.subjectKind,
       details: accessLog.details,
@@ -51,7 +54,11 @@ export async function selectLog(
     .leftJoin(actors, and(eq(actors.schoolId, accessLog.schoolId), eq(actors.id, accessLog.actorId)))
     .leftJoin(
       subjects,
-      and(eq(subjects.schoolId, accessLog.schoolId), eq(subjects.id, accessLog.aboutPersonId)),
+      and(
+        eq(subjects.schoolId, accessLog.schoolId),
+        eq(subjects.id, accessLog.aboutPersonId),
+        not(isUnnamed),
+      ),
     )
     .where(where)
     .orderBy(desc(accessLog.at), desc(accessLog.id))

@@ -90,6 +90,14 @@ export async function updateDraft(
   return row;
 }
 
+/** What a draft had replaced can no longer be put back. */
+export async function forgetReplaced(tx: Transaction, schoolId: string, practicalId: string): Promise<void> {
+  await tx
+    .update(practicalDrafts)
+    .set({ replaced: null })
+    .where(and(eq(practicalDrafts.schoolId, schoolId), eq(practicalDrafts.practicalId, practicalId)));
+}
+
 export async function selectLatestVersion(tx: Transaction, schoolId: string, practicalId: string) {
   const [row] = await tx
     .select()

@@ -1,5 +1,11 @@
 import 'server-only';
-import { insertVersion, lockPractical, selectDraft, selectLatestVersion } from '@/db/queries/practicals';
+import {
+  forgetReplaced,
+  insertVersion,
+  lockPractical,
+  selectDraft,
+  selectLatestVersion,
+} from '@/db/queries/practicals';
 import { publishVersionInput } from '@/lib/contracts/practicals';
 import { departmentDifferences } from '@/lib/practicals/department-differences';
 import { parseDraft } from '@/lib/practicals/parse-draft';
@@ -48,6 +54,8 @@ export const publishVersion = defineVerb({
       differenceReason,
       publishedBy: personId,
     });
+    // What is published is meant: a draft from before it is not put back over it by one press.
+    if (draft.replaced !== null) await forgetReplaced(tx, schoolId, row.id);
     await log({
       subjectKind: 'rubric version',
       subjectId: versionId,

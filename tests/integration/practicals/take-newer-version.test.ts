@@ -98,6 +98,15 @@ describe('taking a newer version over', () => {
     expect(code(await putBackDraft(dayo, { practicalId: copyId, revision: later + 1 }))).toBe('conflict');
   });
 
+  it('cannot be put back over what was published since', async () => {
+    const { copyId, revision, versionId } = await original();
+    const taken = valueFrom(await takeNewerVersion(dayo, { practicalId: copyId, revision, versionId }));
+    await publishDraft(dayo, copyId);
+    expect(valueFrom(await readPractical(dayo, { practicalId: copyId })).tookOver).toBeNull();
+    const { revision: now } = taken;
+    expect(code(await putBackDraft(dayo, { practicalId: copyId, revision: now }))).toBe('conflict');
+  });
+
   it('is not for a variant, which has sizes of its own', async () => {
     const { copyId, revision, versionId } = await original();
     await ownerSql()`update practicals set source_kind = 'variant' where id = ${copyId}`;
