@@ -57,7 +57,7 @@ export function LockedSheet({ lock, record, rubric, prediction, sent, over }: Lo
             <p className="max-w-[40ch] text-label text-ink-2">
               {pointsAsText(explanation.kept.ofTotal)} before rounding, by your own readings
               {unreadable > 0 ? `; ${unreadable} you couldn’t read cost nothing here` : ''}.
-              {over ? '' : ' The bench has not measured yet.'}
+              {over ? '' : ' The bench’s score stands beside it once the results are out.'}
               {prediction
                 ? ''
                 : ' This device worked it out; once your readings are sent, it is priced as your result will be.'}
