@@ -1,7 +1,7 @@
 'use client';
 
 import { Dialog as Radix } from 'radix-ui';
-import type { ReactNode } from 'react';
+import { type ReactNode, useRef } from 'react';
 import { Button } from './button';
 import { classNames } from './class-names';
 
@@ -32,6 +32,7 @@ export function Dialog(props: DialogProps) {
     children,
     className,
   } = props;
+  const openedFrom = useRef<Element | null>(null);
   return (
     <Radix.Root open={open} onOpenChange={onOpenChange}>
       {trigger ? <Radix.Trigger asChild>{trigger}</Radix.Trigger> : null}
@@ -39,6 +40,14 @@ export function Dialog(props: DialogProps) {
         <Radix.Overlay className={VEIL} />
         <Radix.Content
           className={classNames(SHEET, className)}
+          onOpenAutoFocus={() => {
+            openedFrom.current = document.activeElement;
+          }}
+          onCloseAutoFocus={(event) => {
+            if (trigger) return;
+            event.preventDefault();
+            giveBack(openedFrom.current);
+          }}
           {...(description ? {} : { 'aria-describedby': undefined })}
         >
           <div className="mb-4 flex items-start justify-between gap-4 border-b-edge border-ink pb-2">
@@ -55,4 +64,11 @@ export function Dialog(props: DialogProps) {
       </Radix.Portal>
     </Radix.Root>
   );
+}
+
+/** The focus goes back to what opened the dialog, unless the caller has led it elsewhere. */
+function giveBack(opener: Element | null): void {
+  const { activeElement, body } = document;
+  if (activeElement !== null && activeElement !== body) return;
+  if (opener instanceof HTMLElement && opener.isConnected) opener.focus({ preventScroll: true });
 }

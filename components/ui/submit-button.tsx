@@ -8,16 +8,18 @@ interface SubmitButtonProps extends ButtonProps {
   pendingLabel?: string;
 }
 
-export function SubmitButton({
-  pendingLabel,
-  kind = 'act',
-  children,
-  disabled,
-  ...props
-}: SubmitButtonProps) {
+/** While the form is on its way it cannot be pressed again, and keeps the focus. */
+export function SubmitButton({ pendingLabel, kind = 'act', children, onClick, ...props }: SubmitButtonProps) {
   const { pending } = useFormStatus();
   return (
-    <Button type="submit" kind={kind} disabled={disabled || pending} aria-busy={pending} {...props}>
+    <Button
+      type="submit"
+      kind={kind}
+      aria-disabled={pending || undefined}
+      aria-busy={pending}
+      {...props}
+      onClick={pending ? (event) => event.preventDefault() : onClick}
+    >
       {pending && pendingLabel ? pendingLabel : children}
     </Button>
   );

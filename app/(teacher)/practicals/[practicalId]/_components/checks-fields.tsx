@@ -1,10 +1,11 @@
 'use client';
 
+import { flushSync } from 'react-dom';
 import { Button } from '@/components/ui/button';
 import { SelectField } from '@/components/ui/select-field';
 import { type DraftCheck, freshId, type PracticalDraft } from '@/lib/practicals/draft';
 import { DraftField } from './draft-field';
-import { useEditor } from './editor-context';
+import { fieldId, useEditor } from './editor-context';
 
 interface ChecksFieldsProps {
   /** Where the list stands in the draft, and how to find it in a copy. */
@@ -12,6 +13,13 @@ interface ChecksFieldsProps {
   checks: readonly DraftCheck[];
   listIn(draft: PracticalDraft): DraftCheck[] | null;
   emptyText: string;
+}
+
+/** Changes the list and goes on in the first of these fields that is there then. */
+function changeAndGo(work: () => void, ...paths: string[]): void {
+  flushSync(work);
+  const field = paths.map((path) => document.getElementById(fieldId(path))).find((each) => each !== null);
+  field?.focus();
 }
 
 const MOST = { checks: 20, levels: 10 };
@@ -30,12 +38,21 @@ export function ChecksFields({ base, checks, listIn, emptyText }: ChecksFieldsPr
       <ol className="grid gap-6">
         {checks.map((check, index) => (
           <li key={check.id} className="border-b border-hair pb-4">
-            <CheckFields base={`${base}.${index}`} {...{ check, index, change }} />
+            <CheckFields list={base} base={`${base}.${index}`} {...{ check, index, change }} />
           </li>
         ))}
       </ol>
       {checks.length < MOST.checks ? (
-        <Button className="mt-4" onClick={() => change((list) => void list.push(newCheck(list)))}>
+        <Button
+          id={fieldId(`${base}.add`)}
+          className="mt-4"
+          onClick={() =>
+            changeAndGo(
+              () => change((list) => void list.push(newCheck(list))),
+              `${base}.${checks.length}.label`,
+            )
+          }
+        >
           add a check
         </Button>
       ) : null}
@@ -56,17 +73,18 @@ function newCheck(list: readonly DraftCheck[]): DraftCheck {
 }
 
 interface CheckFieldsProps {
+  list: string;
   base: string;
   check: DraftCheck;
   index: number;
   change(work: (list: DraftCheck[]) => void): void;
 }
 
-function CheckFields({ base, check, index, change }: CheckFieldsProps) {
+function CheckFields({ list, base, check, index, change }: CheckFieldsProps) {
   const name = check.label || `check ${index + 1}`;
   const changeThis = (work: (check: DraftCheck) => void) =>
-    change((list) => {
-      const found = list[index];
+    change((all) => {
+      const found = all[index];
       if (found) work(found);
     });
   return (
@@ -78,7 +96,14 @@ function CheckFields({ base, check, index, change }: CheckFieldsProps) {
           size="small"
           className="px-0"
           aria-label={`take out ${name}`}
-          onClick={() => change((list) => void list.splice(index, 1))}
+          onClick={() =>
+            changeAndGo(
+              () => change((all) => void all.splice(index, 1)),
+              `${list}.${index}.label`,
+              `${list}.${index - 1}.label`,
+              `${list}.add`,
+            )
+          }
         >
           take out
         </Button>
@@ -100,10 +125,15 @@ function CheckFields({ base, check, index, change }: CheckFieldsProps) {
                 className="px-0"
                 aria-label={`take out fault ${place} of ${name}`}
                 onClick={() =>
-                  changeThis((each) => {
-                    each.levels.splice(place, 1);
-                    if (each.assume !== null && each.assume >= each.levels.length) each.assume = 0;
-                  })
+                  changeAndGo(
+                    () =>
+                      changeThis((each) => {
+                        each.levels.splice(place, 1);
+                        if (each.assume !== null && each.assume >= each.levels.length) each.assume = 0;
+                      }),
+                    `${base}.levels.${place}.label`,
+                    `${base}.levels.${place - 1}.label`,
+                  )
                 }
               >
                 out
@@ -116,7 +146,12 @@ function CheckFields({ base, check, index, change }: CheckFieldsProps) {
             kind="quiet"
             size="small"
             className="px-0"
-            onClick={() => changeThis((each) => void each.levels.push({ label: '', lose: '' }))}
+            onClick={() =>
+              changeAndGo(
+                () => changeThis((each) => void each.levels.push({ label: '', lose: '' })),
+                `${base}.levels.${check.levels.length}.label`,
+              )
+            }
           >
             add a fault
           </Button>
