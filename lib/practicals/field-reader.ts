@@ -95,7 +95,9 @@ export class FieldReader {
     if (points === null) {
       this.refuse(
         path,
-        text.trim() === '' ? 'Type points, such as 3 or 1.5.' : 'Points are a number such as 3 or 1.5.',
+        text.trim() === ''
+          ? 'Type points, such as 3 or 1.5.'
+          : 'Points are a number such as 3 or 1.25, with two decimals at most.',
       );
       return 0;
     }

@@ -283,6 +283,8 @@ export function checksEffect(rubric: Rubric, lineId: string): string {
   const piece = attempt.pieces.find((each) => each.lineId === lineId && each.ordinal === 1);
   if (piece) piece.checks = worstOf(line.checks);
   const faults =
-    line.checks.length === 1 ? `fails ${line.checks[0]?.label}` : `fails all ${line.checks.length} checks`;
+    line.checks.length === 1
+      ? `fails ${line.checks[0]?.label}`
+      : `fails ${line.checks.length === 2 ? 'both' : `all ${line.checks.length}`} checks`;
   return `${pieceLabel(line, 1)} on target that ${faults} loses ${inBoth(rubric, lostBy(rubric, attempt))}.`;
 }

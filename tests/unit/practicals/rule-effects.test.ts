@@ -76,7 +76,7 @@ describe('what a rule of the whole does, on the desk caddy', () => {
     expect(say('work')).toBe('Failing it loses 1 of 63, 1.59 of 100.');
     const { rubric } = comparedStarter('caddy');
     expect(checksEffect(rubric, 'end')).toBe(
-      'end 1 on target that fails all 2 checks loses 2 of 63, 3.17 of 100.',
+      'end 1 on target that fails both checks loses 2 of 63, 3.17 of 100.',
     );
     expect(checksEffect(rubric, 'none')).toBe('');
     expect(say('close')).toBe('Else, predicted 85 and measured 82: 1 more; a point further off: nothing.');
