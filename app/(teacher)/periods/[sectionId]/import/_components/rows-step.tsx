@@ -32,7 +32,7 @@ export function RowsStep({ state, looked }: RowsStepProps) {
   const why = whyNotYet(problems.length > 0 && !leaveOut, conflicts.length - Object.keys(choices).length);
   const lookAgain = () => state.lookAtText(roster);
   return (
-    <div className="grid gap-6">
+    <div className="grid grid-cols-[minmax(0,1fr)] gap-6">
       <header className="grid gap-2">
         <Verdict role="status">{sure ? sayGroups(groups) : 'Say which column holds what.'}</Verdict>
         <p className="text-label text-ink-2">
