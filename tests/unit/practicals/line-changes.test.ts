@@ -3,6 +3,7 @@ import { countLines } from '@/lib/practicals/count-lines';
 import { type DraftLine, emptyLine } from '@/lib/practicals/draft';
 import { isBlankLine, moveLine, undoLineChange } from '@/lib/practicals/line-changes';
 import { pasteRows } from '@/lib/practicals/paste-rows';
+import { reviewLabels } from '@/lib/practicals/review-labels';
 import { isSame, shareDraft } from '@/lib/practicals/share-unchanged';
 import { starterDraft } from '@/lib/practicals/starters';
 
@@ -59,6 +60,15 @@ it('knows a line that nothing was typed in', () => {
   for (const cells of [{ label: 'a' }, { quantity: '2' }, { note: 'x' }, { worth: '3' }, { checks: [] }]) {
     expect(isBlankLine({ ...emptyLine([]), ...cells })).toBe(false);
   }
+});
+
+it('says at a name that a line before has it too, and refuses neither', () => {
+  const named = ['side', 'end', ' Side ', '', '', 'side'].map((label) => ({ ...emptyLine([]), label }));
+  expect(reviewLabels(named).map(({ path, text }) => [path, text.slice(0, 6)])).toEqual([
+    ['lines.2.label', 'Line 1'],
+    ['lines.5.label', 'Line 1'],
+  ]);
+  expect(reviewLabels(lines)).toEqual([]);
 });
 
 it('counts pieces and sizes, and the lines whose pieces cannot be read', () => {

@@ -16,8 +16,8 @@ export function AsAllKey({ label, selected, onPress }: AsAllKeyProps) {
       onClick={onPress}
       className={
         selected
-          ? 'block h-9 w-full border-b-edge border-act bg-plate px-1 text-left text-label text-ink-2'
-          : 'block h-9 w-full border-b border-transparent px-1 text-left text-label text-ink-2 hover:border-ink'
+          ? 'block h-9 w-full scroll-mt-16 border-b-edge border-act bg-plate px-1 text-left text-label text-ink-2'
+          : 'block h-9 w-full scroll-mt-16 border-b border-transparent px-1 text-left text-label text-ink-2 hover:border-ink'
       }
     >
       as all

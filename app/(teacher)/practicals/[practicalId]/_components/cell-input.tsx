@@ -17,6 +17,8 @@ export interface CellInputProps {
   inHand: boolean;
   refused: boolean;
   found: boolean;
+  /** Something is said below the row about this cell. */
+  noted?: boolean;
   placeholder?: string;
   /** A running text, set smaller. */
   isNote?: boolean;
@@ -29,8 +31,21 @@ export interface CellInputProps {
 
 /** A cell of the sheet: a line to write on. What was typed stays as it is; at rest a size is set as a fraction. */
 export function CellInput(props: CellInputProps) {
-  const { path, label, text, sizeIn, inHand, refused, found, placeholder, isNote, onType, onFocus, ...rest } =
-    props;
+  const {
+    path,
+    label,
+    text,
+    sizeIn,
+    inHand,
+    refused,
+    found,
+    noted,
+    placeholder,
+    isNote,
+    onType,
+    onFocus,
+    ...rest
+  } = props;
   const id = fieldId(path);
   const read = sizeIn && !inHand && text !== '' ? parseLength(text, sizeIn) : null;
   const parts = read?.ok && sizeIn && read.unit === sizeIn ? lengthParts(read.ticks, sizeIn) : null;
@@ -41,7 +56,7 @@ export function CellInput(props: CellInputProps) {
         type="text"
         aria-label={label}
         aria-invalid={refused || undefined}
-        aria-describedby={refused || found ? `${id}-note` : undefined}
+        aria-describedby={refused || found || noted ? `${id}-note` : undefined}
         autoComplete="off"
         autoCapitalize="off"
         spellCheck={false}
@@ -54,7 +69,7 @@ export function CellInput(props: CellInputProps) {
           event.target.select();
         }}
         className={classNames(
-          'tnum block h-9 w-full min-w-0 border-b border-rule bg-transparent px-1 py-0 text-lead leading-6 placeholder:text-label placeholder:text-ink-2',
+          'tnum block h-9 w-full min-w-0 scroll-mt-16 border-b border-rule bg-transparent px-1 py-0 text-lead leading-6 placeholder:text-label placeholder:text-ink-2',
           'hover:border-ink focus:border-b-edge focus:border-act focus:bg-plate',
           isNote && 'h-7 border-transparent text-label placeholder-shown:border-hair',
           parts && 'text-transparent',

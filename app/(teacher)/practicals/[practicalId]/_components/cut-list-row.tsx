@@ -73,7 +73,8 @@ function Row(props: CutListRowProps) {
         sizeIn={AXES.some((axis) => axis === column) ? unit : null}
         inHand={focused === column}
         refused={(note?.errors.length ?? 0) > 0}
-        found={(note?.found.length ?? 0) > 0}
+        found={note?.found.some(({ isNote }) => !isNote) ?? false}
+        noted={note !== undefined}
         isNote={column === 'note'}
         placeholder={
           column === 'note'

@@ -1,13 +1,11 @@
 'use client';
 
-import { PartDrawing } from '@/components/part/part-drawing';
 import { Button } from '@/components/ui/button';
 import { ButtonRow } from '@/components/ui/button-row';
 import { SelectField } from '@/components/ui/select-field';
 import { Heading } from '@/components/ui/titles';
 import type { DraftLine } from '@/lib/practicals/draft';
 import { lineOf, useEditor } from './editor-context';
-import { sizesOf } from './read-draft';
 import type { SheetDesk } from './sheet-desk';
 
 const YES_NO = { '': null, yes: true, no: false } as const;
@@ -17,14 +15,13 @@ function isKey<Keys extends object>(keys: Keys, key: string): key is Extract<key
   return Object.hasOwn(keys, key);
 }
 
-/** One line by itself: its drawing, how its pieces are read, its place in the list. */
+/** One line by itself: how its pieces are read, and its place in the list. */
 export function LineDetail({ lineId, sheet }: { lineId: string; sheet: SheetDesk }) {
-  const { desk, unit } = useEditor();
+  const { desk } = useEditor();
   const found = lineOf(desk.draft.lines, lineId);
   if (!found) return null;
   const { line, index } = found;
   const name = line.label || `line ${index + 1}`;
-  const size = sizesOf(line, unit);
   const { all } = desk.draft;
   const change = (work: (line: DraftLine) => void) =>
     desk.edit((next) => {
@@ -57,46 +54,37 @@ export function LineDetail({ lineId, sheet }: { lineId: string; sheet: SheetDesk
           </Button>
         </ButtonRow>
       </div>
-      <div className="grid items-start gap-x-12 gap-y-6 md:grid-cols-[minmax(0,26rem)_minmax(0,27rem)]">
-        {size ? (
-          <PartDrawing size={size} unit={unit} label={name} />
-        ) : (
-          <p className="border-y border-hair py-6 text-ink-2">
-            The part is drawn as soon as its three sizes can be read.
-          </p>
-        )}
-        <div className="grid gap-4">
-          <SelectField
-            label="thickness and width"
-            value={line.swap === null ? '' : line.swap ? 'yes' : 'no'}
-            onChange={({ target: { value } }) => {
-              if (isKey(YES_NO, value)) change((each) => Object.assign(each, { swap: YES_NO[value] }));
-            }}
-            options={[
-              {
-                value: '',
-                label: `as all lines: ${all.swap ? 'may be read either way round' : 'each as it is'}`,
-              },
-              { value: 'yes', label: 'may be read either way round' },
-              { value: 'no', label: 'each as it is' },
-            ]}
-          />
-          <SelectField
-            label="pieces of this line"
-            value={line.set ?? ''}
-            onChange={({ target: { value } }) => {
-              if (isKey(SET, value)) change((each) => Object.assign(each, { set: SET[value] }));
-            }}
-            options={[
-              {
-                value: '',
-                label: `as all lines: ${all.set === 'each' ? 'each by itself' : 'all as the worst'}`,
-              },
-              { value: 'each', label: 'each by itself' },
-              { value: 'worst', label: 'all as the worst of them' },
-            ]}
-          />
-        </div>
+      <div className="grid max-w-[54rem] items-start gap-x-12 gap-y-4 md:grid-cols-2">
+        <SelectField
+          label="thickness and width"
+          value={line.swap === null ? '' : line.swap ? 'yes' : 'no'}
+          onChange={({ target: { value } }) => {
+            if (isKey(YES_NO, value)) change((each) => Object.assign(each, { swap: YES_NO[value] }));
+          }}
+          options={[
+            {
+              value: '',
+              label: `as all lines: ${all.swap ? 'may be read either way round' : 'each as it is'}`,
+            },
+            { value: 'yes', label: 'may be read either way round' },
+            { value: 'no', label: 'each as it is' },
+          ]}
+        />
+        <SelectField
+          label="pieces of this line"
+          value={line.set ?? ''}
+          onChange={({ target: { value } }) => {
+            if (isKey(SET, value)) change((each) => Object.assign(each, { set: SET[value] }));
+          }}
+          options={[
+            {
+              value: '',
+              label: `as all lines: ${all.set === 'each' ? 'each by itself' : 'all as the worst'}`,
+            },
+            { value: 'each', label: 'each by itself' },
+            { value: 'worst', label: 'all as the worst of them' },
+          ]}
+        />
       </div>
     </section>
   );

@@ -9,6 +9,7 @@ import { parseDraft } from '@/lib/practicals/parse-draft';
 import { AsideNotes } from './aside-notes';
 import { EditorProvider, fieldId, selectionOf } from './editor-context';
 import { KeepNote } from './keep-note';
+import { KeptInView } from './kept-in-view';
 import { PartInHand } from './part-in-hand';
 import { PricesStep } from './prices-step';
 import { PublishButton } from './publish-button';
@@ -19,6 +20,7 @@ import { TaskStep } from './task-step';
 import { titleBlockOf } from './title-block-of';
 import { useDraft } from './use-draft';
 import { useEditorState } from './use-editor-state';
+import { useTypedEarly } from './use-typed-early';
 import { WhatItGives } from './what-it-gives';
 
 const SHEETS = { task: TaskStep, prices: PricesStep, rules: RulesStep };
@@ -27,6 +29,7 @@ const SHEETS = { task: TaskStep, prices: PricesStep, rules: RulesStep };
 export function PracticalEditor({ view }: { view: PracticalView }) {
   const { content, revision, savedAt } = view.draft;
   const desk = useDraft(view.practicalId, { content, revision, at: savedAt });
+  useTypedEarly(desk, content);
   const editor = useEditorState(view, desk);
   const [step, setStep] = useStep();
   const Sheet = SHEETS[step];
@@ -67,15 +70,13 @@ export function PracticalEditor({ view }: { view: PracticalView }) {
           </>
         }
         aside={
-          <>
-            {step === 'prices' ? (
-              <PartInHand className="sticky top-0 z-10 hidden bg-sheet pb-4 xl:block" />
-            ) : null}
-            <div className="grid content-start gap-8 md:grid-cols-[minmax(0,26rem)_minmax(0,20rem)] xl:grid-cols-1">
+          <div className="grid content-start gap-8 md:grid-cols-[minmax(0,26rem)_minmax(0,20rem)] xl:flex xl:flex-1 xl:flex-col xl:gap-0">
+            <KeptInView>
+              {step === 'prices' ? <PartInHand className="hidden pb-4 xl:block" /> : null}
               <WhatItGives />
-              <AsideNotes view={view} />
-            </div>
-          </>
+            </KeptInView>
+            <AsideNotes view={view} />
+          </div>
         }
         titleBlock={titleBlockOf(view, editor.parsed, desk.draft)}
       >

@@ -9,13 +9,18 @@ import { LineDetail } from './line-detail';
 import { SizeEditor } from './size-editor';
 import { useSheet } from './use-sheet';
 
+/** What is laid out once the line that was in hand is removed. */
+const ALL_LINES: Selection = { kind: 'size', lineId: null, axis: 'length' };
+
 /** The cut list above, and below it what is in hand: a price, the checks, or one line. */
 export function PricesStep() {
-  const { selection } = useEditor();
+  const { selection: selected, desk } = useEditor();
   const sheet = useSheet();
+  const isGone = selected.lineId !== null && !desk.draft.lines.some(({ id }) => id === selected.lineId);
+  const selection = isGone ? ALL_LINES : selected;
   const [tried, setTried] = useState<Record<string, TriedPiece>>({});
   const detail = useRef<HTMLDivElement>(null);
-  useWayBack(selection, detail);
+  useWayBack(selected, detail);
   return (
     <>
       <CutList {...sheet} />

@@ -35,7 +35,7 @@ export function RowNumber({ index, name, inHand, selected, keys, dragger, onOpen
       onPointerUp={(event) => dragger.onPointerUp(event)}
       onPointerCancel={() => dragger.onPointerCancel()}
       className={classNames(
-        'group/number tnum flex h-9 w-full cursor-grab touch-none items-center gap-1.5 border-b border-transparent text-left text-ink-2 select-none hover:border-ink hover:text-ink active:cursor-grabbing',
+        'group/number tnum flex h-9 w-full cursor-grab scroll-mt-16 touch-none items-center gap-1.5 border-b border-transparent text-left text-ink-2 select-none hover:border-ink hover:text-ink active:cursor-grabbing',
         inHand && 'font-[660] text-ink',
         selected && 'border-b-edge border-act text-ink',
       )}

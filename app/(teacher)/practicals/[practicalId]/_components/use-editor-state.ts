@@ -8,6 +8,7 @@ import { textAt } from '@/lib/practicals/draft-paths';
 import { type EditorStep, stepOfPath } from '@/lib/practicals/field-names';
 import { type ParsedDraft, parseDraft } from '@/lib/practicals/parse-draft';
 import { placeFindings } from '@/lib/practicals/place-findings';
+import { reviewLabels } from '@/lib/practicals/review-labels';
 import { reviewRubric } from '@/lib/scoring';
 import type { Editor, Selection } from './editor-context';
 import type { DraftDesk } from './use-draft';
@@ -56,7 +57,7 @@ export function useEditorState(view: PracticalView, desk: DraftDesk): EditorStat
     const isOfList = path === 'lines' && settled.lines.length > 0;
     return refused || isLeft || isJudged || isOfList ? errors : [];
   };
-  const findings = parsed.ok
+  const reviewed = parsed.ok
     ? placeFindings(settled, parsed.rubric, [
         ...reviewRubric(parsed.rubric, { graduation: GRADUATION[view.unit] }),
         ...reviewInstruments(parsed.rubric),
@@ -69,7 +70,7 @@ export function useEditorState(view: PracticalView, desk: DraftDesk): EditorStat
     unit: view.unit,
     parsed,
     latest: view.latest,
-    findings,
+    findings: [...reviewed, ...reviewLabels(settled.lines)],
     focused,
     lineInHand,
     errorsAt,
