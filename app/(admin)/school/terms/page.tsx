@@ -15,7 +15,7 @@ export default async function TermsPage() {
   const terms = pageValue(await listTerms(await pageActor(), {}));
   return (
     <DeskPage title="Terms">
-      <div className="grid items-start gap-x-12 gap-y-8 lg:grid-cols-[minmax(0,1fr)_20rem]">
+      <div className="grid grid-cols-[minmax(0,1fr)] items-start gap-x-12 gap-y-8 lg:grid-cols-[minmax(0,1fr)_20rem]">
         {terms.length === 0 ? (
           <EmptyState title="No terms yet">
             Every section belongs to a term, and so does what is exported for it. Add the term you are in
