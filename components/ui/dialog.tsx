@@ -1,7 +1,7 @@
 'use client';
 
 import { Dialog as Radix } from 'radix-ui';
-import { type ReactNode, useRef } from 'react';
+import { type ReactNode, type RefObject, useRef } from 'react';
 import { Button } from './button';
 import { classNames } from './class-names';
 
@@ -17,6 +17,8 @@ interface DialogProps {
   open?: boolean;
   onOpenChange?: (open: boolean) => void;
   closeLabel?: string;
+  /** Where the focus goes when it closes; left out, to what opened it. */
+  returnTo?: RefObject<HTMLElement | null>;
   children: ReactNode;
   className?: string;
 }
@@ -30,6 +32,7 @@ export function Dialog(props: DialogProps) {
     onOpenChange,
     closeLabel = 'close',
     children,
+    returnTo,
     className,
   } = props;
   const openedFrom = useRef<Element | null>(null);
@@ -46,7 +49,7 @@ export function Dialog(props: DialogProps) {
           onCloseAutoFocus={(event) => {
             if (trigger) return;
             event.preventDefault();
-            giveBack(openedFrom.current);
+            giveBack(returnTo?.current ?? openedFrom.current);
           }}
           {...(description ? {} : { 'aria-describedby': undefined })}
         >

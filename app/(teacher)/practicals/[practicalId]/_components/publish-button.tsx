@@ -35,6 +35,7 @@ export function PublishButton(props: PublishButtonProps) {
   const { practicalId, desk, parsed, latest, department, behind, onBadFields } = props;
   const [asking, setAsking] = useState<number | null>(null);
   const [published, setPublished] = useState<number | null>(null);
+  const button = useRef<HTMLButtonElement>(null);
   const number = (latest?.number ?? 0) + 1;
   const unchanged = parsed.ok && latest !== null && sameInEffect(latest, parsed);
 
@@ -49,6 +50,7 @@ export function PublishButton(props: PublishButtonProps) {
   return (
     <>
       <Button
+        ref={button}
         kind="act"
         notYet={unchanged ? `nothing has changed since version ${latest?.number}` : null}
         onClick={() => void ask()}
@@ -67,7 +69,12 @@ export function PublishButton(props: PublishButtonProps) {
         />
       ) : null}
       {published === null ? null : (
-        <Published {...{ practicalId, behind }} number={published} onClose={() => setPublished(null)} />
+        <Published
+          {...{ practicalId, behind }}
+          number={published}
+          returnTo={button}
+          onClose={() => setPublished(null)}
+        />
       )}
     </>
   );

@@ -1,5 +1,6 @@
 'use client';
 
+import type { RefObject } from 'react';
 import { Button } from '@/components/ui/button';
 import { Dialog } from '@/components/ui/dialog';
 import { LinkButton } from '@/components/ui/link-button';
@@ -11,16 +12,19 @@ export function Published({
   practicalId,
   number,
   behind,
+  returnTo,
   onClose,
 }: {
   practicalId: string;
   number: number;
   behind: readonly SittingBehind[];
+  returnTo: RefObject<HTMLElement | null>;
   onClose(): void;
 }) {
   return (
     <Dialog
       open
+      returnTo={returnTo}
       onOpenChange={(open) => {
         if (!open) onClose();
       }}
