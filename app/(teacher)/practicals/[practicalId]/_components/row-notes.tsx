@@ -4,9 +4,9 @@ import { classNames } from '@/components/ui/class-names';
 import { fieldName } from '@/lib/practicals/field-names';
 import type { PlacedFinding } from '@/lib/practicals/place-findings';
 import { NOTE_START, ROW } from './cut-list-layout';
-import type { RowNote } from './cut-list-row';
 import { fieldId, useEditor } from './editor-context';
 import { FindingText } from './finding-text';
+import type { RowNote } from './row-props';
 
 /** What is wrong or worth seeing in a row outside the lines, hung below it. */
 export function RowNotes({ base, fields }: { base: string; fields: readonly string[] }) {
