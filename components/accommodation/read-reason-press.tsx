@@ -53,7 +53,7 @@ function Reason({ accommodationId, action }: Omit<ReadReasonPressProps, 'name'>)
     <form action={send} className="grid gap-4">
       <input type="hidden" name="accommodationId" value={accommodationId} />
       <p className="max-w-[56ch]">
-        The reason is kept apart from scores. Reading it is logged: the access log will say that you read it,
+        The reason is kept apart from scores. Reading it is logged: the access log keeps that you read it,
         when, and for whom.
       </p>
       {reply ? <Refusal title={reply.refused} /> : null}

@@ -1,3 +1,5 @@
+import { sentenceOf } from './detail-words';
+
 /** What the log's entries are called on screen; an action without words of its own is shown by its name. */
 const WORDS: Record<string, string> = {
   'account.sign-in': 'signed in',
@@ -26,6 +28,7 @@ const WORDS: Record<string, string> = {
   'version.read': 'took a practical out as a file',
   'sitting.open': 'opened a sitting',
   'sitting.change': 'changed a sitting',
+  'sitting.move': 'moved a sitting to another version',
   'sitting.publish': 'published',
   'sitting.read': 'looked at a sitting',
   'accommodation.list': 'looked at modified rubrics',
@@ -49,10 +52,13 @@ export function sayAction(action: string): string {
   return WORDS[action] ?? action.replaceAll(/[.-]/g, ' ');
 }
 
-/** The details of an entry as one line: `roles: teacher, head; again: yes`. */
+/** The details of an entry as one line: a sentence, or else `roles: teacher, head; again: yes`. */
 export function sayDetails(details: unknown): string {
   if (typeof details !== 'object' || details === null) return '';
-  return Object.entries(details)
+  const named: Record<string, unknown> = { ...details };
+  const sentence = sentenceOf(named);
+  if (sentence !== null) return sentence;
+  return Object.entries(named)
     .filter(([, value]) => value !== '' && value !== null && !isId(value))
     .map(([name, value]) => `${name.replaceAll(/([A-Z])/g, ' $1').toLowerCase()}: ${sayValue(value)}`)
     .join('; ');
