@@ -89,7 +89,7 @@ test('a student reads inch sizes in millimetres too, exactly, on this device and
   await expect(page.getByText('12.7 mm')).toHaveCount(0);
   await sizes.check();
   await expect(page.getByRole('button', { name: /^thickness/ })).toContainText('12.7 mm');
-  await expect(page.getByText(/^15\.875 × by 152\.4 × by 571\.5 mm$/)).toBeVisible();
+  await expect(page.getByText(/^15\.875\s×\s+by\s152\.4\s×\s+by\s571\.5\smm$/)).toBeVisible();
   await expect(page.getByText('3.175 mm')).toBeVisible();
   // Bands are priced in inches alone.
   await expect(page.getByRole('table', { name: 'what each step off costs' })).not.toContainText('mm');
