@@ -14,7 +14,7 @@ export function RoundList({ rounds }: { rounds: readonly RoundRow[] }) {
           <div className="min-w-0">
             <h2 className="font-title text-verdict">{round.title}</h2>
             <p className="text-label text-ink-2">
-              {round.sectionName}, rubric {round.versionNumber}, {progress(round)}
+              {round.sectionName}, version {round.versionNumber}, {progress(round)}
             </p>
           </div>
           <LinkButton href={`/round/${round.sittingId}`} kind={round.published ? 'plain' : 'act'}>

@@ -44,7 +44,7 @@ function SittingRow({ sitting }: { sitting: SittingListView }) {
           {title}
         </Link>
         <p className="text-label font-[480] text-ink-2">
-          {sectionName}, rubric {versionNumber}
+          {sectionName}, version {versionNumber}
           {conflicts > 0 ? (
             <strong className="text-ink">, {count(conflicts, 'size', 'sizes')} with two readings</strong>
           ) : null}

@@ -65,7 +65,7 @@ function Head({ explanation, inDialog }: { explanation: ExplanationView; inDialo
         <div className="min-w-0">
           {inDialog ? null : <h2 className="text-key">{spokenName(explanation)}</h2>}
           <p className="text-label text-ink-2">
-            {title}, rubric {versionNumber}
+            {title}, version {versionNumber}
             {attempts.length > 1 ? `, attempt ${attemptNumber}` : ''}
             {published ? '' : ', being recorded'}
           </p>

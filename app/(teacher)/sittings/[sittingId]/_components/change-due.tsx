@@ -16,7 +16,7 @@ interface ChangeDueProps {
   today: string;
 }
 
-/** The day the pieces are due, and the way to move it. */
+/** The day the pieces are due, and the way to change it. */
 export function ChangeDue({ sittingId, dueOn, today }: ChangeDueProps) {
   const [open, setOpen] = useState(false);
   const [reply, action] = useActionState(async (before: FormReply, data: FormData) => {
@@ -26,9 +26,9 @@ export function ChangeDue({ sittingId, dueOn, today }: ChangeDueProps) {
   }, undefined);
   return (
     <p className="flex items-baseline gap-2 text-label">
-      {dueOn ? `due ${sayDay(dueOn, today)}` : 'no day it is due'}
+      {dueOn ? `due ${sayDay(dueOn, today)}` : 'due on no day'}
       <Button kind="quiet" size="small" className="px-0" onClick={() => setOpen(true)}>
-        move
+        {dueOn ? 'change the day' : 'set the day'}
       </Button>
       <Dialog open={open} onOpenChange={setOpen} title="When is it due?">
         <form action={action} className="grid gap-4">

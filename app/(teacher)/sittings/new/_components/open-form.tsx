@@ -101,7 +101,7 @@ function VersionChoices({ section, field }: VersionChoicesProps) {
     <>
       <SelectField
         label="practical"
-        hint="The latest rubric of each stands first. The sitting keeps the one you choose."
+        hint="The latest version of each stands first. The sitting keeps the one you choose."
         placeholder={section ? 'choose a practical' : 'choose a period first'}
         options={(section?.versions ?? []).map((version) => ({
           value: version.versionId,
@@ -125,7 +125,7 @@ function VersionChoices({ section, field }: VersionChoicesProps) {
 }
 
 function sayVersion({ title, number, latest, approved, ownerName }: VersionChoice): string {
-  const parts = [title, `rubric ${number}`];
+  const parts = [title, `version ${number}`];
   if (!latest) parts.push('an older one');
   if (ownerName) parts.push(`by ${ownerName}`);
   if (approved) parts.push('the department’s');

@@ -32,7 +32,7 @@ export function MoveVerdict({ preview }: { preview: MovePreview }) {
         )}
         {compared > 0 && without > 0 ? (
           <li>
-            {count(without, 'student has', 'students have')} no number under one of the two, and{' '}
+            {count(without, 'student has', 'students have')} no two numbers to compare, and{' '}
             {without === 1 ? 'is' : 'are'} not in the count.
           </li>
         ) : null}

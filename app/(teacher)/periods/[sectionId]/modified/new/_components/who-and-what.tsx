@@ -42,7 +42,7 @@ export function WhoAndWhat({ desk, typed, error, onStudent }: WhoAndWhatProps) {
         options={[
           ...desk.sittings.map(({ sittingId, title, versionNumber }) => ({
             value: sittingId,
-            label: `${title}, rubric ${versionNumber}`,
+            label: `${title}, version ${versionNumber}`,
           })),
           { value: '', label: term },
         ]}
