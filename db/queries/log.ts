@@ -1,6 +1,6 @@
 import { aliasedTable, and, asc, count, desc, eq, gt, not, sql } from 'drizzle-orm';
 import type { Transaction } from '@/db/client';
-import { accessLog, people } from '@/db/schema';
+import { accessLog, people, practicals, sections, sittings } from '@/db/schema';
 
 export interface LogFilter {
   /** First and last day, in the school's own time zone. */
@@ -29,7 +29,13 @@ function filtered(schoolId: string, timeZone: string, filter: LogFilter) {
   );
 }
 
-/** Entries of the access log, the newest first, with the names of who acted and whom it was about. */
+const given = aliasedTable(practicals, 'log_given');
+
+/** The practical, or what a sitting gave and to which period. */
+const subjectName = sql<string | null>`coalesce(
+  ${practicals.title}, ${given.title} || ', period ' || ${sections.period})`;
+
+/** Entries of the access log, the newest first, with the names of who acted, whom and what it was about. */
 export async function selectLog(
   tx: Transaction,
   { id: schoolId, timeZone }: { id: string; timeZone: string },
@@ -48,6 +54,7 @@ export async function selectLog(
       aboutPersonId: subjects.id,
       aboutName: sql<string | null>`btrim(${subjects.givenName} || ' ' || ${subjects.familyName})`,
       subjectKind: accessLog.subjectKind,
+      subjectName,
       details: accessLog.details,
     })
     .from(accessLog)
@@ -60,6 +67,24 @@ export async function selectLog(
         not(isUnnamed),
       ),
     )
+    .leftJoin(
+      practicals,
+      and(
+        eq(practicals.schoolId, accessLog.schoolId),
+        eq(accessLog.subjectKind, 'practical'),
+        eq(practicals.id, accessLog.subjectId),
+      ),
+    )
+    .leftJoin(
+      sittings,
+      and(
+        eq(sittings.schoolId, accessLog.schoolId),
+        eq(accessLog.subjectKind, 'sitting'),
+        eq(sittings.id, accessLog.subjectId),
+      ),
+    )
+    .leftJoin(given, and(eq(given.schoolId, sittings.schoolId), eq(given.id, sittings.practicalId)))
+    .leftJoin(sections, and(eq(sections.schoolId, sittings.schoolId), eq(sections.id, sittings.sectionId)))
     .where(where)
     .orderBy(desc(accessLog.at), desc(accessLog.id))
     .limit(pageSize)

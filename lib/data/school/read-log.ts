@@ -14,6 +14,8 @@ export interface LogEntryView {
   actor: { name: string; role: Role | null } | null;
   about: { personId: string; name: string } | null;
   subjectKind: string;
+  /** The practical, or the practical and period of a sitting; null for other subjects. */
+  subjectName: string | null;
   details: unknown;
 }
 
@@ -40,13 +42,25 @@ export const readLog = defineVerb({
     return {
       timeZone: school.timeZone,
       entries: rows.map(
-        ({ id, at, action, actorRole, actorName, aboutPersonId, aboutName, subjectKind, details }) => ({
+        ({
+          id,
+          at,
+          action,
+          actorRole,
+          actorName,
+          aboutPersonId,
+          aboutName,
+          subjectKind,
+          subjectName,
+          details,
+        }) => ({
           id,
           at: at.toISOString(),
           action,
           actor: actorName === null ? null : { name: actorName, role: actorRole },
           about: aboutPersonId && aboutName !== null ? { personId: aboutPersonId, name: aboutName } : null,
           subjectKind,
+          subjectName,
           details,
         }),
       ),

@@ -1,6 +1,10 @@
 import { expect, it } from 'vitest';
+import { archivePractical } from '@/lib/data/practicals/archive-practical';
 import { readLog } from '@/lib/data/school/read-log';
+import { readSitting } from '@/lib/data/sittings/read-sitting';
+import { value } from '@/tests/support/answers';
 import { ownerSql } from '@/tests/support/database';
+import { stageRound } from '@/tests/support/round-stage';
 import { makeActor, makePerson, makeSchool } from '@/tests/support/school';
 
 const sql = ownerSql();
@@ -95,4 +99,15 @@ it('gives a page of fifty at a time', async () => {
   const second = await readLog(boss, { page: 2 });
   expect(second).toMatchObject({ value: { total: 51, page: 2, pageCount: 2 } });
   expect(second.ok && second.value.entries).toHaveLength(1);
+});
+
+it('names the practical of an entry, and of a sitting its practical and period', async () => {
+  const { teacher, sittingId, practical, school: other } = await stageRound();
+  value(await readSitting(teacher, { sittingId }));
+  value(await archivePractical(teacher, { practicalId: practical.practicalId, archived: true }));
+  const { entries } = value(await readLog(await makeActor(other, 'admin'), {}));
+  expect(entries.map(({ action, subjectName }) => [action, subjectName])).toEqual([
+    ['practical.change', 'Nine parts'],
+    ['sitting.read', 'Nine parts, period 3'],
+  ]);
 });

@@ -6,8 +6,8 @@ const ID = '0b7f6a52-3f38-4f3e-9a55-2f0f6a1f9f10';
 describe('the access log says what was done', () => {
   test.each([
     [
-      { moveId: ID, from: 1, to: 2, holdHarmless: true, gain: 3, same: 20, lose: 0, meanChange: 12 },
-      'moved from version 1 to version 2, nobody drops; 3 gain, 0 lose, 20 stay',
+      { moveId: ID, from: 1, to: 2, holdHarmless: true, gain: 3, same: 20, lose: 4, meanChange: 12 },
+      'moved from version 1 to version 2; 3 gain, 4 would lose and are held, 20 stay',
     ],
     [
       { moveId: ID, from: 2, to: 1, holdHarmless: false, gain: 0, same: 1, lose: 2, meanChange: -9 },
@@ -52,10 +52,19 @@ describe('the access log says what was done', () => {
     [{ modifiedRubric: 'ended' }, 'a modified rubric ended'],
   ])('%j', (details, sentence) => expect(sayDetails(details)).toBe(sentence));
 
+  test('with what it was about in front, unless the sentence names it', () => {
+    expect(sayDetails({ undone: ID, from: 2, to: 1 }, 'Peg rack, period 3')).toBe(
+      'Peg rack, period 3: a move undone: back from version 2 to version 1',
+    );
+    expect(sayDetails({ imported: 'Peg rack' }, 'Peg rack')).toBe('“Peg rack”, from a file');
+  });
+
   test('name by name where no sentence fits, without ids', () => {
     expect(sayDetails({ roles: ['teacher', 'head'], again: true, sittingId: ID })).toBe(
       'roles: teacher, head; again: yes',
     );
+    expect(sayDetails(null, 'Peg rack, period 3')).toBe('Peg rack, period 3');
+    expect(sayDetails({ students: 23 }, 'Peg rack, period 3')).toBe('Peg rack, period 3; students: 23');
     expect(sayAction('sitting.move')).toBe('moved a sitting to another version');
   });
 });

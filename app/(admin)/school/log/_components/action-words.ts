@@ -52,13 +52,18 @@ export function sayAction(action: string): string {
   return WORDS[action] ?? action.replaceAll(/[.-]/g, ' ');
 }
 
-/** The details of an entry as one line: a sentence, or else `roles: teacher, head; again: yes`. */
-export function sayDetails(details: unknown): string {
-  if (typeof details !== 'object' || details === null) return '';
-  const named: Record<string, unknown> = { ...details };
+/** The details of an entry as one line: what it was about, and a sentence or else `roles: teacher, head; again: yes`. */
+export function sayDetails(details: unknown, subjectName: string | null = null): string {
+  const named: Record<string, unknown> = typeof details === 'object' ? { ...details } : {};
   const sentence = sentenceOf(named);
-  if (sentence !== null) return sentence;
-  return Object.entries(named)
+  if (sentence !== null && subjectName !== null) {
+    return sentence.includes(subjectName) ? sentence : `${subjectName}: ${sentence}`;
+  }
+  return [subjectName, sentence ?? nameByName(named)].filter(Boolean).join('; ');
+}
+
+function nameByName(details: Record<string, unknown>): string {
+  return Object.entries(details)
     .filter(([, value]) => value !== '' && value !== null && !isId(value))
     .map(([name, value]) => `${name.replaceAll(/([A-Z])/g, ' $1').toLowerCase()}: ${sayValue(value)}`)
     .join('; ');

@@ -5,7 +5,7 @@ const quoted = (title: unknown) => `“${title}”`;
 /** What the details of an entry say as a sentence, by the one of them that tells what was done. */
 const SENTENCES: Readonly<Record<string, (details: Details) => string>> = {
   moveId: ({ from, to, holdHarmless, gain, lose, same }) =>
-    `moved from version ${from} to version ${to}${holdHarmless === true ? ', nobody drops' : ''}; ${gain} gain, ${lose} lose, ${same} stay`,
+    `moved from version ${from} to version ${to}; ${gain} gain, ${lose} ${holdHarmless === true ? 'would lose and are held' : 'lose'}, ${same} stay`,
   undone: ({ from, to }) => `a move undone: back from version ${from} to version ${to}`,
   made: ({ made, starter }) =>
     starter === undefined ? quoted(made) : `${quoted(made)}, a copy of the starter ${starter}`,

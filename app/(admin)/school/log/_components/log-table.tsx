@@ -18,7 +18,7 @@ export function LogTable({ entries, timeZone }: { entries: LogEntryView[]; timeZ
         </tr>
       </TableHead>
       <TableBody fives>
-        {entries.map(({ id, at, actor, action, about, details }) => (
+        {entries.map(({ id, at, actor, action, about, subjectName, details }) => (
           <tr key={id}>
             <RowHead className="whitespace-nowrap font-[480]">{sayMoment(at, timeZone)}</RowHead>
             <Cell>
@@ -33,7 +33,9 @@ export function LogTable({ entries, timeZone }: { entries: LogEntryView[]; timeZ
                 </Link>
               ) : null}
             </Cell>
-            <Cell className="max-w-[22rem] text-label break-words text-ink-2">{sayDetails(details)}</Cell>
+            <Cell className="max-w-[22rem] text-label break-words text-ink-2">
+              {sayDetails(details, subjectName)}
+            </Cell>
           </tr>
         ))}
       </TableBody>
