@@ -45,7 +45,7 @@ export function ownDifferences(draft: PracticalDraft, source: Published & { numb
     return [`${name}: now ${here || 'empty'}, was ${there || 'empty'}.`];
   });
   const more = fields.length - MOST_FIELDS;
-  return more > 0 ? [...told, [`And ${more} more fields.`]] : told;
+  return more > 0 ? [...told, [`And ${more} more ${more === 1 ? 'field' : 'fields'}.`]] : told;
 }
 
 /** A title that is not typed yet hides no difference. */

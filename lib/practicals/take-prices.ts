@@ -58,7 +58,7 @@ export function priceDifferences(version: Published, draft: PracticalDraft): Phr
     return [`${name}: ${here || 'empty'} here, ${there || 'empty'} in version ${version.number}.`];
   });
   const more = fields.length - MOST_FIELDS;
-  return more > 0 ? [...told, [`And ${more} more fields.`]] : told;
+  return more > 0 ? [...told, [`And ${more} more ${more === 1 ? 'field' : 'fields'}.`]] : told;
 }
 
 /** A title that is not typed yet hides no difference. */

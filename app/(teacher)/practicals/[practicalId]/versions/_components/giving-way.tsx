@@ -26,7 +26,9 @@ export function GivingWay({ differences, number }: { differences: DraftDifferenc
           ))}
         </TableBody>
       </Table>
-      {more > 0 ? <p className="mt-2 text-label">and {more} more fields</p> : null}
+      {more > 0 ? (
+        <p className="mt-2 text-label">{`and ${more} more ${more === 1 ? 'field' : 'fields'}`}</p>
+      ) : null}
     </div>
   );
 }
