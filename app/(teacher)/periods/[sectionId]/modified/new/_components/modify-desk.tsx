@@ -1,7 +1,7 @@
 'use client';
 
 import { useRouter } from 'next/navigation';
-import { useActionState } from 'react';
+import { useActionState, useEffect, useRef } from 'react';
 import { FormRefusal } from '@/components/account/form-refusal';
 import { DeskPage } from '@/components/shell/desk-page';
 import { keepTyped } from '@/components/ui/keep-typed';
@@ -26,6 +26,10 @@ export function ModifyDesk({ desk }: { desk: AccommodationDeskView }) {
   const [reply, action] = useActionState(makeAccommodationAction, undefined);
   const typed = useTyped(desk);
   const errors = reply?.error ?? {};
+  const form = useRef<HTMLFormElement>(null);
+  useEffect(() => {
+    if (reply?.error) form.current?.querySelector<HTMLElement>('[aria-invalid="true"]')?.focus();
+  }, [reply]);
   const list = `/periods/${desk.sectionId}/modified`;
   const student = desk.students.find(({ studentId }) => studentId === desk.chosen);
   const there = desk.change
@@ -42,14 +46,14 @@ export function ModifyDesk({ desk }: { desk: AccommodationDeskView }) {
         </div>
       }
     >
-      <form action={action} onReset={keepTyped} className="grid gap-10">
+      <form ref={form} action={action} onReset={keepTyped} className="grid gap-10">
         <FormRefusal errors={errors[''] ?? undefined} />
         <input type="hidden" name="sectionId" value={desk.sectionId} />
         <input type="hidden" name="replaces" value={desk.change?.accommodationId ?? ''} />
         <WhoAndWhat
           desk={desk}
           typed={typed}
-          error={errors.studentId}
+          error={desk.chosen ? undefined : errors.studentId}
           onStudent={(studentId) => router.replace(`${list}/new?student=${studentId}`, { scroll: false })}
         />
         {there ? (
