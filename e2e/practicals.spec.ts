@@ -116,8 +116,12 @@ test('a second tab is told that its draft is stale, and either of the two can be
 
   await page.getByLabel('wood').fill('cherry');
   const dialog = page.getByRole('dialog', { name: 'Two drafts of this practical' });
-  await expect(dialog.getByRole('row', { name: 'material cherry maple' })).toBeVisible();
+  await expect(dialog.getByRole('row', { name: 'wood cherry maple' })).toBeVisible();
   await expectAccessible(page);
+  await dialog.getByRole('button', { name: 'look first' }).click();
+  await expect(dialog).toBeHidden();
+  await expect(page.getByLabel('wood')).toBeFocused();
+  await page.getByRole('button', { name: 'choose a draft' }).click();
   await dialog.getByRole('button', { name: 'keep what is typed here' }).click();
   await author.expectKept();
 

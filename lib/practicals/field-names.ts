@@ -13,6 +13,7 @@ export function stepOfPath(path: string): EditorStep {
 }
 
 const NAMES: Record<string, string> = {
+  material: 'wood',
   blank: 'blank',
   all: 'all lines',
   workChecks: 'check of the whole work',

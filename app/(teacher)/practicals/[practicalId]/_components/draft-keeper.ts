@@ -27,6 +27,8 @@ export interface LocalCopy {
 
 export interface LocalStore {
   put(copy: LocalCopy): void;
+  /** All that was typed is kept on the server as this; a page asked for just before does not know it yet. */
+  kept(draft: KeptDraft): void;
   clear(): void;
 }
 
@@ -39,7 +41,8 @@ interface Connections {
 const PAUSE = 800;
 const FIRST_RETRY = 2_000;
 const LONGEST_RETRY = 30_000;
-const MOVED_ON = 'This practical was changed in another place since you typed here.';
+const MOVED_ON =
+  'This practical was changed in another place since you typed here. Nothing you typed is lost: choose which one to keep.';
 const SIGNED_OUT = 'You are signed out. What you typed is on this device and is sent when you are back:';
 const NOT_REACHED = 'The server does not answer. What you typed is on this device and is sent when it does.';
 
@@ -175,7 +178,7 @@ export class DraftKeeper {
     this.sent = null;
     if (this.latest === sent) {
       this.latest = null;
-      this.to.store.clear();
+      this.to.store.kept({ content: sent, revision, at });
     } else if (this.latest) {
       this.store();
     }

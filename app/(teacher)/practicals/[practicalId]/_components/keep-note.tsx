@@ -1,10 +1,11 @@
 'use client';
 
+import { Button } from '@/components/ui/button';
 import { LocalTime } from '@/components/ui/local-time';
 import type { KeepState } from './draft-keeper';
 
-/** Where what is typed stands. */
-export function KeepNote({ keep }: { keep: KeepState }) {
+/** Where what is typed stands; `onChoose` leads back to the choice between two drafts. */
+export function KeepNote({ keep, onChoose }: { keep: KeepState; onChoose(): void }) {
   return (
     <p role="status" className="mr-2 max-w-[40ch] text-label text-ink-2">
       {keep.kind === 'kept' ? (
@@ -19,7 +20,14 @@ export function KeepNote({ keep }: { keep: KeepState }) {
           sign in in another tab
         </a>
       ) : null}
-      {keep.kind === 'stale' ? 'changed in another place' : null}
+      {keep.kind === 'stale' ? (
+        <>
+          not kept: changed in another place{' '}
+          <Button kind="quiet" size="small" className="px-1" onClick={onChoose}>
+            choose a draft
+          </Button>
+        </>
+      ) : null}
     </p>
   );
 }

@@ -1,5 +1,6 @@
 'use client';
 
+import { useState } from 'react';
 import { flushSync } from 'react-dom';
 import { DeskPage } from '@/components/shell/desk-page';
 import { LinkButton } from '@/components/ui/link-button';
@@ -32,6 +33,7 @@ export function PracticalEditor({ view }: { view: PracticalView }) {
   useTypedEarly(desk, content);
   const editor = useEditorState(view, desk);
   const [step, setStep] = useStep();
+  const [looking, setLooking] = useState(false);
   const Sheet = SHEETS[step];
 
   function onBadFields() {
@@ -52,7 +54,7 @@ export function PracticalEditor({ view }: { view: PracticalView }) {
         wideHead
         actions={
           <>
-            <KeepNote keep={desk.keep} />
+            <KeepNote keep={desk.keep} onChoose={() => setLooking(false)} />
             {view.latest ? (
               <>
                 <LinkButton href={`/practicals/${view.practicalId}/practice`}>practice round</LinkButton>
@@ -82,7 +84,7 @@ export function PracticalEditor({ view }: { view: PracticalView }) {
       >
         <Sheet />
       </DeskPage>
-      <StaleDialog desk={desk} />
+      <StaleDialog desk={desk} looking={looking} onLook={() => setLooking(true)} />
     </EditorProvider>
   );
 }

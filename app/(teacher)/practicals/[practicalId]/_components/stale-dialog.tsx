@@ -9,18 +9,27 @@ import type { DraftDesk } from './use-draft';
 
 const MOST_ROWS = 12;
 
+interface StaleDialogProps {
+  desk: DraftDesk;
+  /** Somebody looks at the sheet before choosing; the note beside the title leads back. */
+  looking: boolean;
+  onLook(): void;
+}
+
 /** Two drafts of one practical: what each says where they differ, and the choice between them. */
-export function StaleDialog({ desk }: { desk: DraftDesk }) {
+export function StaleDialog({ desk, looking, onLook }: StaleDialogProps) {
   if (desk.keep.kind !== 'stale') return null;
   const { there, message } = desk.keep;
   const differences = draftDifferences(desk.draft, there.content);
   return (
     <Dialog
-      open
-      onOpenChange={() => {}}
+      open={!looking}
+      onOpenChange={(open) => {
+        if (!open) onLook();
+      }}
       title="Two drafts of this practical"
-      description={`${message} Nothing is lost yet: this is where they differ.`}
-      className="max-w-[46rem] [&_button.close]:hidden"
+      description={`${message} This is where they differ.`}
+      className="max-w-[46rem]"
       closeLabel="look first"
     >
       {differences.length === 0 ? (
