@@ -60,11 +60,19 @@ function SittingRow({ sitting }: { sitting: SittingListView }) {
       </Cell>
       <Cell align="right" className="align-middle whitespace-nowrap">
         {published ? (
-          <Link className="link" href={`/gradebook/${sectionId}`} aria-label={`gradebook: ${where}`}>
+          <Link
+            className="link inline-block py-1"
+            href={`/gradebook/${sectionId}`}
+            aria-label={`gradebook: ${where}`}
+          >
             gradebook
           </Link>
         ) : (
-          <Link className="link" href={`/round/${sittingId}`} aria-label={`to the bench: ${where}`}>
+          <Link
+            className="link inline-block py-1"
+            href={`/round/${sittingId}`}
+            aria-label={`to the bench: ${where}`}
+          >
             to the bench
           </Link>
         )}

@@ -37,9 +37,12 @@ function Versions({ view }: { view: PracticalView }) {
       <Heading id="versions-heading">Versions</Heading>
       <ul className="mt-1 text-label">
         {versions.map(({ versionId, number, publishedAt, sittings }) => (
-          <li key={versionId} className="flex justify-between gap-3 border-b border-hair py-1.5">
+          <li
+            key={versionId}
+            className="flex justify-between gap-3 items-baseline border-b border-hair py-0.5"
+          >
             <span>
-              <Link className="link" href={`/practicals/${practicalId}/versions/${number}`}>
+              <Link className="link inline-block py-1" href={`/practicals/${practicalId}/versions/${number}`}>
                 version {number}
               </Link>
               , <LocalTime at={publishedAt} style="day" />
