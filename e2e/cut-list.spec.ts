@@ -38,8 +38,9 @@ async function expectParts(page: Page, names: string[]): Promise<void> {
   for (const [index, name] of names.entries()) await expect(part(page, index + 1)).toHaveValue(name);
 }
 
-/** The answer to the next save: the word “kept” alone may still be about the one before. */
-const savedOn = (page: Page) => page.waitForResponse((response) => response.request().method() === 'POST');
+/** The answer to the save of a width; the word “kept” alone may still be about the one before. */
+const savedOn = (page: Page, width: string) =>
+  page.waitForResponse((response) => response.request().postData()?.includes(`"width":"${width}"`) ?? false);
 
 /** What a spreadsheet leaves on the clipboard, pasted where the cursor is. */
 async function paste(target: Locator, text: string): Promise<void> {
@@ -294,13 +295,13 @@ test('the browser’s way back brings what was typed last, and another tab’s d
   await expect(page.getByRole('heading', { name: 'Practicals' })).toBeVisible();
   await page.goBack();
   await expect(width).toHaveValue('1 3/4');
-  const keptHere = savedOn(page);
+  const keptHere = savedOn(page, '1 7/8');
   await author.typeInto(width, '1 7/8');
   await keptHere;
 
   const other = await context.newPage();
   await other.goto(page.url());
-  const kept = savedOn(other);
+  const kept = savedOn(other, '2');
   await other.getByLabel('width, fence', { exact: true }).fill('2');
   await kept;
   await author.typeInto(width, '1 5/8');

@@ -2,6 +2,7 @@ import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import {
   DraftKeeper,
   type KeepState,
+  type KeptDraft,
   type LocalCopy,
   type SaveReply,
 } from '@/app/(teacher)/practicals/[practicalId]/_components/draft-keeper';
@@ -14,6 +15,7 @@ function makeDesk(answers: (SaveReply | 'gone')[] = [], opened = 1) {
   const saves: { revision: number; title: string }[] = [];
   const states: KeepState['kind'][] = [];
   let copy: LocalCopy | null = null;
+  let known: KeptDraft | null = null;
   const keeper = new DraftKeeper(opened, {
     async save(revision, content): Promise<SaveReply> {
       saves.push({ revision, title: content.title });
@@ -25,13 +27,17 @@ function makeDesk(answers: (SaveReply | 'gone')[] = [], opened = 1) {
       put: (next) => {
         copy = next;
       },
+      kept: (draft) => {
+        copy = null;
+        known = draft;
+      },
       clear: () => {
         copy = null;
       },
     },
     onState: (state) => states.push(state.kind),
   });
-  return { keeper, saves, states, copy: () => copy };
+  return { keeper, saves, states, copy: () => copy, known: () => known };
 }
 
 beforeEach(() => void vi.useFakeTimers());
@@ -39,7 +45,7 @@ afterEach(() => void vi.useRealTimers());
 
 describe('keeping a draft while it is typed', () => {
   it('stores it on the device at once and on the server after a pause, the last one only', async () => {
-    const { keeper, saves, states, copy } = makeDesk();
+    const { keeper, saves, states, copy, known } = makeDesk();
     keeper.change(titled('B'));
     keeper.change(titled('Box'));
     expect(copy()).toMatchObject({ revision: 1, content: { title: 'Box' } });
@@ -48,6 +54,7 @@ describe('keeping a draft while it is typed', () => {
     expect(saves).toEqual([{ revision: 1, title: 'Box' }]);
     expect(states).toEqual(['keeping', 'kept']);
     expect(copy()).toBeNull();
+    expect(known()).toMatchObject({ revision: 2, content: { title: 'Box' } });
   });
 
   it('sends what was typed during a save afterwards, on top of what that save kept', async () => {

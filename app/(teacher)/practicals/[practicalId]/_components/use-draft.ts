@@ -6,7 +6,7 @@ import type { PracticalDraft } from '@/lib/practicals/draft';
 import { shareDraft } from '@/lib/practicals/share-unchanged';
 import { saveDraftAction } from '../actions';
 import { DraftKeeper, type KeepState, type KeptDraft } from './draft-keeper';
-import { localStoreOf, readLocalCopy } from './local-copy';
+import { localStoreOf, readKeptHere, readLocalCopy } from './local-copy';
 
 export interface DraftDesk {
   draft: PracticalDraft;
@@ -44,6 +44,12 @@ export function useDraft(practicalId: string, opened: KeptDraft): DraftDesk {
       showDraft(copy.content);
       toast('What you typed before is here again.');
       keeper.bringBack(copy, first);
+    }
+    const known = copy ? null : readKeptHere(practicalId);
+    if (known && known.revision > first.revision) {
+      latest.current = known.content;
+      showDraft(known.content);
+      keeper.take(known);
     }
     const again = () => void keeper.keepNow();
     const leaving = () => document.visibilityState === 'hidden' && again();
