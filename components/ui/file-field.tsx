@@ -11,9 +11,9 @@ interface FileFieldProps extends Omit<ComponentProps<'input'>, 'type'>, FieldNot
 
 /** A file to hand in: our own key and words; the browser's control lies invisibly over them. */
 export function FileField(props: FileFieldProps) {
-  const { label, optional, hint, error, finding, className, onChange, ...input } = props;
+  const { label, optional, hint, error, finding, className, onChange, ref, ...input } = props;
   const [name, setName] = useState<string | null>(null);
-  const control = useRef<HTMLInputElement>(null);
+  const control = useRef<HTMLInputElement | null>(null);
   useEffect(() => {
     const form = control.current?.form;
     // A form empties its fields only once everybody has heard of it.
@@ -30,7 +30,11 @@ export function FileField(props: FileFieldProps) {
         <input
           {...input}
           {...describeField(id, notes)}
-          ref={control}
+          ref={(element) => {
+            control.current = element;
+            if (typeof ref === 'function') ref(element);
+            else if (ref) ref.current = element;
+          }}
           type="file"
           onChange={(event) => {
             setName(namesOf(event.target));
