@@ -67,6 +67,8 @@ async function takeScreen(context: BrowserContext, size: Size, screen: Screen): 
   try {
     await arrive(page, screen);
     await page.evaluate(() => document.fonts.ready);
+    // A head that keeps in view would lie over the middle of a whole page.
+    await page.evaluate(() => window.scrollTo({ top: 0, behavior: 'instant' }));
     const file = `${settings.SCREENS_FOLDER}/${size}/${screen.role}-${screen.name}.png`;
     await mkdir(dirname(file), { recursive: true });
     await page.screenshot({ path: file, fullPage: true, animations: 'disabled', caret: 'hide' });
