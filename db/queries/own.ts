@@ -24,6 +24,13 @@ const toldAttempt = sql<number | null>`(
   where told.school_id = ${attempts.schoolId} and tried.sitting_id = ${attempts.sittingId}
     and tried.student_id = ${attempts.studentId})`;
 
+/** An attempt that was told of keeps the version it was told by, until the next publication; others have the sitting's. */
+const versionId = sql<string>`coalesce((
+  select by.rubric_version_id from ${results} told join ${publications} by
+    on by.school_id = told.school_id and by.id = told.publication_id
+  where told.school_id = ${attempts.schoolId} and told.attempt_id = ${attempts.id}
+  order by by.number desc limit 1), ${sittings.rubricVersionId})`;
+
 const ofLatestAttempt = {
   schoolId: attempts.schoolId,
   studentId: attempts.studentId,
@@ -56,7 +63,7 @@ function latestAttempts(tx: Transaction) {
     .innerJoin(sections, and(eq(sections.schoolId, sittings.schoolId), eq(sections.id, sittings.sectionId)))
     .innerJoin(
       rubricVersions,
-      and(eq(rubricVersions.schoolId, sittings.schoolId), eq(rubricVersions.id, sittings.rubricVersionId)),
+      and(eq(rubricVersions.schoolId, sittings.schoolId), eq(rubricVersions.id, versionId)),
     )
     .$dynamic();
 }

@@ -4,11 +4,9 @@ import { ownSittingInput } from '@/lib/contracts/own';
 import { judgementSchema, scoreSheetSchema } from '@/lib/contracts/results';
 import { type Task, taskSchema } from '@/lib/practicals/task';
 import type { Points, Policies, PredictionJudgement, Rubric, ScoreSheet } from '@/lib/scoring';
-import { modifyRubric } from '@/lib/scoring/modification';
 import { rubricFormSchema } from '@/lib/scoring/rubric-form-schema';
-import { rubricSchema } from '@/lib/scoring/schemas';
-import { loadModifications } from '../pricing/load-pricing';
 import { defineVerb } from '../verb';
+import { toldRubric } from './told-rubric';
 
 export interface OwnResultView {
   sittingId: string;
@@ -44,10 +42,7 @@ export const readResult = defineVerb({
   async run({ actor, input, tx, found, authorize }): Promise<OwnResultView> {
     const row = found(await selectOwnResult(tx, actor.schoolId, actor.personId, input.sittingId));
     authorize({ schoolId: row.schoolId, studentId: row.studentId });
-    const { accommodationId, heldPoints, heldVersionNumber, before } = row;
-    const modifications = await loadModifications(tx, actor.schoolId, [accommodationId]);
-    const modification = accommodationId === null ? undefined : modifications.get(accommodationId);
-    const rubric = rubricSchema.parse(row.rubric);
+    const { heldPoints, heldVersionNumber, before } = row;
     const now = { status: row.status, score: row.scorePoints, total: row.totalPoints };
     const corrected = isCorrected({ ...now, before });
     return {
@@ -67,7 +62,7 @@ export const readResult = defineVerb({
       predicted: row.predictedPoints,
       measuredAt: row.measuredAt?.toISOString() ?? null,
       task: taskSchema.parse(row.task),
-      rubric: modification ? modifyRubric(rubric, modification) : rubric,
+      rubric: await toldRubric(tx, actor.schoolId, row),
       policies: rubricFormSchema.parse(row.form).policies,
       sheet: scoreSheetSchema.nullable().parse(row.sheet),
       ownSheet: scoreSheetSchema.nullable().parse(row.ownSheet),

@@ -1,7 +1,9 @@
 import 'server-only';
 import type { Transaction } from '@/db/client';
-import { selectOwnAttempt, selectOwnEvents } from '@/db/queries/own';
+import { selectOwnAttempt, selectOwnEvents, selectOwnResult } from '@/db/queries/own';
+import type { Actor } from '@/lib/auth/actor';
 import { ownSittingInput } from '@/lib/contracts/own';
+import { scoreSheetSchema } from '@/lib/contracts/results';
 import { explainScore, type ScoreExplanation } from '@/lib/practicals/explain-score';
 import { type OwnEvent, type OwnRecord, ownRecordOf } from '@/lib/practicals/own-record';
 import { type Task, taskSchema } from '@/lib/practicals/task';
@@ -13,6 +15,7 @@ import { sheetUnder } from '../pricing/price-work';
 import { defineVerb } from '../verb';
 import { stageOf, type TaskStage } from './list-tasks';
 import { ownEventOf } from './own-event';
+import { toldRubric } from './told-rubric';
 
 /** What locked readings come to by what prices this attempt: the figure that the result will stand beside. */
 export interface OwnPrediction {
@@ -65,7 +68,10 @@ export const readTask = defineVerb({
       rubric: rubricSchema.parse(row.rubric),
       policies: rubricFormSchema.parse(row.form).policies,
       events,
-      prediction: await predictionOf(tx, actor.schoolId, attemptId, record),
+      prediction:
+        row.toldAttempt === attemptNumber
+          ? await toldPrediction(tx, actor, sittingId, record)
+          : await predictionOf(tx, actor.schoolId, attemptId, record),
     };
   },
 });
@@ -85,4 +91,18 @@ async function predictionOf(
     rubric,
     explanation: explainScore(rubric, sheetUnder(pricing, attempt), 0),
   };
+}
+
+/** Once a result is out the prediction is the one it was told beside, whatever the sitting was moved to since. */
+async function toldPrediction(
+  tx: Transaction,
+  { schoolId, personId }: Actor,
+  sittingId: string,
+  { derived: { lock } }: OwnRecord,
+): Promise<OwnPrediction | null> {
+  const told = await selectOwnResult(tx, schoolId, personId, sittingId);
+  const sheet = scoreSheetSchema.nullable().parse(told?.ownSheet ?? null);
+  if (!lock || !told || !sheet) return null;
+  const rubric = await toldRubric(tx, schoolId, told);
+  return { receipt: lock.receipt, rubric, explanation: explainScore(rubric, sheet, 0) };
 }

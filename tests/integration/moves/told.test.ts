@@ -4,6 +4,7 @@ import { exportGrades, exportSizes } from '@/lib/data/gradebook/export-files';
 import { readGradebook } from '@/lib/data/gradebook/read-gradebook';
 import { listTasks } from '@/lib/data/own/list-tasks';
 import { readResult } from '@/lib/data/own/read-result';
+import { readTask } from '@/lib/data/own/read-task';
 import { undoMove } from '@/lib/data/sittings/undo-move';
 import { explainScore } from '@/lib/practicals/explain-score';
 import { modifyRubric } from '@/lib/scoring/modification';
@@ -49,6 +50,24 @@ describe('after a move, a student is told', () => {
       before: null,
     });
     expect(value(await listTasks(students[1], {}))).toMatchObject([{ scoreChanged: false }]);
+  });
+
+  test('nothing by the task either: its prices and the prediction stay those that were told', async () => {
+    const stage = await stageRound();
+    const { teacher, students, sittingId, attempts, practical } = stage;
+    await lockPrediction(students[0], sittingId, attempts[0], practical.rubric, SHORT);
+    await markPieces(teacher, sittingId, attempts[0], practical.rubric, SHORT);
+    await markPieces(teacher, sittingId, attempts[1], practical.rubric);
+    await publish(stage);
+    const before = value(await readTask(students[0], { sittingId }));
+    value(await move(stage, await addVersion(stage, 2, dearer)));
+    expect(value(await readTask(students[0], { sittingId }))).toEqual(before);
+    const { predicted } = value(await readResult(students[0], { sittingId }));
+    expect(before).toMatchObject({ versionNumber: 1, prediction: { explanation: { score: predicted } } });
+    await publish(stage);
+    const after = value(await readTask(students[0], { sittingId }));
+    expect(after.versionNumber).toBe(2);
+    expect(after.prediction?.explanation.score).toBeLessThan(Number(predicted));
   });
 
   test('nothing when nobody was to drop and nobody gained', async () => {
